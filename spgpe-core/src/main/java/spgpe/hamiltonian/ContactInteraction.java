@@ -1,0 +1,156 @@
+package spgpe.hamiltonian;
+
+import java.util.Arrays;
+import spgpe.internal.check.Check;
+import spgpe.projector.CoherentRegion;
+import spgpe.projector.PointBlock;
+
+/**
+ * Contact interaction: K = integral of sum over j, k of (g_jk/2) |psi_j|<sup>2</sup>
+ * |psi_k|<sup>2</sup>, force f_j = (sum over k of g_jk |psi_k|<sup>2</sup>) psi_j. Immutable and
+ * thread-safe.
+ */
+public final class ContactInteraction implements LocalTerm {
+  private final double[][] couplings;
+
+  private ContactInteraction(double[][] couplings) {
+    this.couplings = couplings;
+  }
+
+  /**
+   * One component.
+   *
+   * @param g coupling, finite
+   * @return the term
+   * @throws IllegalArgumentException if g is not finite
+   */
+  public static ContactInteraction of(double g) {
+    return ofMatrix(new double[][] {{g}});
+  }
+
+  /**
+   * Two components with equal intra-component couplings.
+   *
+   * @param intra g_11 = g_22, finite
+   * @param inter g_12, finite
+   * @return the term
+   * @throws IllegalArgumentException if a value is not finite
+   */
+  public static ContactInteraction ofPair(double intra, double inter) {
+    return ofMatrix(new double[][] {{intra, inter}, {inter, intra}});
+  }
+
+  /**
+   * Any number of components.
+   *
+   * @param g symmetric matrix g_jk of finite numbers
+   * @return the term
+   * @throws IllegalArgumentException if the matrix is not square, symmetric and finite
+   */
+  public static ContactInteraction ofMatrix(double[][] g) {
+    int n = g.length;
+    Check.argument(n >= 1, "interaction matrix must have at least one row");
+    double[][] copy = new double[n][];
+    for (int j = 0; j < n; j++) {
+      Check.argument(
+          g[j].length == n, "interaction matrix must be square: rows=%s, columns=%s", n, g[j].length);
+      copy[j] = g[j].clone();
+      for (int k = 0; k < n; k++) {
+        Check.finite(g[j][k], "interaction g");
+        Check.argument(
+            g[j][k] == g[k][j],
+            "interaction matrix must be symmetric: g[%s][%s]=%s, g[%s][%s]=%s",
+            j, k, g[j][k], k, j, g[k][j]);
+      }
+    }
+    return new ContactInteraction(copy);
+  }
+
+  @Override
+  public void check(int components, CoherentRegion region) {
+    Check.argument(
+        couplings.length == components,
+        "interaction matrix must have a row for each component: rows=%s, components=%s",
+        couplings.length, components);
+  }
+
+  @Override
+  public int forceDegree() {
+    return 3;
+  }
+
+  @Override
+  public void addForce(double time, PointBlock block) {
+    if (couplings.length == 2) {
+      addForceOfPair(block);
+      return;
+    }
+    for (int j = 0; j < couplings.length; j++) {
+      for (int k = 0; k < couplings.length; k++) {
+        if (couplings[j][k] != 0) {
+          addForceOn(block, j, k, couplings[j][k]);
+        }
+      }
+    }
+  }
+
+  private static void addForceOn(PointBlock block, int j, int k, double g) {
+    double[] re = block.psiRe(j);
+    double[] im = block.psiIm(j);
+    double[] otherRe = block.psiRe(k);
+    double[] otherIm = block.psiIm(k);
+    double[] forceRe = block.resultRe(j);
+    double[] forceIm = block.resultIm(j);
+    for (int i = block.begin(), end = block.end(); i < end; i++) {
+      double shift = g * (otherRe[i] * otherRe[i] + otherIm[i] * otherIm[i]);
+      forceRe[i] += shift * re[i];
+      forceIm[i] += shift * im[i];
+    }
+  }
+
+  private void addForceOfPair(PointBlock block) {
+    double g11 = couplings[0][0];
+    double g12 = couplings[0][1];
+    double g22 = couplings[1][1];
+    double[] re1 = block.psiRe(0);
+    double[] im1 = block.psiIm(0);
+    double[] re2 = block.psiRe(1);
+    double[] im2 = block.psiIm(1);
+    double[] forceRe1 = block.resultRe(0);
+    double[] forceIm1 = block.resultIm(0);
+    double[] forceRe2 = block.resultRe(1);
+    double[] forceIm2 = block.resultIm(1);
+    for (int i = block.begin(), end = block.end(); i < end; i++) {
+      double n1 = re1[i] * re1[i] + im1[i] * im1[i];
+      double n2 = re2[i] * re2[i] + im2[i] * im2[i];
+      double shift1 = g11 * n1 + g12 * n2;
+      double shift2 = g12 * n1 + g22 * n2;
+      forceRe1[i] += shift1 * re1[i];
+      forceIm1[i] += shift1 * im1[i];
+      forceRe2[i] += shift2 * re2[i];
+      forceIm2[i] += shift2 * im2[i];
+    }
+  }
+
+  @Override
+  public void addEnergyDensity(double time, PointBlock block, double[] density) {
+    for (int j = 0; j < couplings.length; j++) {
+      for (int k = 0; k < couplings.length; k++) {
+        double half = couplings[j][k] / 2;
+        double[] reJ = block.psiRe(j);
+        double[] imJ = block.psiIm(j);
+        double[] reK = block.psiRe(k);
+        double[] imK = block.psiIm(k);
+        for (int i = block.begin(), end = block.end(); i < end; i++) {
+          density[i] +=
+              half * (reJ[i] * reJ[i] + imJ[i] * imJ[i]) * (reK[i] * reK[i] + imK[i] * imK[i]);
+        }
+      }
+    }
+  }
+
+  @Override
+  public String description() {
+    return "ContactInteraction(g=" + Arrays.deepToString(couplings) + ")";
+  }
+}

@@ -1,0 +1,52 @@
+package spgpe.integrate;
+
+import spgpe.model.Model;
+import spgpe.reservoir.NoiseGenerator;
+
+/**
+ * A numerical scheme with its settings: an immutable recipe that makes {@link Stepper}s.
+ *
+ * <p>Implementations are immutable and thread-safe.
+ */
+public interface Integrator {
+  /**
+   * Time step.
+   *
+   * @return dt
+   */
+  double step();
+
+  /**
+   * Order of the global error of a run without noise.
+   *
+   * @return order
+   */
+  int deterministicOrder();
+
+  /**
+   * Evaluations of the nonlinear force in one step.
+   *
+   * @return count
+   */
+  int forceEvaluationsPerStep();
+
+  /**
+   * Largest step at which the scheme is stable for a model.
+   *
+   * @param model the model
+   * @return upper bound of dt; infinite if there is none
+   */
+  double largestStableStep(Model model);
+
+  /**
+   * Makes a stepper with its own scratch memory, for one thread.
+   *
+   * @param model the model
+   * @param noise generator of the same region, components and lanes; every lane assigned before the
+   *     first step
+   * @param lanes realisations advanced together
+   * @return the stepper
+   * @throws IllegalArgumentException if the step exceeds {@link #largestStableStep}
+   */
+  Stepper bind(Model model, NoiseGenerator noise, int lanes);
+}

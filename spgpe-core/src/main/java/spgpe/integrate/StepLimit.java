@@ -1,0 +1,32 @@
+package spgpe.integrate;
+
+import spgpe.internal.check.Check;
+import spgpe.model.Model;
+
+/**
+ * The resonance that ends all exponential schemes: unstable once dt (eps_max + 2 mu) &gt; pi, where
+ * eps_max is the largest energy of the linear part and mu stands for the mean field g n. For
+ * split-step schemes see Weideman and Herbst, SIAM J. Numer. Anal. 23, 485 (1986); measured for the
+ * other schemes, docs/validation.md.
+ */
+final class StepLimit {
+  private StepLimit() {}
+
+  static double ofExponentialScheme(Model model) {
+    double mu = 0;
+    if (model.chemicalPotentialActsLocally()) {
+      for (int c = 0; c < model.components(); c++) {
+        mu = Math.max(mu, Math.abs(model.reservoir().chemicalPotential(c)));
+      }
+    }
+    return Math.PI / (model.linearPart().spectralBound() + 2 * mu);
+  }
+
+  static void require(Integrator integrator, Model model) {
+    double limit = integrator.largestStableStep(model);
+    Check.argument(
+        integrator.step() < limit,
+        "time step must stay below pi/(eps_max + 2 mu): step=%s, limit=%s; use a smaller step or a"
+            + " lower cutoff", integrator.step(), limit);
+  }
+}

@@ -1,0 +1,5 @@
+/** Small dense complex matrices; not for use outside this project. */
+@NullMarked
+package spgpe.internal.linear;
+
+import org.jspecify.annotations.NullMarked;

@@ -1,0 +1,143 @@
+package spgpe.projector;
+
+import spgpe.grid.PeriodicGrid;
+
+/**
+ * A block of positions handed to a {@link LocalOperation}: psi and the result arrays.
+ *
+ * <p>Work on the elements {@code begin() <= i < end()} of the arrays. A loop that treats all
+ * elements alike need not know about points and lanes; an operation that depends on the position
+ * finds the grid point of element i with {@link #pointOf}. Live arrays; valid during the call only.
+ */
+public final class PointBlock {
+  private final PeriodicGrid grid;
+  private final int lanes;
+  private final double[][] psiRe;
+  private final double[][] psiIm;
+  private final double[][] resultRe;
+  private final double[][] resultIm;
+  private final int begin;
+  private final int end;
+  private final int firstPoint;
+  private final int pointStride;
+
+  PointBlock(Field psi, Field result, int begin, int end, int firstPoint, int pointStride) {
+    this.grid = psi.grid();
+    this.lanes = psi.lanes();
+    int components = psi.components();
+    this.psiRe = new double[components][];
+    this.psiIm = new double[components][];
+    this.resultRe = new double[components][];
+    this.resultIm = new double[components][];
+    for (int c = 0; c < components; c++) {
+      psiRe[c] = psi.re(c);
+      psiIm[c] = psi.im(c);
+      resultRe[c] = result.re(c);
+      resultIm[c] = result.im(c);
+    }
+    this.begin = begin;
+    this.end = end;
+    this.firstPoint = firstPoint;
+    this.pointStride = pointStride;
+  }
+
+  /**
+   * A block of all points of a field, for use outside a {@link ModeTransform}, such as the gradient
+   * test of a user's own term.
+   *
+   * @param psi the field
+   * @param result what the operation adds to
+   * @return the block
+   * @throws IllegalArgumentException if the shapes differ
+   */
+  public static PointBlock ofAll(Field psi, Field result) {
+    result.requireShape(psi.grid(), psi.components(), psi.lanes());
+    return new PointBlock(psi, result, 0, psi.grid().points() * psi.lanes(), 0, 1);
+  }
+
+  /**
+   * The grid the points belong to.
+   *
+   * @return the grid
+   */
+  public PeriodicGrid grid() {
+    return grid;
+  }
+
+  /**
+   * Number of components.
+   *
+   * @return components
+   */
+  public int components() {
+    return psiRe.length;
+  }
+
+  /**
+   * First element of the block.
+   *
+   * @return array index
+   */
+  public int begin() {
+    return begin;
+  }
+
+  /**
+   * One past the last element of the block.
+   *
+   * @return array index
+   */
+  public int end() {
+    return end;
+  }
+
+  /**
+   * Real parts of psi; read only.
+   *
+   * @param component component index
+   * @return live array
+   */
+  public double[] psiRe(int component) {
+    return psiRe[component];
+  }
+
+  /**
+   * Imaginary parts of psi; read only.
+   *
+   * @param component component index
+   * @return live array
+   */
+  public double[] psiIm(int component) {
+    return psiIm[component];
+  }
+
+  /**
+   * Real parts of the result; add to them.
+   *
+   * @param component component index
+   * @return live array
+   */
+  public double[] resultRe(int component) {
+    return resultRe[component];
+  }
+
+  /**
+   * Imaginary parts of the result; add to them.
+   *
+   * @param component component index
+   * @return live array
+   */
+  public double[] resultIm(int component) {
+    return resultIm[component];
+  }
+
+  /**
+   * Grid point of an element.
+   *
+   * @param element array index within the block
+   * @return point index of the grid
+   */
+  public int pointOf(int element) {
+    return firstPoint + (element - begin) / lanes * pointStride;
+  }
+}

@@ -1,0 +1,5 @@
+/** Trajectories and ensembles: schedules, stop rules, observables, accumulators, progress. */
+@NullMarked
+package spgpe.run;
+
+import org.jspecify.annotations.NullMarked;
