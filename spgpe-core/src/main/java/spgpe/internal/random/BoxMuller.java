@@ -16,6 +16,24 @@ public final class BoxMuller {
   /** Fraction bits of sqrt(2): mantissas above it are halved. */
   private static final long SQRT2_FRACTION = 0x6a09e667f3bcdL;
 
+  private static final double S3 = -1.0 / 6;
+  private static final double S5 = 1.0 / 120;
+  private static final double S7 = -1.0 / 5040;
+  private static final double S9 = 1.0 / 362880;
+  private static final double S11 = -1.0 / 39916800;
+  private static final double S13 = 1.0 / 6227020800.0;
+  private static final double S15 = -1.0 / 1307674368000.0;
+  private static final double S17 = 1.0 / 355687428096000.0;
+
+  private static final double C2 = -1.0 / 2;
+  private static final double C4 = 1.0 / 24;
+  private static final double C6 = -1.0 / 720;
+  private static final double C8 = 1.0 / 40320;
+  private static final double C10 = -1.0 / 3628800;
+  private static final double C12 = 1.0 / 479001600;
+  private static final double C14 = -1.0 / 87178291200.0;
+  private static final double C16 = 1.0 / 20922789888000.0;
+
   private static final double[] QUARTER_COS = {1, 0, -1, 0};
   private static final double[] QUARTER_SIN = {0, 1, 0, -1};
 
@@ -72,7 +90,7 @@ public final class BoxMuller {
       double q = t * t;
       double series =
           1 + q * (1.0 / 3 + q * (1.0 / 5 + q * (1.0 / 7 + q * (1.0 / 9 + q * (1.0 / 11
-              + q * (1.0 / 13 + q * (1.0 / 15 + q * (1.0 / 17 + q * (1.0 / 19 + q / 21)))))))));
+              + q * (1.0 / 13 + q * (1.0 / 15 + q * (1.0 / 17 + q * (1.0 / 19 + q * (1.0 / 21))))))))));
       double log = exponent[e] * LN2_HIGH + (exponent[e] * LN2_LOW + 2 * t * series);
       out[e] = Math.sqrt(-2 * log);
     }
@@ -83,11 +101,11 @@ public final class BoxMuller {
       double x = angle[e];
       double q = x * x;
       sine[e] =
-          x * (1 - q / 6 * (1 - q / 20 * (1 - q / 42 * (1 - q / 72 * (1 - q / 110
-              * (1 - q / 156 * (1 - q / 210 * (1 - q / 272))))))));
+          x * (1 + q * (S3 + q * (S5 + q * (S7 + q * (S9 + q * (S11 + q * (S13 + q * (S15
+              + q * S17))))))));
       cosine[e] =
-          1 - q / 2 * (1 - q / 12 * (1 - q / 30 * (1 - q / 56 * (1 - q / 90
-              * (1 - q / 132 * (1 - q / 182 * (1 - q / 240)))))));
+          1 + q * (C2 + q * (C4 + q * (C6 + q * (C8 + q * (C10 + q * (C12 + q * (C14
+              + q * C16)))))));
     }
   }
 

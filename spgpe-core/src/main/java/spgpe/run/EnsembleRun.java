@@ -1,0 +1,180 @@
+package spgpe.run;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.TreeMap;
+import java.util.concurrent.ConcurrentLinkedQueue;
+import java.util.concurrent.CountDownLatch;
+import java.util.concurrent.Executor;
+import java.util.concurrent.RejectedExecutionException;
+import java.util.concurrent.atomic.AtomicBoolean;
+import java.util.concurrent.atomic.AtomicReference;
+import org.jspecify.annotations.Nullable;
+import spgpe.projector.Amplitudes;
+
+/** One execution of an ensemble plan. */
+final class EnsembleRun {
+  private final Ensemble plan;
+  private final long lastStep;
+  private final List<Channel<?>> channels = new ArrayList<>();
+  private final ConcurrentLinkedQueue<BlockRunner> idle = new ConcurrentLinkedQueue<>();
+  private final AtomicBoolean stop = new AtomicBoolean();
+  private final AtomicReference<@Nullable Failure> failure = new AtomicReference<>();
+  private final TreeMap<Long, TrajectoryEnd> ends = new TreeMap<>();
+  private final Object lock = new Object();
+  private long stopped;
+  private long diverged;
+  private @Nullable Amplitudes lastState;
+
+  private record Failure(String where, Throwable cause) {}
+
+  EnsembleRun(Ensemble plan) {
+    this.plan = plan;
+    double dt = plan.integrator().step();
+    this.lastStep = Schedule.wholeSteps(plan.until(), dt, "end time");
+    for (Recording<?> recording : plan.recordings()) {
+      channels.add(
+          Channel.of(recording, dt, lastStep, recording.observable().size(plan.model())));
+    }
+    plan.initialState();
+    plan.streams();
+    plan.count();
+  }
+
+  EnsembleResult execute(Executor executor) {
+    idle.add(newRunner()); // contradictions show here, in the caller's thread
+    long blocks = (plan.count() + plan.lanes() - 1) / plan.lanes();
+    int parts = (int) Math.min(blocks, Integer.MAX_VALUE);
+    CountDownLatch pending = new CountDownLatch(parts);
+    for (int part = 0; part < parts; part++) {
+      long block = part;
+      try {
+        executor.execute(
+            () -> {
+              try {
+                runBlock(block);
+              } finally {
+                pending.countDown();
+              }
+            });
+      } catch (RejectedExecutionException e) {
+        fail("the executor refused a task", e);
+        pending.countDown();
+      }
+    }
+    await(pending);
+    Failure failed = failure.get();
+    if (failed != null) {
+      throw new RunFailedException(
+          failed.where() + ": " + failed.cause().getMessage(), failed.cause(), result());
+    }
+    return result();
+  }
+
+  private void await(CountDownLatch pending) {
+    boolean interrupted = false;
+    while (true) {
+      try {
+        pending.await();
+        break;
+      } catch (InterruptedException e) {
+        interrupted = true;
+        stop.set(true);
+      }
+    }
+    if (interrupted) {
+      Thread.currentThread().interrupt();
+    }
+  }
+
+  private BlockRunner newRunner() {
+    return new BlockRunner(
+        plan.model(), plan.initialState(), plan.integrator(), plan.streams(), channels,
+        plan.stopRules(), lastStep, (int) Math.min(plan.lanes(), plan.count()));
+  }
+
+  private boolean isStopped() {
+    return stop.get() || plan.cancelled().getAsBoolean();
+  }
+
+  private void runBlock(long block) {
+    if (stop.get()) {
+      return;
+    }
+    BlockRunner runner = null;
+    try {
+      runner = idle.poll();
+      if (runner == null) {
+        runner = newRunner();
+      }
+      long first = plan.first() + block * plan.lanes();
+      int count = (int) Math.min(plan.lanes(), plan.first() + plan.count() - first);
+      runner.run(first, count, this::isStopped, new Collector());
+      idle.add(runner);
+    } catch (RuntimeException | Error e) {
+      fail(runner == null ? "making a workspace failed" : runner.position(), e);
+    }
+  }
+
+  private void fail(String where, Throwable cause) {
+    failure.compareAndSet(null, new Failure(where, cause));
+    stop.set(true);
+  }
+
+  private EnsembleResult result() {
+    synchronized (lock) {
+      return new EnsembleResult(plan.count(), new TreeMap<>(ends), List.copyOf(channels));
+    }
+  }
+
+  /** The last state handed in; the final state of a run of one trajectory. */
+  @Nullable Amplitudes lastState() {
+    synchronized (lock) {
+      return lastState;
+    }
+  }
+
+  private final class Collector implements BlockRunner.Sink {
+    @Override
+    public void ended(TrajectoryEnd end, List<Channel.Probe<?>> probes, Amplitudes state) {
+      for (Channel.Probe<?> probe : probes) {
+        probe.accumulator().finish(end);
+      }
+      synchronized (lock) {
+        ends.put(end.trajectory(), end);
+        stopped += end.isStopped() ? 1 : 0;
+        if (plan.count() == 1) {
+          lastState = state.copy();
+        }
+        deliver(end, probes);
+      }
+    }
+
+    @Override
+    public void diverged(DivergedException found, List<Channel.Probe<?>> probes) {
+      if (!plan.keepsGoing()) {
+        throw found;
+      }
+      TrajectoryEnd end =
+          new TrajectoryEnd(
+              found.trajectory(), found.time(), TrajectoryEnd.Reason.DIVERGED,
+              DivergedException.describe(
+                  found.trajectory(), found.time(), found.component(), found.lastGoodTime()));
+      for (Channel.Probe<?> probe : probes) {
+        probe.accumulator().finish(end);
+      }
+      synchronized (lock) {
+        ends.put(end.trajectory(), end);
+        diverged++;
+        deliver(end, probes);
+      }
+    }
+
+    private void deliver(TrajectoryEnd end, List<Channel.Probe<?>> probes) {
+      for (Channel.Probe<?> probe : probes) {
+        probe.deliver(end.trajectory());
+      }
+      plan.listener().progressed(new Progress(ends.size(), plan.count(), stopped, diverged));
+    }
+  }
+}

@@ -1,0 +1,30 @@
+package spgpe.run;
+
+/**
+ * How a trajectory ended. Immutable and thread-safe.
+ *
+ * @param trajectory index of the trajectory
+ * @param time time at which it ended (for a diverged one: when that was found)
+ * @param reason why
+ * @param detail name of the stop rule, or what diverged; empty at the end of the run
+ */
+public record TrajectoryEnd(long trajectory, double time, Reason reason, String detail) {
+  /** Why a trajectory ended. */
+  public enum Reason {
+    /** The end time was reached. */
+    END_OF_RUN,
+    /** A stop rule applied. */
+    STOPPED,
+    /** An amplitude became NaN or infinite. */
+    DIVERGED
+  }
+
+  /**
+   * Whether a stop rule applied.
+   *
+   * @return true for {@link Reason#STOPPED}
+   */
+  public boolean isStopped() {
+    return reason == Reason.STOPPED;
+  }
+}
