@@ -81,8 +81,7 @@ public final class Confinement {
    * @return a_perp or a_z
    */
   public Length oscillatorLength() {
-    return new Length(
-        Math.sqrt(Constants.HBAR / (species.massKilograms() * frequency.angular())));
+    return new Length(Math.sqrt(Constants.HBAR / (species.massKilograms() * frequency.angular())));
   }
 
   /**
@@ -129,7 +128,8 @@ public final class Confinement {
         Math.abs(shift) <= 0.5,
         "scattering length too large for a quasi-1D coupling: |C a/(sqrt(2) a_perp)| must be"
             + " <= 0.5: value=%s, a=%s a0; lower the trap frequency or the scattering length",
-        shift, a / Constants.BOHR_RADIUS);
+        shift,
+        a / Constants.BOHR_RADIUS);
     return 1 / (1 - shift);
   }
 

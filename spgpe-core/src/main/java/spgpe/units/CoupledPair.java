@@ -45,7 +45,8 @@ public final class CoupledPair {
     this.density = Check.notNull(density, "density").positive(dimension);
     this.coherent = Check.notNull(coherent, "coherent").positiveJoules("coherent coupling J");
     double kappa = Check.notNull(biquadratic, "biquadratic").times(density).joules();
-    this.lambdaSquared = Check.notNegative(kappa, "kappa n in J") / this.coherent;
+    this.lambdaSquared =
+        Check.finite(Check.notNegative(kappa, "kappa n in J") / this.coherent, "kappa n/J");
     this.meanField = intra.times(density).positiveJoules("g n");
     double other = Check.notNull(inter, "inter").times(density).joules();
     this.sum = meanField + other;
@@ -94,8 +95,7 @@ public final class CoupledPair {
    * @return lambda^2 J/n
    * @throws IllegalArgumentException if a value is out of range
    */
-  public static Coupling biquadraticFor(
-      double lambdaSquared, Energy coherent, Density density) {
+  public static Coupling biquadraticFor(double lambdaSquared, Energy coherent, Density density) {
     Check.notNegative(lambdaSquared, "lambdaSquared");
     int dimension = Check.notNull(density, "density").dimension();
     return new Coupling(
@@ -115,7 +115,8 @@ public final class CoupledPair {
   public static double bubbleFactor(double lambda) {
     Check.argument(
         lambda >= 1 && Double.isFinite(lambda),
-        "lambda must be finite and >= 1 (else there is no barrier): lambda=%s", lambda);
+        "lambda must be finite and >= 1 (else there is no barrier): lambda=%s",
+        lambda);
     double sinh = Math.sqrt(lambda - 1) * Math.sqrt(lambda + 1);
     double a = Math.log1p(lambda - 1 + sinh);
     if (a > 0.2) {
@@ -165,7 +166,8 @@ public final class CoupledPair {
   }
 
   /**
-   * The density per component of the stable state (relative phase 0) at the same chemical potential.
+   * The density per component of the stable state (relative phase 0) at the same chemical
+   * potential.
    *
    * @return n + 2 J/(g + g12)
    */

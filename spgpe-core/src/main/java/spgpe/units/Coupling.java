@@ -43,8 +43,7 @@ public record Coupling(double jouleMetreToD, int dimension) {
    * @throws IllegalArgumentException if the dimensions differ
    */
   public Energy times(Density density) {
-    Density.requireDimension(
-        Check.notNull(density, "density").dimension(), dimension, "density");
+    Density.requireDimension(Check.notNull(density, "density").dimension(), dimension, "density");
     return new Energy(jouleMetreToD * density.perMetreToD());
   }
 

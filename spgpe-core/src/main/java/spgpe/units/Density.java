@@ -58,6 +58,8 @@ public record Density(double perMetreToD, int dimension) {
     Check.argument(
         actual == expected,
         "%s must belong to dimension %s: dimension=%s (do not mix 1D, 2D and 3D quantities)",
-        name, expected, actual);
+        name,
+        expected,
+        actual);
   }
 }

@@ -38,6 +38,7 @@ public record EventRate(double perSecondPerMetreToD, int dimension) {
    */
   public EventRate over(Length length) {
     Density.requireDimension(dimension, 1, "rate per length");
-    return new EventRate(perSecondPerMetreToD * Check.notNull(length, "length").positiveMetres("length"), 0);
+    return new EventRate(
+        perSecondPerMetreToD * Check.notNull(length, "length").positiveMetres("length"), 0);
   }
 }

@@ -128,9 +128,7 @@ public sealed interface Geometry {
               ? Math.cbrt(Math.pow(3 * atoms * g * w * Math.sqrt(mass / 32), 2))
               : w * Math.sqrt(atoms * g * mass / Math.PI);
       return new Cloud(
-          new Energy(mu),
-          new Density(mu / g, dimension),
-          new Length(Math.sqrt(2 * mu / mass) / w));
+          new Energy(mu), new Density(mu / g, dimension), new Length(Math.sqrt(2 * mu / mass) / w));
     }
   }
 

@@ -53,15 +53,15 @@ public record Modulation(double depth, Frequency frequency) {
   public static Modulation forBiquadratic(
       Coupling kappa, Coupling intra, Coupling inter, Frequency frequency) {
     double unit = halfDifference(intra, inter);
-    Density.requireDimension(
-        Check.notNull(kappa, "kappa").dimension(), intra.dimension(), "kappa");
+    Density.requireDimension(Check.notNull(kappa, "kappa").dimension(), intra.dimension(), "kappa");
     Check.positive(unit, "(g - g12)/2 in J m^d");
     double wanted = kappa.jouleMetreToD() / unit;
     double low = 0;
     double high = BESSEL_MINIMUM;
     Check.argument(
         wanted >= 0 && wanted <= SpecialFunctions.oneMinusBesselJ0(high),
-        "modulation reaches kappa/(g - g12) in 0..0.701 only: kappa/(g - g12)=%s", wanted / 2);
+        "modulation reaches kappa/(g - g12) in 0..0.701 only: kappa/(g - g12)=%s",
+        wanted / 2);
     // 200 halvings exhaust the doubles between the ends, also near zero
     for (int i = 0; i < 200; i++) {
       double middle = 0.5 * (low + high);
@@ -150,8 +150,7 @@ public record Modulation(double depth, Frequency frequency) {
     double half = frequency.quantum().joules() / 2;
     // hypot(half, s) - s without cancellation
     return new Energy(
-        half * half / (Math.hypot(half, s) + s)
-            + 2 * Check.notNull(coherent, "coherent").joules());
+        half * half / (Math.hypot(half, s) + s) + 2 * Check.notNull(coherent, "coherent").joules());
   }
 
   /**
@@ -164,8 +163,7 @@ public record Modulation(double depth, Frequency frequency) {
   public Energy resonanceGrowth(Energy stiffness) {
     return new Energy(
         Math.abs(
-            Check.notNull(stiffness, "stiffness").joules()
-                * SpecialFunctions.besselJ1(4 * depth)));
+            Check.notNull(stiffness, "stiffness").joules() * SpecialFunctions.besselJ1(4 * depth)));
   }
 
   private static double halfDifference(Coupling intra, Coupling inter) {

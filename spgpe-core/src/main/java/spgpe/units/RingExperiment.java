@@ -106,13 +106,7 @@ public final class RingExperiment {
         "scattering length in a0 (repulsive)");
     range(Check.notNull(temperature, "temperature").kelvin(), 1e-12, 1e-3, "temperature in K");
     return new RingExperiment(
-        species,
-        ring,
-        transverse,
-        atomsPerComponent,
-        scatteringLength,
-        temperature,
-        new Options());
+        species, ring, transverse, atomsPerComponent, scatteringLength, temperature, new Options());
   }
 
   /**
@@ -134,49 +128,58 @@ public final class RingExperiment {
   /**
    * This recipe with a coherent coupling J, half the splitting of two bare levels (default 0).
    *
-   * @param coherent J, zero to h times 1 MHz; {@link CoupledPair#coherentFromSplitting} takes the
-   *     Rabi splitting
+   * @param coherent J, zero or h times 1 mHz to h times 1 MHz; {@link
+   *     CoupledPair#coherentFromSplitting} takes the Rabi splitting
    * @return the new recipe
    * @throws IllegalArgumentException if the value lies outside its range
    */
   public RingExperiment withCoherentCoupling(Energy coherent) {
-    range(Check.notNull(coherent, "coherent").hertz(), 0, 1e6, "coherent coupling J/h in Hz");
+    if (Check.notNull(coherent, "coherent").joules() != 0) {
+      range(coherent.hertz(), 1e-3, 1e6, "coherent coupling J/h in Hz");
+    }
     return with(o -> o.coherent = coherent);
   }
 
   /**
    * This recipe with a given biquadratic coupling (default 0).
    *
-   * @param biquadratic kappa in J m, at least zero; {@link CoupledPair#biquadraticFor} takes
-   *     lambda^2
+   * @param biquadratic kappa in J m, at least zero, kappa n up to h times 10 MHz; {@link
+   *     CoupledPair#biquadraticFor} takes lambda^2
    * @return the new recipe
-   * @throws IllegalArgumentException if kappa is negative or not one-dimensional, or the recipe has
-   *     a modulation, which makes a kappa of its own
+   * @throws IllegalArgumentException if kappa is out of range or not one-dimensional, or the recipe
+   *     has a modulation, which makes a kappa of its own
    */
   public RingExperiment withBiquadratic(Coupling biquadratic) {
     Density.requireDimension(
         Check.notNull(biquadratic, "biquadratic").dimension(), 1, "biquadratic coupling");
-    Check.notNegative(biquadratic.jouleMetreToD(), "biquadratic coupling kappa in J m");
+    range(biquadratic.times(density()).hertz(), 0, 1e7, "biquadratic coupling kappa n/h in Hz");
     Check.argument(
         options.modulation.isEmpty(),
         "give either a biquadratic coupling or a modulation: kappa=%s J m, %s",
-        biquadratic.jouleMetreToD(), options.modulation);
+        biquadratic.jouleMetreToD(),
+        options.modulation);
     return with(o -> o.biquadratic = biquadratic);
   }
 
   /**
    * This recipe with a modulated coherent coupling, whose average over the drive is simulated.
    *
-   * @param modulation drive
+   * @param modulation drive, frequency 1 Hz to 1 GHz
    * @return the new recipe
-   * @throws IllegalArgumentException if the recipe has a biquadratic coupling already
+   * @throws IllegalArgumentException if the frequency lies outside its range or the recipe has a
+   *     biquadratic coupling already
    */
   public RingExperiment withModulation(Modulation modulation) {
-    Check.notNull(modulation, "modulation");
+    range(
+        Check.notNull(modulation, "modulation").frequency().hertz(),
+        1,
+        1e9,
+        "drive frequency in Hz");
     Check.argument(
         options.biquadratic.jouleMetreToD() == 0,
         "give either a biquadratic coupling or a modulation: kappa=%s J m, %s",
-        options.biquadratic.jouleMetreToD(), modulation);
+        options.biquadratic.jouleMetreToD(),
+        modulation);
     return with(o -> o.modulation = Optional.of(modulation));
   }
 
@@ -304,6 +307,10 @@ public final class RingExperiment {
   private static void range(double value, double low, double high, String name) {
     Check.argument(
         value >= low && value <= high,
-        "%s must lie in %s..%s: value=%s; is it in the right unit?", name, low, high, value);
+        "%s must lie in %s..%s: value=%s; is it in the right unit?",
+        name,
+        low,
+        high,
+        value);
   }
 }

@@ -2,6 +2,7 @@ package spgpe.units;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
 
 /** Collects the verdicts of a {@link ScaledRing}. */
 final class RingVerdicts {
@@ -35,8 +36,7 @@ final class RingVerdicts {
             pair.lambdaSquared(),
             1.1,
             1,
-            "relative phase pi is metastable only above 1 (exact); the margin of 0.1"
-                + RULE));
+            "relative phase pi is metastable only above 1 (exact); the margin of 0.1" + RULE));
     double meanField = ring.gas().chemicalPotential().joules();
     verdicts.add(
         Verdict.atLeast(
@@ -59,7 +59,7 @@ final class RingVerdicts {
             ring.coherent(),
             0.01,
             0.1,
-            "the phase-only bubble energy is too large by 2 percent at 0.01, 8 at 0.05, 17 at 0.1"
+            "the phase-only bubble energy is too large by 2 percent at 0.01, 9 at 0.05, 17 at 0.1"
                 + " (lambda^2 = 2.25, own calculation); take the full saddle above"));
     verdicts.add(
         Verdict.atLeast(
@@ -67,7 +67,8 @@ final class RingVerdicts {
             ring.length() * inverse,
             20,
             6,
-            "the ring must hold a bubble, about 2/m_fv wide plus walls, and its surroundings" + RULE));
+            "the ring must hold a bubble, about 2/m_fv wide plus walls, and its surroundings"
+                + RULE));
     verdicts.add(
         Verdict.atLeast(
             "k_cut/m_fv",
@@ -77,17 +78,16 @@ final class RingVerdicts {
             "the kept modes must resolve the bubble wall" + RULE));
     verdicts.add(
         Verdict.atMost(
-            "phase variance T m/(m^2 n)",
+            "phase variance kB T/(n m_fv)",
             ring.temperature() / inverse,
             0.1,
             1,
-            "Gaussian variance of the relative phase in the metastable state, kB T/(n m_fv) in units"
-                + " hbar = m = 1; at 1 it spills over the barrier"
+            "Gaussian variance of the relative phase in the metastable state, in units hbar = m ="
+                + " 1; at 1 it spills over the barrier"
                 + RULE));
     pair.relativePhaseGap()
         .ifPresent(
-            gap ->
-                verdicts.add(Validity.classicalMode("relative-phase mode", gap, temperature)));
+            gap -> verdicts.add(Validity.classicalMode("relative-phase mode", gap, temperature)));
     pair.bubbleEnergy()
         .ifPresent(
             energy ->
@@ -97,8 +97,8 @@ final class RingVerdicts {
                         energy.joules() / temperature.energy().joules(),
                         8,
                         4,
-                        "below, the state decays while it is being prepared; far above, never during"
-                            + " a run (phase-only E_b)"
+                        "below, the state decays while it is being prepared; far above, never"
+                            + " during a run (phase-only E_b)"
                             + RULE)));
   }
 
@@ -106,10 +106,7 @@ final class RingVerdicts {
     double meanField = ring.gas().chemicalPotential().joules();
     double quantum = modulation.frequency().quantum().joules();
     Energy stiffness =
-        new Energy(
-            Math.max(
-                0,
-                meanField - lab.interCoupling().times(lab.density()).joules()));
+        new Energy(Math.max(0, meanField - lab.interCoupling().times(lab.density()).joules()));
     verdicts.add(
         Verdict.atLeast(
             "hbar w_drive/(g n)",
@@ -125,8 +122,7 @@ final class RingVerdicts {
             quantum / lab.confinement().frequency().quantum().joules(),
             0.5,
             2,
-            "the drive must not reach transverse motion; at 2 it hits the breathing mode"
-                + RULE));
+            "the drive must not reach transverse motion; at 2 it hits the breathing mode" + RULE));
     verdicts.add(resonance(modulation, stiffness));
   }
 
@@ -144,9 +140,10 @@ final class RingVerdicts {
         1,
         gamma > needed ? Double.POSITIVE_INFINITY : 1,
         String.format(
-            java.util.Locale.ROOT,
+            Locale.ROOT,
             "above 1 the drive heats kept modes parametrically unless gamma > %.3g (gamma = %.3g);"
                 + " limits: derived, see docs/theory.md",
-            needed, gamma));
+            needed,
+            gamma));
   }
 }

@@ -59,8 +59,7 @@ public final class ScaledRing {
             lab.intra(),
             lab.temperature(),
             chemicalPotential,
-            ThermalBath.cutoffEnergy(
-                chemicalPotential, lab.temperature(), lab.cutoffOccupation()));
+            ThermalBath.cutoffEnergy(chemicalPotential, lab.temperature(), lab.cutoffOccupation()));
     cutoffWavenumber = Math.sqrt(2 * units.toScaled(bath.cutoff()));
     double modes = Math.floor(cutoffWavenumber * length / (2 * Math.PI));
     Check.argument(
@@ -71,8 +70,7 @@ public final class ScaledRing {
     cutoffModes = (int) modes;
     pair =
         lab.coherent().joules() > 0
-            ? Optional.of(
-                CoupledPair.of(lab.species(), g1, g12, density, lab.coherent(), kappa))
+            ? Optional.of(CoupledPair.of(lab.species(), g1, g12, density, lab.coherent(), kappa))
             : Optional.empty();
     verdicts = List.copyOf(new RingVerdicts(lab, this).all());
   }
@@ -228,12 +226,21 @@ public final class ScaledRing {
         String.format(
             Locale.ROOT,
             "scaled: L=%.8g g=%.8g g12=%.8g J=%.8g kappa=%.8g mu=%.8g T=%.8g%n",
-            length, g, inter, coherent, biquadratic, mu, temperature));
+            length,
+            g,
+            inter,
+            coherent,
+            biquadratic,
+            mu,
+            temperature));
     text.append(
         String.format(
             Locale.ROOT,
             "cutoff: k=%.8g modes=%d points=%d; kinetic gamma=%.2g%n",
-            cutoffWavenumber, cutoffModes, gridPoints(), bath.growthRate()));
+            cutoffWavenumber,
+            cutoffModes,
+            gridPoints(),
+            bath.growthRate()));
     text.append(
         String.format(
             Locale.ROOT,

@@ -36,8 +36,7 @@ public final class ScaledUnits {
     Check.inRange(dimension, 1, 3, "dimension");
     this.dimension = dimension;
     this.energyUnit = Check.notNull(energyUnit, "energyUnit").positiveJoules("energy unit");
-    this.lengthUnit =
-        Constants.HBAR / Math.sqrt(species.massKilograms() * this.energyUnit);
+    this.lengthUnit = Constants.HBAR / Math.sqrt(species.massKilograms() * this.energyUnit);
     this.timeUnit = Constants.HBAR / this.energyUnit;
     this.volumeUnit = Math.pow(lengthUnit, dimension);
     this.atomsPerUnitNorm = density == 0 ? 1 : density * volumeUnit;
@@ -56,8 +55,7 @@ public final class ScaledUnits {
    * @return the units
    * @throws IllegalArgumentException if a value is not positive
    */
-  public static ScaledUnits dividingByDensity(
-      Species species, Energy energyUnit, Density density) {
+  public static ScaledUnits dividingByDensity(Species species, Energy energyUnit, Density density) {
     Check.notNull(density, "density");
     return new ScaledUnits(
         species, energyUnit, density.dimension(), density.positive(density.dimension()));
@@ -72,8 +70,7 @@ public final class ScaledUnits {
    * @return the units
    * @throws IllegalArgumentException if the energy is not positive or d is not 1 to 3
    */
-  public static ScaledUnits keepingAtomNumbers(
-      Species species, Energy energyUnit, int dimension) {
+  public static ScaledUnits keepingAtomNumbers(Species species, Energy energyUnit, int dimension) {
     return new ScaledUnits(species, energyUnit, dimension, 0);
   }
 
@@ -272,8 +269,7 @@ public final class ScaledUnits {
    * @throws IllegalArgumentException if the dimensions differ
    */
   public double toScaled(Density density) {
-    Density.requireDimension(
-        Check.notNull(density, "density").dimension(), dimension, "density");
+    Density.requireDimension(Check.notNull(density, "density").dimension(), dimension, "density");
     return density.perMetreToD() * volumeUnit / atomsPerUnitNorm;
   }
 

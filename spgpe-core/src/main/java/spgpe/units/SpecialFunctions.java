@@ -1,8 +1,8 @@
 package spgpe.units;
 
 /**
- * The few special functions the reductions need, each by a method that keeps close to full
- * relative precision on the range stated with it. Arguments are checked by the callers.
+ * The few special functions the reductions need, each by a method that keeps close to full relative
+ * precision on the range stated with it. Arguments are checked by the callers.
  */
 final class SpecialFunctions {
   private static final double SQRT_PI = Math.sqrt(Math.PI);
@@ -31,9 +31,9 @@ final class SpecialFunctions {
   }
 
   /**
-   * exp(x) K0(x) for x > 0 as the integral of exp(-x (cosh t - 1)) over t > 0 (Abramowitz and Stegun
-   * 9.6.24). The trapezoidal rule converges exponentially here; the step follows the width of the
-   * integrand.
+   * exp(x) K0(x) for x > 0 as the integral of exp(-x (cosh t - 1)) over t > 0 (Abramowitz and
+   * Stegun 9.6.24). The trapezoidal rule converges exponentially here; the step follows the width
+   * of the integrand.
    */
   static double scaledBesselK0(double x) {
     double step = Math.min(0.2, 0.7 / Math.sqrt(x));

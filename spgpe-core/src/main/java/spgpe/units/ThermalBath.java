@@ -42,7 +42,10 @@ public final class ThermalBath {
         gap >= SMALLEST_GAP,
         "cutoff energy must exceed mu by at least 1e-4 kB T: (eps_cut - mu)/(kB T)=%s,"
             + " eps_cut=%s J, mu=%s J, T=%s K; raise the cutoff",
-        gap, this.cutoff, this.mu, temperature.kelvin());
+        gap,
+        this.cutoff,
+        this.mu,
+        temperature.kelvin());
     double ratio = this.scatteringLength / species.thermalWavelength(temperature).metres();
     this.growthPrefactor = Check.finite(8 * ratio * ratio, "8 a^2/lambda^2");
     this.collisionSum =
@@ -129,11 +132,7 @@ public final class ThermalBath {
    * @return M in m^2
    */
   public double scatteringAmplitude() {
-    return 16
-        * Math.PI
-        * scatteringLength
-        * scatteringLength
-        / Math.expm1((cutoff - mu) / thermal);
+    return 16 * Math.PI * scatteringLength * scatteringLength / Math.expm1((cutoff - mu) / thermal);
   }
 
   /**
@@ -142,8 +141,8 @@ public final class ThermalBath {
    *
    * <p>Quasi-1D: M erfcx(|k| a_perp/sqrt(2))/(a_perp sqrt(8 pi)), in m. Quasi-2D: (M/(2 pi)) exp(q)
    * K0(q), q = k^2 a_z^2/4, in m^2; it diverges at k = 0, which the divergence of the current never
-   * reaches. Structure: A. S. Bradley, S. J. Rooney, R. G. McDonald, Phys. Rev. A 92, 033631 (2015);
-   * re-derived for this project.
+   * reaches. Structure: A. S. Bradley, S. J. Rooney, R. G. McDonald, Phys. Rev. A 92, 033631
+   * (2015); re-derived for this project.
    *
    * @param confinement tight directions
    * @param perMetre wave number k in 1/m

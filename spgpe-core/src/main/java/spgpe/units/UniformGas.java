@@ -232,8 +232,7 @@ public final class UniformGas {
 
   private double weakCoupling() {
     double g = dimensionlessCoupling();
-    Check.argument(
-        g <= 1, "BKT formulas need a weak coupling, m g/hbar^2 <= 1: m g/hbar^2=%s", g);
+    Check.argument(g <= 1, "BKT formulas need a weak coupling, m g/hbar^2 <= 1: m g/hbar^2=%s", g);
     return g;
   }
 }

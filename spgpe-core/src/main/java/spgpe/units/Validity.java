@@ -5,8 +5,8 @@ import java.util.List;
 import spgpe.internal.check.Check;
 
 /**
- * Verdicts on the assumptions behind a reduced classical-field description. Limits that are rules of
- * thumb say so in their reason.
+ * Verdicts on the assumptions behind a reduced classical-field description. Limits that are rules
+ * of thumb say so in their reason.
  */
 public final class Validity {
   private static final String RULE = Verdict.RULE_OF_THUMB;
@@ -49,7 +49,8 @@ public final class Validity {
             gas.density().perMetreToD() * a,
             0.1,
             0.5,
-            "the transverse ground state swells by about n a; at 0.5 mu reaches hbar w_perp" + RULE),
+            "the transverse ground state swells by about n a; at 0.5 mu reaches hbar w_perp"
+                + RULE),
         Verdict.atMost(
             "a/a_perp",
             a / confinement.oscillatorLength().metres(),
@@ -114,7 +115,11 @@ public final class Validity {
             "interactions must not excite axial motion" + RULE));
     verdicts.add(
         Verdict.atMost(
-            "kB T/(hbar w_z)", thermal / quantum, 0.3, 1, "heat must not excite axial motion" + RULE));
+            "kB T/(hbar w_z)",
+            thermal / quantum,
+            0.3,
+            1,
+            "heat must not excite axial motion" + RULE));
     verdicts.add(
         Verdict.atMost(
             "a/a_z",
@@ -183,8 +188,8 @@ public final class Validity {
   }
 
   /**
-   * The relative excess of the symmetrically ordered quantum occupation of a mode over the classical
-   * kB T/E: (E/(2 kB T)) coth(E/(2 kB T)) - 1.
+   * The relative excess of the symmetrically ordered quantum occupation of a mode over the
+   * classical kB T/E: (E/(2 kB T)) coth(E/(2 kB T)) - 1.
    *
    * @param energy energy of the mode, greater than zero
    * @param temperature temperature, greater than zero
@@ -196,16 +201,13 @@ public final class Validity {
         Check.notNull(energy, "energy").positiveJoules("mode energy")
             / (2 * Check.notNull(temperature, "temperature").positiveJoules());
     double square = x * x;
-    return x < 0.02
-        ? square / 3 * (1 - square / 15 * (1 - 2 * square / 21))
-        : x / Math.tanh(x) - 1;
+    return x < 0.02 ? square / 3 * (1 - square / 15 * (1 - 2 * square / 21)) : x / Math.tanh(x) - 1;
   }
 
   private static double quantum(Confinement confinement, UniformGas gas, int dimension) {
     Density.requireDimension(
         Check.notNull(confinement, "confinement").dimension(), dimension, "confinement");
-    Density.requireDimension(
-        Check.notNull(gas, "gas").coupling().dimension(), dimension, "gas");
+    Density.requireDimension(Check.notNull(gas, "gas").coupling().dimension(), dimension, "gas");
     return confinement.frequency().quantum().joules();
   }
 }

@@ -82,7 +82,9 @@ public record Verdict(
    * @return the worst grade, {@link Grade#FINE} for an empty list
    */
   public static Grade worst(List<Verdict> verdicts) {
-    return Check.notNull(verdicts, "verdicts").stream().map(Verdict::grade).reduce(Grade.FINE, Verdict::worse);
+    return Check.notNull(verdicts, "verdicts").stream()
+        .map(Verdict::grade)
+        .reduce(Grade.FINE, Verdict::worse);
   }
 
   private static Grade worse(Grade one, Grade other) {
@@ -99,6 +101,11 @@ public record Verdict(
     return String.format(
         Locale.ROOT,
         "%-8s %s = %.4g (fine: %.3g, outside: %.3g) %s",
-        grade, name, value, limit, outsideLimit, reason);
+        grade,
+        name,
+        value,
+        limit,
+        outsideLimit,
+        reason);
   }
 }

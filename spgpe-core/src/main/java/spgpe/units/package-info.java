@@ -7,9 +7,9 @@
  * spgpe.units.ScaledUnits} converts both ways, {@link spgpe.units.RingExperiment} does the whole
  * journey for two coupled components in a ring.
  *
- * <p>Everything here is immutable and safe for use by several threads. Symbols, conventions and
- * the classic slips are listed in {@code docs/units.md}. The figures are model estimates for
- * planning; they do not replace a laboratory's own safety rules.
+ * <p>Everything here is immutable and safe for use by several threads. Symbols, conventions and the
+ * classic slips are listed in {@code docs/units.md}. The figures are model estimates for planning;
+ * they do not replace a laboratory's own safety rules.
  */
 @NullMarked
 package spgpe.units;
