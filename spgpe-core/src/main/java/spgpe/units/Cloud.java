@@ -14,6 +14,10 @@ public record Cloud(Energy chemicalPotential, Density peakDensity, Length size) 
   /**
    * Checks the parts.
    *
+   * @param chemicalPotential mu = g times peak density
+   * @param peakDensity density, at the centre where it is not uniform
+   * @param size circumference of a ring, (first) side of a box, Thomas-Fermi radius of a harmonic
+   *     trap
    * @throws IllegalArgumentException if a part is null
    */
   public Cloud {

@@ -13,6 +13,8 @@ public record Coupling(double jouleMetreToD, int dimension) {
   /**
    * Checks the parts.
    *
+   * @param jouleMetreToD value in J m^d, finite; may be negative
+   * @param dimension d, 1 to 3
    * @throws IllegalArgumentException if the value is not finite or d is not 1 to 3
    */
   public Coupling {

@@ -12,6 +12,8 @@ public record Density(double perMetreToD, int dimension) {
   /**
    * Checks the parts.
    *
+   * @param perMetreToD value in m^-d, finite and not negative
+   * @param dimension d, 1 to 3
    * @throws IllegalArgumentException if the value is negative or not finite, or d is not 1 to 3
    */
   public Density {

@@ -11,6 +11,7 @@ public record Energy(double joules) {
   /**
    * Checks the value.
    *
+   * @param joules value in J, finite
    * @throws IllegalArgumentException if the value is not finite
    */
   public Energy {

@@ -12,6 +12,8 @@ public record EventRate(double perSecondPerMetreToD, int dimension) {
   /**
    * Checks the parts.
    *
+   * @param perSecondPerMetreToD value in s^-1 m^-d, finite and not negative
+   * @param dimension d, 0 to 3; 0 means a plain rate
    * @throws IllegalArgumentException if the value is negative or not finite, or d is not 0 to 3
    */
   public EventRate {

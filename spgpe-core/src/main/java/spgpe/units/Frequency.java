@@ -12,6 +12,7 @@ public record Frequency(double hertz) {
   /**
    * Checks the value.
    *
+   * @param hertz ordinary frequency f in Hz, finite and not negative
    * @throws IllegalArgumentException if the value is negative or not finite
    */
   public Frequency {

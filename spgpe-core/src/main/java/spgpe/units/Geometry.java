@@ -37,6 +37,7 @@ public sealed interface Geometry {
     /**
      * Checks the length.
      *
+     * @param circumference length all the way round (not the radius), greater than zero
      * @throws IllegalArgumentException if it is not greater than zero
      */
     public Ring {
@@ -58,6 +59,7 @@ public sealed interface Geometry {
     /**
      * Checks the length.
      *
+     * @param length length, greater than zero
      * @throws IllegalArgumentException if it is not greater than zero
      */
     public Box {
@@ -82,6 +84,8 @@ public sealed interface Geometry {
     /**
      * Checks the sides.
      *
+     * @param lengthX first side, greater than zero
+     * @param lengthY second side, greater than zero
      * @throws IllegalArgumentException if a side is not greater than zero
      */
     public Rectangle {
@@ -108,6 +112,7 @@ public sealed interface Geometry {
     /**
      * Checks the frequency.
      *
+     * @param frequency trap frequency f = w/(2 pi), greater than zero
      * @throws IllegalArgumentException if it is not greater than zero
      */
     public Harmonic {

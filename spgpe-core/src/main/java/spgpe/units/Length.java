@@ -12,6 +12,7 @@ public record Length(double metres) {
   /**
    * Checks the value.
    *
+   * @param metres value in m, finite
    * @throws IllegalArgumentException if the value is not finite
    */
   public Length {

@@ -27,6 +27,8 @@ public record Modulation(double depth, Frequency frequency) {
   /**
    * Checks the parts.
    *
+   * @param depth dimensionless depth delta: the drive amplitude over hbar w; 0 to 1000
+   * @param frequency drive frequency f = w/(2 pi), greater than zero
    * @throws IllegalArgumentException if the depth lies outside 0..1000 or the frequency is zero
    */
   public Modulation {

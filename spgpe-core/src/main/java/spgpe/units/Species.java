@@ -38,6 +38,8 @@ public record Species(String name, double massKilograms) {
   /**
    * Checks the parts.
    *
+   * @param name name for messages, for example "K-41"
+   * @param massKilograms mass of one atom in kg, greater than zero
    * @throws IllegalArgumentException if the name is null or the mass is not a positive number
    */
   public Species {

@@ -11,6 +11,7 @@ public record Temperature(double kelvin) {
   /**
    * Checks the value.
    *
+   * @param kelvin value in K, finite and not negative
    * @throws IllegalArgumentException if the value is negative or not finite
    */
   public Temperature {

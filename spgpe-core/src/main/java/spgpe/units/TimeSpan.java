@@ -11,6 +11,7 @@ public record TimeSpan(double seconds) {
   /**
    * Checks the value.
    *
+   * @param seconds value in s, finite and not negative
    * @throws IllegalArgumentException if the value is negative or not finite
    */
   public TimeSpan {

@@ -32,6 +32,12 @@ public record Verdict(
   /**
    * Checks the parts.
    *
+   * @param name what is measured, for example "mu/(hbar w_perp)"
+   * @param grade the outcome
+   * @param value the number; may be infinite, never NaN
+   * @param limit the value up to (or from) which the outcome is {@link Grade#FINE}
+   * @param outsideLimit the value beyond which the outcome is {@link Grade#OUTSIDE}
+   * @param reason why it matters, and where the limits come from
    * @throws IllegalArgumentException if a part is null or the value is NaN
    */
   public Verdict {
