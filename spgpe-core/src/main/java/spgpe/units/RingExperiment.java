@@ -18,8 +18,8 @@ import spgpe.internal.check.Check;
  *             12_000,
  *             Length.ofBohrRadii(65.42),
  *             Temperature.ofNanokelvin(30))
- *         .withCoherentCoupling(Energy.ofHertz(8))
- *         .withModulation(new Modulation(0.11, Frequency.ofKilohertz(12)))
+ *         .withCoherentCoupling(Energy.ofHertz(8)) // J/h; levels split by 16 Hz
+ *         .withBiquadratic(new Coupling(1.6e-40, 1)) // kappa in J m
  *         .scaled();
  * }</pre>
  */

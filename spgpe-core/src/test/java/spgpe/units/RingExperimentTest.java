@@ -145,6 +145,16 @@ class RingExperimentTest {
         ValidityTest.byName(lab.withRun(0.2, TimeSpan.ofSeconds(1)).scaled().verdicts())
             .get("eps_cut/first unstable band");
     assertEquals(Grade.MARGINAL, damped.grade());
+    // own formula of the threshold: growth over the mean curvature, for the bare gas without g12
+    UniformGas gas = lab.scaled().gas();
+    double s = gas.chemicalPotential().hertz();
+    double growth = s * 0.04 * (1 - 0.04 * 0.04 / 2);
+    double needed = growth / Math.hypot(1000, s);
+    Verdict held =
+        ValidityTest.byName(lab.scaled().verdicts())
+            .get("gamma against drive heating/gamma kinetic");
+    assertEquals(Grade.MARGINAL, held.grade());
+    assertClose(needed / lab.scaled().bath().growthRate(), held.value(), 1e-3);
   }
 
   @Test
