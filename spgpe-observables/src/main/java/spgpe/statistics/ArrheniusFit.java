@@ -5,17 +5,17 @@ import java.util.OptionalDouble;
 import spgpe.internal.check.Check;
 
 /**
- * Fit of the Arrhenius law, ln(rate) = ln A - B/T, to rates measured at several temperatures T, with
- * the prefactor A free or fixed (for instance to a theory's).
+ * Fit of the Arrhenius law, ln(rate) = ln A - B/T, to rates measured at several temperatures T,
+ * with the prefactor A free or fixed (for instance to a theory's).
  *
  * <p>{@link #ofRates(List) ofRates} is a weighted least-squares fit of ln(rate), weight
- * (rate/standardError)&#178;; its deviance is chi-square. {@link #ofCounts(List) ofCounts} maximises
- * the likelihood of the event counts, for which d events in exposure E have weight d ln(A e^(-B/T))
- * - E A e^(-B/T); temperatures without any event take part. Its deviance is 2 sum [d ln(d/m) - d +
- * m] with m the fitted number of events.
+ * (rate/standardError)&#178;; its deviance is chi-square. {@link #ofCounts(List) ofCounts}
+ * maximises the likelihood of the event counts, for which d events in exposure E have weight d ln(A
+ * e^(-B/T)) - E A e^(-B/T); temperatures without any event take part. Its deviance is 2 sum [d
+ * ln(d/m) - d + m] with m the fitted number of events.
  *
- * <p>A barrier that itself depends on T, or a prefactor with a power of T, bends the line; then B is
- * a local slope. Immutable and thread-safe.
+ * <p>A barrier that itself depends on T, or a prefactor with a power of T, bends the line; then B
+ * is a local slope. Immutable and thread-safe.
  */
 public final class ArrheniusFit {
   private final ArrheniusObjective objective;
@@ -34,6 +34,9 @@ public final class ArrheniusFit {
     /**
      * Checks the three numbers.
      *
+     * @param temperature temperature, finite and &gt; 0
+     * @param rate rate, finite and &gt; 0
+     * @param standardError its standard error, finite and &gt; 0
      * @throws IllegalArgumentException if one of them is not positive and finite
      */
     public MeasuredRate {
@@ -53,6 +56,8 @@ public final class ArrheniusFit {
     /**
      * Checks both.
      *
+     * @param temperature temperature, finite and &gt; 0
+     * @param rate events and exposure at this temperature; no event is admissible
      * @throws IllegalArgumentException if the temperature is not positive and finite or the rate is
      *     null
      */

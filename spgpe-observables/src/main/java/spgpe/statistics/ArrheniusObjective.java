@@ -5,7 +5,9 @@ import java.util.List;
 import java.util.OptionalDouble;
 import spgpe.internal.check.Check;
 
-/** What an Arrhenius fit minimises, as a function of the barrier with the prefactor profiled out. */
+/**
+ * What an Arrhenius fit minimises, as a function of the barrier with the prefactor profiled out.
+ */
 abstract class ArrheniusObjective {
   final double[] beta;
   final OptionalDouble fixedLogPrefactor;
@@ -87,9 +89,7 @@ abstract class ArrheniusObjective {
       }
     }
     checkTemperatures(
-        Arrays.copyOf(betaWithEvents, withEvents),
-        fixedLogPrefactor,
-        "rates with events");
+        Arrays.copyOf(betaWithEvents, withEvents), fixedLogPrefactor, "rates with events");
     return new Likelihood(beta, fixedLogPrefactor, events, logExposure);
   }
 
@@ -111,8 +111,7 @@ abstract class ArrheniusObjective {
     private final double meanBeta;
     private final double meanLog;
 
-    LeastSquares(
-        double[] beta, OptionalDouble fixedLogPrefactor, double[] log, double[] weight) {
+    LeastSquares(double[] beta, OptionalDouble fixedLogPrefactor, double[] log, double[] weight) {
       super(beta, fixedLogPrefactor);
       this.log = log;
       this.weight = weight;
@@ -169,10 +168,7 @@ abstract class ArrheniusObjective {
     private final double[] logExposure;
 
     Likelihood(
-        double[] beta,
-        OptionalDouble fixedLogPrefactor,
-        double[] events,
-        double[] logExposure) {
+        double[] beta, OptionalDouble fixedLogPrefactor, double[] events, double[] logExposure) {
       super(beta, fixedLogPrefactor);
       this.events = events;
       this.logExposure = logExposure;

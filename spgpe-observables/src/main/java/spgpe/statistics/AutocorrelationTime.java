@@ -19,8 +19,7 @@ import spgpe.internal.check.Check;
  * @param mean mean of the series
  * @param variance lag-zero autocovariance of the series, with divisor n
  */
-public record AutocorrelationTime(
-    double tau, int window, int count, double mean, double variance) {
+public record AutocorrelationTime(double tau, int window, int count, double mean, double variance) {
   private static final double DEFAULT_WINDOW_FACTOR = 5;
 
   /**

@@ -12,6 +12,8 @@ public record Estimate(double value, double standardError) {
   /**
    * Checks both numbers.
    *
+   * @param value estimate
+   * @param standardError standard deviation of the estimate, same unit as the value
    * @throws IllegalArgumentException if the value is not finite or the error is negative or not
    *     finite
    */

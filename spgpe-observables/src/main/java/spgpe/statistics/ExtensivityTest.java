@@ -27,6 +27,8 @@ public record ExtensivityTest(
     /**
      * Checks both.
      *
+     * @param size length, area or volume, finite and &gt; 0
+     * @param rate decay rate of the whole system
      * @throws IllegalArgumentException if the size is not positive and finite or the rate is null
      */
     public SizedRate {

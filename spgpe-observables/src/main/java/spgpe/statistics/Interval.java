@@ -13,6 +13,8 @@ public record Interval(double lower, double upper) {
   /**
    * Checks the order of the ends.
    *
+   * @param lower lower end
+   * @param upper upper end, not below the lower one
    * @throws IllegalArgumentException if lower is above upper or one of them is NaN
    */
   public Interval {

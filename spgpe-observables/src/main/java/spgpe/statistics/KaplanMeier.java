@@ -6,8 +6,8 @@ import java.util.OptionalDouble;
 import spgpe.internal.check.Check;
 
 /**
- * Product-limit estimate of the survival probability, S(t) = product over event times t_i &lt;= t of
- * (1 - d_i/n_i), with Greenwood's variance S&#178; sum d_i/(n_i (n_i - d_i)) and the pointwise
+ * Product-limit estimate of the survival probability, S(t) = product over event times t_i &lt;= t
+ * of (1 - d_i/n_i), with Greenwood's variance S&#178; sum d_i/(n_i (n_i - d_i)) and the pointwise
  * log-log confidence band S^exp(&#177; z sqrt(sum)/ln S), which stays inside [0, 1].
  *
  * <p>With left truncation the curve is conditional on survival up to the smallest entry time.
@@ -33,8 +33,7 @@ public final class KaplanMeier {
    * @param standardError Greenwood standard error of S; NaN where S = 0, for the formula is
    *     undefined there
    */
-  public record Step(
-      double time, int atRisk, int events, double survival, double standardError) {}
+  public record Step(double time, int atRisk, int events, double survival, double standardError) {}
 
   private KaplanMeier(List<Step> steps, double[] greenwoodSums, double lastTime) {
     this.steps = steps;

@@ -16,6 +16,8 @@ public record RateEstimate(long events, double exposure) {
   /**
    * Checks both numbers.
    *
+   * @param events number of events d
+   * @param exposure total time at risk, summed over trajectories
    * @throws IllegalArgumentException if events is negative or exposure not positive and finite
    */
   public RateEstimate {

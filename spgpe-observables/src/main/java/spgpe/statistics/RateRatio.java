@@ -16,6 +16,8 @@ public record RateRatio(RateEstimate numerator, RateEstimate denominator) {
   /**
    * Checks that there is something to compare.
    *
+   * @param numerator first rate
+   * @param denominator second rate
    * @throws IllegalArgumentException if an argument is null or neither run has an event
    */
   public RateRatio {

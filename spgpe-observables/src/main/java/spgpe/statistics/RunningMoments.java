@@ -3,14 +3,14 @@ package spgpe.statistics;
 import spgpe.internal.check.Check;
 
 /**
- * Mean and variance of a stream of numbers, updated one at a time without cancellation and mergeable.
- * Adding allocates nothing. Merging is deterministic, but not associative in the last bits: merge in
- * a fixed order (for instance by trajectory index) to get the same bits every time.
+ * Mean and variance of a stream of numbers, updated one at a time without cancellation and
+ * mergeable. Adding allocates nothing. Merging is deterministic, but not associative in the last
+ * bits: merge in a fixed order (for instance by trajectory index) to get the same bits every time.
  *
  * <p>Mutable; confined to one thread.
  *
- * <p>Sources: B. P. Welford, Technometrics 4, 419 (1962); T. F. Chan, G. H. Golub and R. J. LeVeque,
- * Am. Stat. 37, 242 (1983) (both from memory).
+ * <p>Sources: B. P. Welford, Technometrics 4, 419 (1962); T. F. Chan, G. H. Golub and R. J.
+ * LeVeque, Am. Stat. 37, 242 (1983) (both from memory).
  */
 public final class RunningMoments {
   private long count;

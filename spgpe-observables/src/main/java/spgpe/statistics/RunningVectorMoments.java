@@ -29,8 +29,7 @@ public final class RunningVectorMoments {
    * @throws IllegalArgumentException if the dimension is below 1
    */
   public static RunningVectorMoments ofDimension(int dimension) {
-    return new RunningVectorMoments(
-        Check.inRange(dimension, 1, Integer.MAX_VALUE, "dimension"));
+    return new RunningVectorMoments(Check.inRange(dimension, 1, Integer.MAX_VALUE, "dimension"));
   }
 
   /**

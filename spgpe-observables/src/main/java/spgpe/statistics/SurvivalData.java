@@ -40,8 +40,7 @@ public final class SurvivalData {
   public static SurvivalData of(double[] durations, boolean[] events) {
     Check.notNull(durations, "durations");
     Check.notNull(events, "events");
-    Check.argument(
-        durations.length > 0, "at least one trajectory is needed: durations.length=0");
+    Check.argument(durations.length > 0, "at least one trajectory is needed: durations.length=0");
     Check.argument(
         durations.length == events.length,
         "durations and events must have the same length: durations.length=%s, events.length=%s",
@@ -156,8 +155,7 @@ public final class SurvivalData {
     for (double t : entry) {
       kept += t < endTime ? 1 : 0;
     }
-    Check.argument(
-        kept > 0, "no trajectory had entered before the end time: endTime=%s", endTime);
+    Check.argument(kept > 0, "no trajectory had entered before the end time: endTime=%s", endTime);
     double[] newEntry = new double[kept];
     double[] newEnd = new double[kept];
     boolean[] newEvent = new boolean[kept];

@@ -53,8 +53,7 @@ public final class TruncationScan {
   public static TruncationScan of(SurvivalData data, double... truncationTimes) {
     Check.notNull(data, "data");
     Check.notNull(truncationTimes, "truncationTimes");
-    Check.argument(
-        truncationTimes.length > 0, "at least one truncation time is needed: length=0");
+    Check.argument(truncationTimes.length > 0, "at least one truncation time is needed: length=0");
     RateEstimate[] rates = new RateEstimate[truncationTimes.length];
     SurvivalData[] truncated = new SurvivalData[truncationTimes.length];
     for (int i = 0; i < truncationTimes.length; i++) {
