@@ -66,10 +66,10 @@ public record RateEstimate(long events, double exposure) {
    */
   public Interval interval(double level, Censoring censoring) {
     Check.notNull(censoring, "censoring");
-    double tail = 0.5 * (1 - Quantiles.checkLevel(level));
+    double tail = Quantiles.tail(level);
     double twice = 2.0 * events;
     if (events == 0) {
-      return new Interval(0, Quantiles.chiSquare(1 - tail, 2) / (2 * exposure));
+      return new Interval(0, Quantiles.chiSquareExceeded(tail, 2) / (2 * exposure));
     }
     double below = censoring == Censoring.TIME_CENSORED_CENTRAL ? twice + 1 : twice;
     double above =
@@ -80,7 +80,7 @@ public record RateEstimate(long events, double exposure) {
         };
     return new Interval(
         Quantiles.chiSquare(tail, below) / (2 * exposure),
-        Quantiles.chiSquare(1 - tail, above) / (2 * exposure));
+        Quantiles.chiSquareExceeded(tail, above) / (2 * exposure));
   }
 
   /**
@@ -92,7 +92,8 @@ public record RateEstimate(long events, double exposure) {
    * @throws IllegalArgumentException if the level is not inside (0, 1)
    */
   public double upperBound(double level) {
-    return Quantiles.chiSquare(Quantiles.checkLevel(level), 2.0 * events + 2) / (2 * exposure);
+    return Quantiles.chiSquareExceeded(1 - Quantiles.checkLevel(level), 2.0 * events + 2)
+        / (2 * exposure);
   }
 
   /**

@@ -46,13 +46,13 @@ public record RateRatio(RateEstimate numerator, RateEstimate denominator) {
    * @throws IllegalArgumentException if the level is not inside (0, 1)
    */
   public Interval interval(double level) {
-    double tail = 0.5 * (1 - Quantiles.checkLevel(level));
+    double tail = Quantiles.tail(level);
     long k = numerator.events();
     long rest = denominator.events();
     double lower = k == 0 ? 0 : Quantiles.beta(tail, k, rest + 1.0);
-    double upper = rest == 0 ? 1 : Quantiles.beta(1 - tail, k + 1.0, rest);
+    double above = rest == 0 ? 0 : Quantiles.beta(tail, rest, k + 1.0);
     double scale = denominator.exposure() / numerator.exposure();
-    return new Interval(scale * lower / (1 - lower), scale * upper / (1 - upper));
+    return new Interval(scale * lower / (1 - lower), scale * (1 - above) / above);
   }
 
   /**

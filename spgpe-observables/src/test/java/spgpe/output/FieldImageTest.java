@@ -61,7 +61,7 @@ class FieldImageTest {
   /**
    * Lightness recomputed from the stored bytes (IEC 61966-2-1 and CIE 15): 255 steps from 8 to 95
    * of .341 each; rounding to bytes moves a lightness by less than .3. Neighbours differ by .58 to
-   * .64 in CIELAB before rounding; over ten entries, where rounding averages out, by 5.8 to 6.4.
+   * .64 in CIELAB, ten entries apart by 5.8 to 6.4; rounding widens that to 5.4 to 7.0.
    */
   @Test
   void sequentialMapIsUniformAndReadsInGrey() {

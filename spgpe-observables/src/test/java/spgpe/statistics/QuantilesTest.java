@@ -7,11 +7,11 @@ import org.junit.jupiter.api.Test;
 /** Reference: SciPy 1.17, stats.norm, chi2, beta and binom. */
 class QuantilesTest {
   @Test
-  void normal() {
-    assertEquals(1.959963984540054, Quantiles.normal(.975), 1e-14);
-    assertEquals(-1.959963984540054, Quantiles.normal(.025), 1e-14);
-    assertEquals(6.1094101916632875, Quantiles.normal(1 - 5e-10), 1e-7);
-    assertEquals(0, Quantiles.normal(.5), 1e-16);
+  void twoSidedNormal() {
+    assertEquals(1.959963984540054, Quantiles.twoSidedNormal(.95), 1e-14);
+    assertEquals(.6744897501960817, Quantiles.twoSidedNormal(.5), 1e-15);
+    assertEquals(6.1094102, Quantiles.twoSidedNormal(1 - 1e-9), 1e-7);
+    assertEquals(1.2533141373155e-12, Quantiles.twoSidedNormal(1e-12), 1e-16);
   }
 
   @Test
@@ -30,9 +30,9 @@ class QuantilesTest {
   @Test
   void chiSquareTailInvertsTheQuantile() {
     for (double freedom : new double[] {1, 2, 7, 2000}) {
-      for (double p : new double[] {1e-6, .3, .999}) {
-        double x = Quantiles.chiSquare(1 - p, freedom);
-        assertEquals(p, Quantiles.chiSquareUpperTail(x, freedom), 1e-9 * p);
+      for (double p : new double[] {1e-12, 1e-6, .3, .999}) {
+        double x = Quantiles.chiSquareExceeded(p, freedom);
+        assertEquals(p, Quantiles.chiSquareUpperTail(x, freedom), 1e-11 * p);
       }
     }
   }

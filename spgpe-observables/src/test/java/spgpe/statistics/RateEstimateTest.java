@@ -37,8 +37,8 @@ class RateEstimateTest {
   }
 
   /**
-   * Decay of a ring measured by brute force: 10934 events in an exposure of 7060383 give
-   * 1.549(15)e-3 with conservative limits [1.520, 1.578]e-3; more digits from SciPy 1.17 chi2.ppf.
+   * A measured decay of a ring, 10934 events in an exposure of 7060383: 1.549(15)e-3, conservative
+   * limits [1.520, 1.578]e-3; the further digits are from SciPy 1.17, chi2.ppf.
    */
   @Test
   void largeNumbersOfEvents() {
@@ -99,8 +99,8 @@ class RateEstimateTest {
    * Delay of 20 between nucleation (rate .01) and threshold, censored at 150: the untruncated
    * estimate tends to (1 - e^-1.3)/(20 + (1 - e^-1.3)/.01) = .007844 (derived: only the time after
    * the delay is at risk), the truncated one to .01. With 4e4 trajectories the relative standard
-   * errors are .006; bound 4 standard errors, false alarm 1e-4. A bias a tenth as large as the
-   * delay's is caught with probability .5, the delay's own 22 percent for certain.
+   * errors are .006; bound 4 standard errors, false alarm 1e-4. A bias of 5 percent is caught for
+   * certain (8 standard errors), and the delay's own is 22 percent.
    */
   @Test
   void constantDelayBiasesTheUntruncatedRateOnly() {
