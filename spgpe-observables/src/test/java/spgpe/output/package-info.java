@@ -1,0 +1,5 @@
+/** Tests of the file writers. */
+@NullMarked
+package spgpe.output;
+
+import org.jspecify.annotations.NullMarked;
