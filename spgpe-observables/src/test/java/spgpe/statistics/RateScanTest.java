@@ -58,15 +58,21 @@ class RateScanTest {
     assertTrue(scan.rows().get(4).driftPValue().isEmpty());
   }
 
-  /** By hand: between 0 and 10 two events in 2 + 6 + 2 * 10, afterwards one event in 5 + 10. */
+  /**
+   * By hand: between 0 and 10 six events in 1 + 2 + 3 + 4 + 5 + 6 + 2 * 10 = 41, afterwards one
+   * event in 5 + 90. The exact p-value is then the upper binomial tail, doubled.
+   */
   @Test
   void driftComparesTheWindowWithWhatFollows() {
     SurvivalData data =
-        SurvivalData.of(new double[] {2, 6, 15, 20}, new boolean[] {true, true, true, false});
+        SurvivalData.of(
+            new double[] {1, 2, 3, 4, 5, 6, 15, 100},
+            new boolean[] {true, true, true, true, true, true, true, false});
     TruncationScan scan = TruncationScan.of(data, 0, 10);
-    RateRatio expected = new RateRatio(new RateEstimate(2, 28), new RateEstimate(1, 15));
-    assertEquals(expected.pValue(), scan.rows().get(0).driftPValue().orElseThrow(), 1e-15);
-    assertEquals(new RateEstimate(1, 15), scan.rows().get(1).rate());
+    double early = 41.0 / 136;
+    double tail = Math.pow(early, 7) + 7 * Math.pow(early, 6) * (1 - early);
+    assertEquals(2 * tail, scan.rows().get(0).driftPValue().orElseThrow(), 1e-14);
+    assertEquals(new RateEstimate(1, 95), scan.rows().get(1).rate());
     assertEquals(2, scan.rows().get(1).trajectories());
   }
 
