@@ -30,6 +30,20 @@ public final class Kinetic implements SpectralTerm {
     return new Kinetic(masses.clone());
   }
 
+  /**
+   * Mass of a component.
+   *
+   * @param component component index from 0
+   * @return its mass
+   * @throws IllegalArgumentException if the term has no such component
+   */
+  public double mass(int component) {
+    if (masses.length == 1) {
+      return masses[0];
+    }
+    return masses[Check.inRange(component, 0, masses.length - 1, "component")];
+  }
+
   @Override
   public void check(int components, CoherentRegion region) {
     Check.argument(

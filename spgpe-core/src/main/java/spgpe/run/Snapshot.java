@@ -1,5 +1,9 @@
 package spgpe.run;
 
+import java.util.IdentityHashMap;
+import java.util.Map;
+import java.util.function.Function;
+import spgpe.internal.check.Check;
 import spgpe.model.EnergyMeter;
 import spgpe.model.Model;
 import spgpe.projector.Amplitudes;
@@ -17,6 +21,7 @@ public final class Snapshot {
   private final ModeTransform transform;
   private final EnergyMeter meter;
   private final Field field;
+  private final Map<Object, Object> scratch = new IdentityHashMap<>();
   private Amplitudes amplitudes;
   private boolean fieldIsCurrent;
   private double time;
@@ -129,5 +134,32 @@ public final class Snapshot {
    */
   public double grandCanonicalEnergy() {
     return meter.grandCanonical(time, amplitudes);
+  }
+
+  /**
+   * Scratch memory of an observable, made when first asked for and kept as long as the snapshot
+   * object, which belongs to one thread. Observables themselves are shared by threads and keep no
+   * state; what they need for a measurement (arrays, Fourier transforms, force evaluators) goes
+   * here. It must not carry information from one call to the next: the calls are for different
+   * trajectories.
+   *
+   * @param owner whose scratch it is, usually the observable itself; compared by identity
+   * @param type class of the scratch
+   * @param maker makes it for the model
+   * @param <W> type of the scratch
+   * @return the same object at every call for this owner
+   * @throws IllegalArgumentException if the owner has asked for another type before
+   */
+  public <W> W scratch(Object owner, Class<W> type, Function<? super Model, ? extends W> maker) {
+    Object kept = scratch.get(owner);
+    if (kept == null) {
+      kept = Check.notNull(maker.apply(model), "scratch");
+      scratch.put(owner, kept);
+    }
+    Check.argument(
+        type.isInstance(kept),
+        "scratch of an owner must keep its type: asked=%s, kept=%s",
+        type.getName(), kept.getClass().getName());
+    return type.cast(kept);
   }
 }

@@ -1,0 +1,83 @@
+package spgpe.observables.phase;
+
+import spgpe.internal.check.Check;
+import spgpe.model.Model;
+
+/**
+ * Continuous phases on a ring. Neighbouring points are joined by the shorter way: the phase step
+ * between them is taken in (-pi, pi]. That is right if the grid resolves the phase; a step near pi
+ * means a zero of the field between the points, and the winding is then about to change.
+ */
+public final class PhaseUnwrapping {
+  private static final double TURN = 2 * Math.PI;
+
+  private PhaseUnwrapping() {}
+
+  /**
+   * Makes a phase continuous.
+   *
+   * @param wrapped phases at consecutive points, radians, finite; not changed
+   * @return new array that starts with the same number and differs by multiples of 2 pi
+   * @throws IllegalArgumentException if a phase is not finite
+   */
+  public static double[] unwrap(double[] wrapped) {
+    requireFinite(wrapped);
+    double[] result = wrapped.clone();
+    unwrapInPlace(result);
+    return result;
+  }
+
+  /**
+   * Winding number around the ring: the sum of all phase steps, also that from the last point to
+   * the first, over 2 pi.
+   *
+   * @param wrapped phases at the points of a ring, radians, finite
+   * @return winding number
+   * @throws IllegalArgumentException if a phase is not finite
+   */
+  public static int winding(double[] wrapped) {
+    requireFinite(wrapped);
+    double sum = 0;
+    for (int i = 0; i < wrapped.length; i++) {
+      sum += step(wrapped[i], wrapped[(i + 1) % wrapped.length]);
+    }
+    return (int) Math.rint(sum / TURN);
+  }
+
+  static void unwrapInPlace(double[] phases) {
+    double previous = phases[0];
+    for (int i = 1; i < phases.length; i++) {
+      double original = phases[i];
+      phases[i] = phases[i - 1] + step(previous, original);
+      previous = original;
+    }
+  }
+
+  /** Phase step in (-pi, pi]. */
+  static double step(double from, double to) {
+    double d = Math.IEEEremainder(to - from, TURN);
+    return d <= -Math.PI ? d + TURN : d;
+  }
+
+  /** Angle in (-pi, pi]; a negative zero does not give -pi. */
+  static double angle(double re, double im) {
+    return Math.atan2(im + 0.0, re);
+  }
+
+  static void requireLine(Model model, String name) {
+    Check.argument(
+        model.region().grid().dimension() == 1,
+        "this observable needs a line (ring): observable=\"%s\", grid=%s",
+        name, model.region().grid());
+  }
+
+  private static void requireFinite(double[] phases) {
+    Check.notNull(phases, "phases");
+    Check.argument(phases.length > 0, "at least one phase must be given");
+    for (int i = 0; i < phases.length; i++) {
+      Check.argument(
+          Double.isFinite(phases[i]),
+          "phases (radians) must be finite: phases[%s]=%s", i, phases[i]);
+    }
+  }
+}

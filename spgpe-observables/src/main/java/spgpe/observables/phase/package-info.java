@@ -1,0 +1,5 @@
+/** Phases, relative phase and winding. */
+@NullMarked
+package spgpe.observables.phase;
+
+import org.jspecify.annotations.NullMarked;

@@ -1,0 +1,5 @@
+/** Mode amplitudes, occupations and structure factors. */
+@NullMarked
+package spgpe.observables.spectrum;
+
+import org.jspecify.annotations.NullMarked;

@@ -1,0 +1,4 @@
+@NullMarked
+package spgpe.observables.bubble;
+
+import org.jspecify.annotations.NullMarked;

@@ -1,0 +1,4 @@
+@NullMarked
+package spgpe.observables.correlation;
+
+import org.jspecify.annotations.NullMarked;

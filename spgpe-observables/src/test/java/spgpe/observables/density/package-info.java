@@ -1,0 +1,4 @@
+@NullMarked
+package spgpe.observables.density;
+
+import org.jspecify.annotations.NullMarked;

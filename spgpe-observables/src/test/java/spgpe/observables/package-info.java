@@ -1,0 +1,4 @@
+@NullMarked
+package spgpe.observables;
+
+import org.jspecify.annotations.NullMarked;

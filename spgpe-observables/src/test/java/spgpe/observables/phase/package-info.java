@@ -1,0 +1,4 @@
+@NullMarked
+package spgpe.observables.phase;
+
+import org.jspecify.annotations.NullMarked;

@@ -1,0 +1,4 @@
+@NullMarked
+package spgpe.observables.spectrum;
+
+import org.jspecify.annotations.NullMarked;

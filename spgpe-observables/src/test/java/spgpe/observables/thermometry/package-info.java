@@ -1,0 +1,4 @@
+@NullMarked
+package spgpe.observables.thermometry;
+
+import org.jspecify.annotations.NullMarked;

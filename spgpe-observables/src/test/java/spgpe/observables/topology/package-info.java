@@ -1,0 +1,4 @@
+@NullMarked
+package spgpe.observables.topology;
+
+import org.jspecify.annotations.NullMarked;
