@@ -1,0 +1,100 @@
+package spgpe.examples.docs;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.HashMap;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Map;
+import java.util.Set;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
+import java.util.stream.Stream;
+import org.junit.jupiter.api.Test;
+
+/** The documents show code that compiles and runs, and their links lead somewhere. */
+class SnippetsTest {
+  private static final Path ROOT = Path.of("..").toAbsolutePath().normalize();
+  private static final Path SOURCES = ROOT.resolve("spgpe-examples/src");
+  private static final Pattern REGION =
+      Pattern.compile("(?m)^ *// snippet-begin (\\S+)\\R(.*?)^ *// snippet-end", Pattern.DOTALL);
+  private static final Pattern SHOWN =
+      Pattern.compile("<!-- snippet: (\\S+) -->\\R```java\\R(.*?)```", Pattern.DOTALL);
+  private static final Pattern JAVA_BLOCK = Pattern.compile("```java\\R");
+  private static final Pattern LINK = Pattern.compile("\\]\\(([^)#\\s]+)(#[^)\\s]*)?\\)");
+
+  @Test
+  void firstUseRuns() {
+    // 48 atoms in one component of the uniform state; the run must stay near it
+    assertEquals(48, Snippets.firstUse(), 10);
+  }
+
+  @Test
+  void ownEnsembleRuns() {
+    double[] result = Snippets.ownEnsemble(Runnable::run);
+    assertTrue(result[0] > 0.8 && result[0] < 1, "contrast after a cold start: " + result[0]);
+    assertTrue(result[1] >= 0 && result[1] <= 8, "decayed: " + result[1]);
+  }
+
+  @Test
+  void documentsShowTheCodeOfTheSources() throws IOException {
+    Map<String, String> regions = new HashMap<>();
+    for (Path source : files(SOURCES, ".java")) {
+      Matcher region = REGION.matcher(Files.readString(source));
+      while (region.find()) {
+        regions.put(region.group(1), region.group(2).stripIndent().strip());
+      }
+    }
+    Set<String> seen = new HashSet<>();
+    for (Path document : documents()) {
+      String text = Files.readString(document);
+      Matcher shown = SHOWN.matcher(text);
+      int count = 0;
+      while (shown.find()) {
+        count++;
+        String name = shown.group(1);
+        assertTrue(regions.containsKey(name), document + " shows an unknown snippet " + name);
+        assertEquals(
+            regions.get(name), shown.group(2).strip(), document + ", snippet " + name);
+        seen.add(name);
+      }
+      assertEquals(
+          JAVA_BLOCK.matcher(text).results().count(), count,
+          document + " has a Java block that is no snippet");
+    }
+    assertEquals(regions.keySet(), seen, "snippets that no document shows");
+  }
+
+  @Test
+  void linksOfTheDocumentsLeadSomewhere() throws IOException {
+    for (Path document : documents()) {
+      Matcher link = LINK.matcher(Files.readString(document));
+      while (link.find()) {
+        String target = link.group(1);
+        if (!target.contains("://")) {
+          assertTrue(
+              Files.exists(document.resolveSibling(target)),
+              document + " links to a missing file: " + target);
+        }
+      }
+    }
+  }
+
+  private static List<Path> documents() throws IOException {
+    List<Path> all = new ArrayList<>(files(ROOT.resolve("docs"), ".md"));
+    all.add(ROOT.resolve("README.md"));
+    all.add(ROOT.resolve("DEVELOPERS.md"));
+    return all;
+  }
+
+  private static List<Path> files(Path folder, String ending) throws IOException {
+    try (Stream<Path> walk = Files.walk(folder)) {
+      return walk.filter(path -> path.toString().endsWith(ending)).toList();
+    }
+  }
+}
