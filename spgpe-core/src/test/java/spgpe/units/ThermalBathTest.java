@@ -127,6 +127,7 @@ class ThermalBathTest {
     assertEquals(Verdict.Grade.OUTSIDE, unlike.get(0).grade());
     assertEquals(0.01 / bath.growthRate(), unlike.get(0).value(), 1e-9);
     assertEquals(Verdict.Grade.OUTSIDE, unlike.get(1).grade());
+    assertEquals(expected / 0.5, unlike.get(1).value(), 1e-12 * expected);
     var alike = bath.dampingVerdicts(2 * bath.growthRate(), TimeSpan.ofSeconds(60));
     assertEquals(Verdict.Grade.FINE, Verdict.worst(alike));
     assertEquals(Verdict.Grade.FINE, bath.cutoffVerdict().grade());
