@@ -12,7 +12,7 @@ import org.junit.jupiter.api.Test;
 class ReductionsTest {
   private static final Confinement TUBE =
       Confinement.quasi1d(Species.K_41, Frequency.ofKilohertz(1.5));
-  private static final Confinement SHEET =
+  private static final Confinement LAYER =
       Confinement.quasi2d(Species.RB_87, Frequency.ofKilohertz(3));
 
   @Test
@@ -27,7 +27,7 @@ class ReductionsTest {
         assertThrows(
             IllegalArgumentException.class, () -> TUBE.confinementFactor(Length.ofBohrRadii(5000)));
     assertTrue(error.getMessage().contains("a=5000"), error.getMessage());
-    assertThrows(IllegalArgumentException.class, () -> SHEET.confinementFactor(a));
+    assertThrows(IllegalArgumentException.class, () -> LAYER.confinementFactor(a));
   }
 
   @Test
@@ -39,12 +39,12 @@ class ReductionsTest {
   }
 
   @Test
-  void sheetOfRubidiumAndItsTransition() {
+  void layerOfRubidiumAndItsTransition() {
     // Prokof'ev, Ruebenacker, Svistunov, PRL 87, 270402 (2001) with 380 and 13.2
     Length a = Length.ofBohrRadii(100.4);
-    assertEquals(0.13527721, SHEET.dimensionlessCoupling(a), 5e-9);
+    assertEquals(0.13527721, LAYER.dimensionlessCoupling(a), 5e-9);
     UniformGas gas =
-        UniformGas.of(Species.RB_87, SHEET.coupling(a), Density.perSquareMicrometre(50));
+        UniformGas.of(Species.RB_87, LAYER.coupling(a), Density.perSquareMicrometre(50));
     assertEquals(0.13527721, gas.dimensionlessCoupling(), 5e-9);
     assertEquals(7.9406005, gas.criticalPhaseSpaceDensity(), 5e-8);
     assertEquals(0.19724295, gas.criticalChemicalPotential(), 5e-9);
@@ -62,7 +62,7 @@ class ReductionsTest {
     UniformGas gas =
         UniformGas.of(
             Species.RB_87,
-            SHEET.coupling(Length.ofBohrRadii(1000)),
+            LAYER.coupling(Length.ofBohrRadii(1000)),
             Density.perSquareMicrometre(50));
     assertThrows(IllegalArgumentException.class, gas::bktTemperature);
   }
@@ -99,10 +99,10 @@ class ReductionsTest {
     assertEquals(157.0796, ring.size().micrometres(), 5e-5);
     Cloud box = new Geometry.Box(ring.size()).fill(Species.K_41, g, 12_000);
     assertEquals(ring, box);
-    Cloud sheet =
+    Cloud layer =
         new Geometry.Rectangle(Length.ofMicrometres(20), Length.ofMicrometres(10))
             .fill(Species.K_41, new Coupling(1e-45, 2), 1000);
-    assertEquals(5e12, sheet.peakDensity().perMetreToD(), 1);
+    assertEquals(5e12, layer.peakDensity().perMetreToD(), 1);
     assertThrows(
         IllegalArgumentException.class,
         () -> new Geometry.Box(Length.ofMicrometres(1)).fill(Species.K_41, g.times(-1), 10));

@@ -96,6 +96,19 @@ class RingExperimentTest {
     assertEquals(Grade.FINE, verdicts.get("E_b/(kB T)").grade());
     assertEquals(Grade.FINE, verdicts.get("lambda^2 = kappa n/J").grade());
     assertEquals(Grade.FINE, verdicts.get("L m_fv").grade());
+    // m_fv = 2 sqrt(J (lambda^2 - 1)) = sqrt(0.05)
+    double mass = Math.sqrt(0.05);
+    assertClose(281.66513 * mass, verdicts.get("L m_fv").value(), 2e-7);
+    assertClose(ring.cutoffWavenumber() / mass, verdicts.get("k_cut/m_fv").value(), 2e-7);
+    assertClose(0.018492944 / mass, verdicts.get("phase variance kB T/(n m_fv)").value(), 2e-7);
+    assertClose(0.01, verdicts.get("J/(g n)").value(), 1e-7);
+    assertClose(0.99, verdicts.get("((g - g12) n - J)/(g n)").value(), 1e-7);
+    // gap sqrt(0.99) m_fv in units of g n, against kB T = 0.78786936 g n
+    double half = Math.sqrt(0.99) * mass / 0.78786936 / 2;
+    assertClose(
+        half / Math.tanh(half) - 1,
+        verdicts.get("quantum excess of relative-phase mode").value(),
+        1e-6);
     assertTrue(ring.describe().contains("modes=" + ring.cutoffModes()));
   }
 
@@ -129,6 +142,8 @@ class RingExperimentTest {
         ring.mu(), ring.units().toScaled(ring.pair().orElseThrow().chemicalPotential()), 1e-13);
     Map<String, Verdict> verdicts = ValidityTest.byName(ring.verdicts());
     assertEquals(Grade.FINE, verdicts.get("hbar w_drive/(g n)").grade());
+    assertClose(8000 / 793.40384, verdicts.get("hbar w_drive/(g n)").value(), 1e-7);
+    assertClose(8 / 1.5, verdicts.get("f_drive/f_perp").value(), 1e-12);
     assertEquals(Grade.OUTSIDE, verdicts.get("f_drive/f_perp").grade());
     assertEquals(Grade.FINE, verdicts.get("eps_cut/first unstable band").grade());
   }

@@ -71,7 +71,7 @@ class ThermalBathTest {
   }
 
   @Test
-  void energyDampingOfRubidiumInASheet() {
+  void energyDampingOfRubidiumInALayer() {
     Temperature temperature = Temperature.ofNanokelvin(100);
     Energy mu = Temperature.ofNanokelvin(20).energy();
     ThermalBath bath =
@@ -81,11 +81,11 @@ class ThermalBathTest {
             temperature,
             mu,
             ThermalBath.cutoffEnergy(mu, temperature, 1));
-    Confinement sheet = Confinement.quasi2d(Species.RB_87, Frequency.ofKilohertz(3));
+    Confinement layer = Confinement.quasi2d(Species.RB_87, Frequency.ofKilohertz(3));
     assertEquals(1, bath.scatteringAmplitude() / 1.4188600e-15, 1e-7);
-    assertEquals(1, sheet.oscillatorLength().metres() / 1.9689294e-7, 1e-7);
-    assertEquals(1, bath.energyDampingKernel(sheet, 1e6) / 1.0836662e-15, 1e-7);
-    assertThrows(IllegalArgumentException.class, () -> bath.energyDampingKernel(sheet, 0));
+    assertEquals(1, layer.oscillatorLength().metres() / 1.9689294e-7, 1e-7);
+    assertEquals(1, bath.energyDampingKernel(layer, 1e6) / 1.0836662e-15, 1e-7);
+    assertThrows(IllegalArgumentException.class, () -> bath.energyDampingKernel(layer, 0));
   }
 
   @Test
@@ -127,6 +127,7 @@ class ThermalBathTest {
     assertEquals(Verdict.Grade.OUTSIDE, unlike.get(0).grade());
     assertEquals(0.01 / bath.growthRate(), unlike.get(0).value(), 1e-9);
     assertEquals(Verdict.Grade.OUTSIDE, unlike.get(1).grade());
+    assertEquals(expected / 0.5, unlike.get(1).value(), 1e-12 * expected);
     var alike = bath.dampingVerdicts(2 * bath.growthRate(), TimeSpan.ofSeconds(60));
     assertEquals(Verdict.Grade.FINE, Verdict.worst(alike));
     assertEquals(Verdict.Grade.FINE, bath.cutoffVerdict().grade());

@@ -68,30 +68,30 @@ class ValidityTest {
   }
 
   @Test
-  void sheetOfRubidiumBelowAndAboveTheTransition() {
-    Confinement sheet = Confinement.quasi2d(Species.RB_87, Frequency.ofKilohertz(3));
+  void layerOfRubidiumBelowAndAboveTheTransition() {
+    Confinement layer = Confinement.quasi2d(Species.RB_87, Frequency.ofKilohertz(3));
     Length a = Length.ofBohrRadii(100.4);
     UniformGas gas =
-        UniformGas.of(Species.RB_87, sheet.coupling(a), Density.perSquareMicrometre(50));
+        UniformGas.of(Species.RB_87, layer.coupling(a), Density.perSquareMicrometre(50));
     Map<String, Verdict> cold =
-        byName(Validity.quasi2d(sheet, gas, a, Temperature.ofNanokelvin(30)));
+        byName(Validity.quasi2d(layer, gas, a, Temperature.ofNanokelvin(30)));
     assertEquals(Grade.FINE, cold.get("n lambda^2/BKT value").grade());
     assertEquals(220.82631 / 30, cold.get("n lambda^2/BKT value").value(), 1e-6);
     assertEquals(Grade.FINE, cold.get("m g/hbar^2").grade());
     Map<String, Verdict> hot =
-        byName(Validity.quasi2d(sheet, gas, a, Temperature.ofNanokelvin(300)));
+        byName(Validity.quasi2d(layer, gas, a, Temperature.ofNanokelvin(300)));
     assertEquals(Grade.OUTSIDE, hot.get("n lambda^2/BKT value").grade());
     assertEquals(Grade.OUTSIDE, hot.get("kB T/(hbar w_z)").grade());
     Length strong = Length.ofBohrRadii(1000);
     UniformGas dense =
-        UniformGas.of(Species.RB_87, sheet.coupling(strong), Density.perSquareMicrometre(50));
+        UniformGas.of(Species.RB_87, layer.coupling(strong), Density.perSquareMicrometre(50));
     Map<String, Verdict> beyond =
-        byName(Validity.quasi2d(sheet, dense, strong, Temperature.ofNanokelvin(30)));
+        byName(Validity.quasi2d(layer, dense, strong, Temperature.ofNanokelvin(30)));
     assertEquals(Grade.OUTSIDE, beyond.get("m g/hbar^2").grade());
     assertEquals(4, beyond.size());
     assertThrows(
         IllegalArgumentException.class,
-        () -> Validity.quasi1d(sheet, gas, a, Temperature.ofNanokelvin(30)));
+        () -> Validity.quasi1d(layer, gas, a, Temperature.ofNanokelvin(30)));
   }
 
   @Test
