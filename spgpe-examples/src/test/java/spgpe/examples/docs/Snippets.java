@@ -1,5 +1,6 @@
 package spgpe.examples.docs;
 
+import java.util.List;
 import java.util.concurrent.Executor;
 import spgpe.grid.Axis;
 import spgpe.grid.PeriodicGrid;
@@ -25,6 +26,19 @@ import spgpe.run.Schedule;
 import spgpe.run.TimeMoments;
 import spgpe.run.Trajectory;
 import spgpe.run.TrajectoryEnd;
+import spgpe.units.CoupledPair;
+import spgpe.units.Density;
+import spgpe.units.Energy;
+import spgpe.units.EventRate;
+import spgpe.units.Frequency;
+import spgpe.units.Geometry;
+import spgpe.units.Length;
+import spgpe.units.RingExperiment;
+import spgpe.units.ScaledRing;
+import spgpe.units.Species;
+import spgpe.units.Temperature;
+import spgpe.units.TimeSpan;
+import spgpe.units.Verdict;
 
 /** The code shown in the documents; {@link SnippetsTest} compares and runs it. */
 final class Snippets {
@@ -45,6 +59,25 @@ final class Snippets {
     double atoms = run.finalState().atomNumber(0, 0);
     // snippet-end
     return atoms;
+  }
+
+  static double[] ringUnits() {
+    // snippet-begin ring-units
+    Energy j = Energy.ofHertz(8); // J/h; two bare levels are split by 16 Hz
+    Density n = Density.perMetre(7.6394373e7); // atoms per length and component
+    ScaledRing ring =
+        RingExperiment.of(
+                Species.K_41, Geometry.ring(Length.ofMicrometres(25)), Frequency.ofKilohertz(1.5),
+                12_000, Length.ofBohrRadii(65.42), Temperature.ofNanokelvin(30))
+            .withCoherentCoupling(j)
+            .withBiquadratic(CoupledPair.biquadraticFor(2.25, j, n)) // kappa for lambda^2 = 2.25
+            .withRun(0.01, TimeSpan.ofSeconds(1)) // damping and duration of the planned run
+            .scaled();
+    List<Verdict> verdicts = ring.verdicts(); // FINE, MARGINAL or OUTSIDE, with number and reason
+    TimeSpan lab = ring.units().time(2000); // 2000 scaled time units = 0.401 s
+    EventRate rate = ring.units().ratePerVolume(3.2e-5); // bubbles per second and metre
+    // snippet-end
+    return new double[] {verdicts.size(), lab.seconds(), rate.perSecondPerMetreToD()};
   }
 
   static double[] ownEnsemble(Executor executor) {

@@ -42,6 +42,15 @@ class SnippetsTest {
   }
 
   @Test
+  void ringUnitsGiveTheNumbersOfThePage() {
+    double[] numbers = Snippets.ringUnits();
+    assertTrue(numbers[0] > 10, "verdicts: " + numbers[0]);
+    assertEquals(0.401, numbers[1], 5e-4, "2000 t0 in s");
+    // 3.2e-5 per x0 t0 with x0 = 0.55768 um, t0 = 0.20060 ms as printed on the page
+    assertEquals(3.2e-5 / 0.55768e-6 / 0.20060e-3, numbers[2], 1e-4 * numbers[2]);
+  }
+
+  @Test
   void documentsShowTheCodeOfTheSources() throws IOException {
     Map<String, String> regions = new HashMap<>();
     for (Path source : files(SOURCES, ".java")) {
