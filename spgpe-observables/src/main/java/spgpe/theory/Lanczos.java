@@ -10,7 +10,9 @@ import org.jspecify.annotations.Nullable;
  * operator, and for the spectral measure seen from a start vector.
  */
 final class Lanczos {
-  private static final int CHECK_EVERY = 15;
+  private static final int FIRST_CHECK = 40;
+  private static final double CHECK_GROWTH = 1.2;
+  private static final double PROBE_TOLERANCE = 1e-3;
 
   private final List<double[]> basis = new ArrayList<>();
   private final double[] diagonal;
@@ -26,6 +28,7 @@ final class Lanczos {
    * @param start start vector, not changed
    * @param deflated unit vector kept out of the Krylov space, or null
    * @param wanted number of lowest Ritz pairs that must have converged
+   * @param probes number of further pairs that need only a residual of 1e-3
    * @param limit largest number of steps
    * @param tolerance residual norm to reach
    */
@@ -34,6 +37,7 @@ final class Lanczos {
       double[] start,
       double @Nullable [] deflated,
       int wanted,
+      int probes,
       int limit,
       double tolerance) {
     int steps = Math.min(limit, start.length);
@@ -48,16 +52,21 @@ final class Lanczos {
     basis.add(q);
     ritz = SymmetricEigen.ofTridiagonal(new double[] {0}, new double[0]);
     residual = Double.POSITIVE_INFINITY;
+    double nextCheck = FIRST_CHECK;
     for (int j = 0; j < steps; j++) {
       double[] w = operator.apply(basis.get(j));
       diagonal[j] = VectorMath.dot(w, basis.get(j));
-      orthogonalise(w, deflated);
+      VectorMath.add(w, -diagonal[j], basis.get(j));
+      if (j > 0) {
+        VectorMath.add(w, -offDiagonal[j - 1], basis.get(j - 1));
+      }
       orthogonalise(w, deflated);
       double beta = VectorMath.norm(w);
       offDiagonal[j] = beta;
       boolean exhausted = beta < 1e-12 * Math.abs(diagonal[0]) || j == steps - 1;
-      if (exhausted || (j + 1) % CHECK_EVERY == 0) {
-        solve(j + 1, beta, wanted);
+      if (exhausted || j + 1 >= nextCheck) {
+        nextCheck *= CHECK_GROWTH;
+        solve(j + 1, beta, wanted, probes, tolerance);
         if (exhausted || residual < tolerance) {
           break;
         }
@@ -81,13 +90,15 @@ final class Lanczos {
     }
   }
 
-  private void solve(int count, double beta, int wanted) {
+  private void solve(int count, double beta, int wanted, int probes, double tolerance) {
     double[] d = java.util.Arrays.copyOf(diagonal, count);
     double[] e = java.util.Arrays.copyOf(offDiagonal, count - 1);
     ritz = SymmetricEigen.ofTridiagonal(d, e);
-    residual = count < Math.min(wanted, diagonal.length) ? Double.POSITIVE_INFINITY : 0;
-    for (int i = 0; i < Math.min(wanted, count); i++) {
-      residual = Math.max(residual, Math.abs(beta * ritz.vector(i)[count - 1]));
+    int all = Math.min(wanted + probes, diagonal.length);
+    residual = count < all ? Double.POSITIVE_INFINITY : 0;
+    for (int i = 0; i < Math.min(all, count); i++) {
+      double weight = i < wanted ? 1 : tolerance / PROBE_TOLERANCE;
+      residual = Math.max(residual, weight * Math.abs(beta * ritz.vector(i)[count - 1]));
     }
   }
 

@@ -45,33 +45,29 @@ final class PairSolver {
 
   State ground(int total) {
     PairOperator h = sector(total);
-    Lanczos lanczos = lowest(h, false, 1);
+    Lanczos lanczos = lowest(h, false, 1, 0);
     return new State(lanczos.value(0), lanczos.vector(0));
   }
 
   /** States of one sector and exchange class up to an energy, ascending. */
   List<State> below(int total, boolean odd, double energy, int atMost) {
     PairOperator h = sector(total);
-    int wanted = 1;
-    while (true) {
-      Lanczos lanczos = lowest(h, odd, wanted);
-      if (lanczos.value(wanted - 1) > energy) {
+    for (int wanted = odd ? 0 : 1; wanted <= atMost; wanted++) {
+      Lanczos lanczos = lowest(h, odd, wanted, 1);
+      if (lanczos.value(wanted) > energy) {
         List<State> found = new ArrayList<>();
-        for (int i = 0; i < wanted - 1; i++) {
+        for (int i = 0; i < wanted && lanczos.value(i) <= energy; i++) {
           found.add(new State(lanczos.value(i), lanczos.vector(i)));
         }
         return found;
       }
-      if (wanted > atMost) {
-        throw new UnconvergedException(
-            "the ring is too short for its correlation lengths: more than " + atMost
-                + " states of the sector M=" + total + " matter; use a longer ring");
-      }
-      wanted++;
     }
+    throw new UnconvergedException(
+        "the ring is too short for its correlation lengths: more than " + atMost
+            + " states of the sector M=" + total + " matter; use a longer ring");
   }
 
-  private Lanczos lowest(PairOperator h, boolean odd, int wanted) {
+  private Lanczos lowest(PairOperator h, boolean odd, int wanted, int probes) {
     int sign = odd ? -1 : 1;
     double[] start = h.start(odd);
     h.symmetrise(start, sign);
@@ -84,6 +80,7 @@ final class PairSolver {
         start,
         null,
         wanted,
+        probes,
         STEP_LIMIT,
         RESIDUAL);
   }
@@ -113,7 +110,7 @@ final class PairSolver {
     if (channel == Channel.FIELD) {
       PairOperator one = sector(1);
       double[] start = zero.raiseFirst(ground.vector, one);
-      return new Lanczos(one::apply, start, null, 1, STEP_LIMIT, RESIDUAL)
+      return new Lanczos(one::apply, start, null, 1, 0, STEP_LIMIT, RESIDUAL)
           .spectralMeasure(ground.energy);
     }
     double[] start =
@@ -122,7 +119,7 @@ final class PairSolver {
           case IMBALANCE -> zero.imbalance(ground.vector);
           case COHERENCE, FIELD -> zero.coherence(ground.vector);
         };
-    return new Lanczos(zero::apply, start, ground.vector, 1, STEP_LIMIT, RESIDUAL)
+    return new Lanczos(zero::apply, start, ground.vector, 1, 0, STEP_LIMIT, RESIDUAL)
         .spectralMeasure(ground.energy);
   }
 }

@@ -5,11 +5,22 @@ final class VectorMath {
   private VectorMath() {}
 
   static double dot(double[] a, double[] b) {
-    double sum = 0;
-    for (int i = 0; i < a.length; i++) {
-      sum += a[i] * b[i];
+    // Four partial sums: a single one is bound by the latency of the addition.
+    double s0 = 0;
+    double s1 = 0;
+    double s2 = 0;
+    double s3 = 0;
+    int i = 0;
+    for (; i < a.length - 3; i += 4) {
+      s0 += a[i] * b[i];
+      s1 += a[i + 1] * b[i + 1];
+      s2 += a[i + 2] * b[i + 2];
+      s3 += a[i + 3] * b[i + 3];
     }
-    return sum;
+    for (; i < a.length; i++) {
+      s0 += a[i] * b[i];
+    }
+    return (s0 + s1) + (s2 + s3);
   }
 
   static double norm(double[] a) {
