@@ -20,9 +20,10 @@ import spgpe.internal.check.Check;
  */
 public final class PairEquilibrium {
   private static final double TOLERANCE = 2e-8;
-  private static final int[][] SIZES = {
-    {6, 8}, {8, 11}, {10, 14}, {12, 17}, {14, 21}, {16, 26}, {18, 32}
-  };
+  private static final int FEWEST_STATES = 6;
+  private static final int LARGEST_STATES = 18;
+  private static final int SMALLEST_WIDTH = 8;
+  private static final int LARGEST_WIDTH = 64;
   private static final int MOST_STATES = 6;
   private static final int LARGEST_SECTOR = 14;
   /** States with a smaller Boltzmann weight than exp(-32) are left out of the ring trace. */
@@ -31,7 +32,8 @@ public final class PairEquilibrium {
   private final CoupledPair pair;
   private final double unit;
   private final double amplitudeSquared;
-  private final int level;
+  private final int states;
+  private final int halfWidth;
   private final double groundEnergy;
   private final PairAverages averages;
   private final Map<PairSolver.Channel, CorrelationFunction> correlations;
@@ -45,34 +47,42 @@ public final class PairEquilibrium {
         "|alpha| with alpha=mu/(g T)^(2/3) must be <= 40: alpha=%s (mu=%s, g=%s, temperature=%s);"
             + " at lower temperature use GaussianFluctuations",
         alpha(), pair.mu(), pair.g(), pair.temperature());
-    PairAverages previous = null;
-    PairAverages current = null;
-    PairSolver.State ground = null;
-    int size = 0;
-    double change = Double.POSITIVE_INFINITY;
-    for (; size < SIZES.length; size++) {
-      PairSolver solver = solver(size, 1);
+    int k = FEWEST_STATES;
+    int width = startingWidth(pair);
+    PairSolver solver = solver(k, width, 1);
+    PairSolver.State ground = solver.ground(0);
+    PairAverages current = solver.averages(0, ground.vector);
+    double error = 0;
+    // First the angular momenta, then the radial states, each until the averages stand.
+    for (boolean radial = false; ; ) {
+      int nextStates = radial ? k + 2 : k;
+      int nextWidth = radial ? width : width + 3 + width / 8;
+      PairAverages previous = current;
+      solver = solver(nextStates, nextWidth, 1);
       ground = solver.ground(0);
-      previous = current;
       current = solver.averages(0, ground.vector);
-      if (previous != null) {
-        change = current.largestDifference(previous);
-        if (change <= TOLERANCE) {
+      double change = current.largestDifference(previous);
+      k = nextStates;
+      width = nextWidth;
+      if (change <= TOLERANCE) {
+        error += change;
+        if (radial) {
           break;
         }
+        radial = true;
+      } else if (k >= LARGEST_STATES || width >= LARGEST_WIDTH) {
+        throw new UnconvergedException(
+            "the two-component basis is not converged: relative change " + change + " > "
+                + TOLERANCE + " with " + k + " radial states and angular momenta up to " + width
+                + " for " + pair + "; raise the temperature or lower coherentCoupling and"
+                + " biquadraticCoupling");
       }
     }
-    if (current == null || ground == null || !(change <= TOLERANCE)) {
-      throw new UnconvergedException(
-          "the two-component basis is not converged: relative change " + change + " > "
-              + TOLERANCE + " with the largest basis for " + pair
-              + "; raise the temperature or lower coherentCoupling and biquadraticCoupling");
-    }
-    level = size;
+    states = k;
+    halfWidth = width;
     groundEnergy = ground.energy;
-    averages = scaled(current, change);
+    averages = scaled(current, error);
     correlations = new EnumMap<>(PairSolver.Channel.class);
-    PairSolver solver = solver(level, 1);
     for (PairSolver.Channel channel : PairSolver.Channel.values()) {
       double weight =
           channel == PairSolver.Channel.FIELD
@@ -98,13 +108,24 @@ public final class PairEquilibrium {
     return pair.mu() / (unit * unit);
   }
 
-  private PairSolver solver(int size, int largestSector) {
+  /** Angular momentum spreads as 1/(2 sigma) for a phase of standard deviation sigma. */
+  private static int startingWidth(CoupledPair pair) {
+    double n = pair.trueVacuumDensity();
+    double massSquared = 4 * (pair.coherentCoupling() + pair.biquadraticCoupling() * n);
+    if (!(n > 0 && massSquared > 0)) {
+      return SMALLEST_WIDTH;
+    }
+    double sigma = Math.sqrt(pair.temperature() / (n * Math.sqrt(massSquared)));
+    return (int) Math.max(SMALLEST_WIDTH, Math.min(2.2 / sigma, 0.8 * LARGEST_WIDTH));
+  }
+
+  private PairSolver solver(int radialStates, int width, int largestSector) {
     return new PairSolver(
         alpha(),
         pair.coherentCoupling() / (unit * unit),
         pair.biquadraticCoupling() / pair.g(),
-        SIZES[size][0],
-        SIZES[size][1],
+        radialStates,
+        width,
         largestSector);
   }
 
@@ -205,7 +226,7 @@ public final class PairEquilibrium {
     double gap = fieldCorrelation().slowestRate() / unit;
     // Sector energies grow at least about quadratically with M (quasi-condensate: exactly).
     int expected = 2 + (int) Math.ceil(Math.sqrt((limit - groundEnergy) / gap));
-    PairSolver solver = solver(level, Math.min(expected, LARGEST_SECTOR));
+    PairSolver solver = solver(states, halfWidth, Math.min(expected, LARGEST_SECTOR));
     double[] sums = new double[6];
     for (int total = 0; ; total++) {
       if (total > LARGEST_SECTOR) {
@@ -217,7 +238,7 @@ public final class PairEquilibrium {
       }
       if (total > expected) {
         expected = Math.min(2 * expected, LARGEST_SECTOR);
-        solver = solver(level, expected);
+        solver = solver(states, halfWidth, expected);
       }
       if (addSector(solver, total, limit, scaledLength, sums) == 0) {
         break;
