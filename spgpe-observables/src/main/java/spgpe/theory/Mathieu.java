@@ -59,7 +59,7 @@ public final class Mathieu {
     Check.argument(Math.abs(a) <= LARGEST_Q, "|a| must be <= 1e6: a=%s", a);
     checkQ(q);
     // (y, y'): y' = 1 * y', (y')' = -(a - 2 q cos 2z) y.
-    return Monodromy.of(z -> 1, z -> -(a - 2 * q * Math.cos(2 * z)), Math.PI).exponent();
+    return Monodromy.of(0, z -> 1, z -> -(a - 2 * q * Math.cos(2 * z)), Math.PI).exponent();
   }
 
   private static void checkQ(double q) {

@@ -3,8 +3,8 @@ package spgpe.theory;
 import java.util.function.DoubleUnaryOperator;
 
 /**
- * Propagator over one period of {@code x' = up(t) y, y' = down(t) x} with periodic coefficients:
- * Magnus expansion of order six on three Gauss points (Blanes, Casas, Oteo, Ros, Phys. Rep. 470, 151
+ * Propagator over one period of {@code x' = d x + up(t) y, y' = down(t) x - d y} with periodic
+ * coefficients: Magnus expansion of order six on three Gauss points (Blanes, Casas, Oteo, Ros, Phys. Rep. 470, 151
  * (2009); from memory), steps doubled until the trace stands.
  */
 final class Monodromy {
@@ -20,10 +20,11 @@ final class Monodromy {
     this.period = period;
   }
 
-  static Monodromy of(DoubleUnaryOperator up, DoubleUnaryOperator down, double period) {
+  static Monodromy of(
+      double diagonal, DoubleUnaryOperator up, DoubleUnaryOperator down, double period) {
     double previous = Double.NaN;
     for (int steps = 32; steps <= LARGEST_STEPS; steps *= 2) {
-      double trace = trace(up, down, period, steps);
+      double trace = trace(diagonal, up, down, period, steps);
       if (Math.abs(trace - previous) <= TOLERANCE * Math.max(2, Math.abs(trace))) {
         return new Monodromy(trace, period);
       }
@@ -35,13 +36,18 @@ final class Monodromy {
   }
 
   private static double trace(
-      DoubleUnaryOperator up, DoubleUnaryOperator down, double period, int steps) {
+      double diagonal,
+      DoubleUnaryOperator up,
+      DoubleUnaryOperator down,
+      double period,
+      int steps) {
     double h = period / steps;
     double[] m = {1, 0, 0, 1};
     for (int i = 0; i < steps; i++) {
       double middle = (i + 0.5) * h;
       double[] generator =
           magnus(
+              diagonal,
               up.applyAsDouble(middle - NODE * h),
               up.applyAsDouble(middle),
               up.applyAsDouble(middle + NODE * h),
@@ -56,9 +62,10 @@ final class Monodromy {
 
   /** Generator as (d, u, l) of the traceless matrix [[d, u], [l, -d]]. */
   private static double[] magnus(
-      double u1, double u2, double u3, double l1, double l2, double l3, double h) {
+      double d, double u1, double u2, double u3, double l1, double l2,
+      double l3, double h) {
     double root = Math.sqrt(15) / 3;
-    double[] a1 = {0, h * u2, h * l2};
+    double[] a1 = {h * d, h * u2, h * l2};
     double[] a2 = {0, root * h * (u3 - u1), root * h * (l3 - l1)};
     double[] a3 = {0, 10 * h / 3 * (u3 - 2 * u2 + u1), 10 * h / 3 * (l3 - 2 * l2 + l1)};
     double[] c1 = commutator(a1, a2);

@@ -74,7 +74,7 @@ class MathieuTest {
   }
 
   private static double traceAt(double a, double q) {
-    return Monodromy.of(z -> 1, z -> -(a - 2 * q * Math.cos(2 * z)), Math.PI).trace();
+    return Monodromy.of(0, z -> 1, z -> -(a - 2 * q * Math.cos(2 * z)), Math.PI).trace();
   }
 
   @Test
