@@ -31,6 +31,10 @@ public record Comparison(
   /**
    * Checks the values.
    *
+   * @param name what was measured, with its unit
+   * @param measured measured value
+   * @param standardError its standard error, greater than zero
+   * @param prediction the theory
    * @throws IllegalArgumentException if a number is not finite or the error not positive
    */
   public Comparison {

@@ -13,7 +13,11 @@ import spgpe.internal.check.Check;
 public record ComparisonTable(List<Comparison> rows) {
   private static final String LINE = "%-32s %13s %10s %13s %10s %8s %9s  %s%n";
 
-  /** Copies the rows. */
+  /**
+   * Copies the rows.
+   *
+   * @param rows the comparisons, in the order of printing
+   */
   public ComparisonTable {
     rows = List.copyOf(Check.notNull(rows, "rows"));
   }

@@ -23,6 +23,13 @@ public record CoupledPair(
   /**
    * Checks the parameters.
    *
+   * @param g intracomponent contact coupling (energy times length in 1D), greater than zero
+   * @param mu chemical potential of both components (energy)
+   * @param coherentCoupling J of the term {@code -J (psi_1^* psi_2 + c.c.)} (energy), not negative;
+   *     a negative J is the same physics with {@code psi_2 -> -psi_2}
+   * @param biquadraticCoupling kappa of the term {@code (kappa/4) S_y^2}, same unit as {@code g},
+   *     not negative
+   * @param temperature temperature T (energy), greater than zero
    * @throws IllegalArgumentException if a value is not finite or out of range
    */
   public CoupledPair {

@@ -19,6 +19,9 @@ public record GaussianPhase(double mass, double density, double temperature) {
   /**
    * Checks the values.
    *
+   * @param mass m, the inverse of the correlation length (1/length), greater than zero
+   * @param density density n of one component (1/length), greater than zero
+   * @param temperature T (energy), greater than zero
    * @throws IllegalArgumentException if a value is not finite and positive
    */
   public GaussianPhase {

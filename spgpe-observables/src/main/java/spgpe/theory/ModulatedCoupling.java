@@ -29,6 +29,11 @@ public record ModulatedCoupling(
   /**
    * Checks the values.
    *
+   * @param g contact coupling (energy times length), greater than zero
+   * @param density density n of one component (1/length), greater than zero
+   * @param meanCoupling J_0 (energy), greater than zero
+   * @param depth dimensionless delta, 0 to 10
+   * @param frequency angular frequency omega (1/time), greater than zero
    * @throws IllegalArgumentException if a value is not finite or out of range
    */
   public ModulatedCoupling {

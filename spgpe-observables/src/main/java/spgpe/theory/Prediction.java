@@ -19,6 +19,12 @@ public record Prediction(
   /**
    * Checks the values.
    *
+   * @param value predicted value
+   * @param error one-sigma uncertainty of the prediction, zero if exact for the purpose
+   * @param lowRatio smallest ratio measurement/value that the theory's approximations allow; one
+   *     for an exact theory
+   * @param highRatio largest such ratio, not below {@code lowRatio}
+   * @param warnings where the theory is used outside its checked range; empty if nowhere
    * @throws IllegalArgumentException if a number is not finite, the error negative or the band empty
    */
   public Prediction {

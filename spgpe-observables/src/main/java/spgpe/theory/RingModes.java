@@ -13,6 +13,8 @@ public record RingModes(double length, int cutoffMode) {
   /**
    * Checks the values.
    *
+   * @param length circumference L (length), greater than zero
+   * @param cutoffMode largest kept mode number, 1 to 100000
    * @throws IllegalArgumentException if a value is out of range
    */
   public RingModes {

@@ -104,15 +104,16 @@ class DecayRateTest {
     PhaseDecayRate rate = PhaseDecayRate.of(bubble, bubble.energy() / barrier);
     assertEquals(barrier, rate.barrierOverTemperature(), 1e-12);
     assertEquals(bubble.negativeEigenvalue(), rate.negativeEigenvalue(), 0);
-    double coarse = spectralRate(lambda, barrier, 64);
-    double fine = spectralRate(lambda, barrier, 128);
-    double extrapolated = 2 * fine - coarse;
-    assertEquals(extrapolated, rate.perLength(), 5e-3 * extrapolated);
+    double coarse = spectralRate(lambda, barrier, 96);
+    double fine = spectralRate(lambda, barrier, 192);
+    // Linear in 1/(cutoff + 1/2).
+    double extrapolated = (192.5 * fine - 96.5 * coarse) / 96;
+    assertEquals(extrapolated, rate.perLength(), 2e-3 * extrapolated);
   }
 
   private static double spectralRate(double lambda, double barrier, int cutoff) {
     double s = Math.sqrt(lambda * lambda - 1);
-    RingBasis basis = new RingBasis(36 / s, cutoff);
+    RingBasis basis = new RingBasis(28 / s, cutoff);
     double[] curvature = new double[basis.halfPoints()];
     double[] slopeSquared = new double[curvature.length];
     for (int p = 0; p < curvature.length; p++) {
