@@ -86,8 +86,8 @@ public record Comparison(
   }
 
   /**
-   * Outcome. For an exact prediction and Gaussian errors a correct simulation is called different once
-   * in 370 comparisons.
+   * Outcome. For an exact prediction and Gaussian errors a correct simulation is called different
+   * once in 370 comparisons.
    *
    * @return the verdict
    */
@@ -111,7 +111,8 @@ public record Comparison(
       return prediction.warnings();
     }
     return prediction
-        .withWarning("the combined error exceeds half of the predicted value: more statistics needed")
+        .withWarning(
+            "the combined error exceeds half of the predicted value: more statistics needed")
         .warnings();
   }
 

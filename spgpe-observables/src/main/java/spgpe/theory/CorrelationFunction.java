@@ -3,8 +3,8 @@ package spgpe.theory;
 import spgpe.internal.check.Check;
 
 /**
- * Stationary correlation function on the infinite line as a sum of decaying exponentials, {@code C(x)
- * = sum_n w_n exp(-r_n |x|)}. Immutable.
+ * Stationary correlation function on the infinite line as a sum of decaying exponentials, {@code
+ * C(x) = sum_n w_n exp(-r_n |x|)}. Immutable.
  */
 public final class CorrelationFunction {
   private final double[] weights;

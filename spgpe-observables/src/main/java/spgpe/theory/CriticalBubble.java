@@ -3,16 +3,16 @@ package spgpe.theory;
 import spgpe.internal.check.Check;
 
 /**
- * Critical bubble of the full two-component field on a ring: the saddle of the energy projected on the
- * kept modes, with density response, and its fluctuation spectrum in all four real fields.
+ * Critical bubble of the full two-component field on a ring: the saddle of the energy projected on
+ * the kept modes, with density response, and its fluctuation spectrum in all four real fields.
  *
  * <p>The mirror image with {@code psi_1} and {@code psi_2} exchanged is a second saddle of the same
- * energy. Found by Newton's method in the even sector from the closed profile of {@link PhaseBubble};
- * accepted only with exactly one negative and two zero modes (translation and global phase).
- * Immutable.
+ * energy. Found by Newton's method in the even sector from the closed profile of {@link
+ * PhaseBubble}; accepted only with exactly one negative and two zero modes (translation and global
+ * phase). Immutable.
  *
- * <p>An exact bubble on the infinite line satisfies {@code integral of sum_j |psi_j'|^2 = E_b} (first
- * integral of the static equations); compare {@link #gradientSquared} with {@link #energy}.
+ * <p>An exact bubble on the infinite line satisfies {@code integral of sum_j |psi_j'|^2 = E_b}
+ * (first integral of the static equations); compare {@link #gradientSquared} with {@link #energy}.
  */
 public final class CriticalBubble {
   private final CoupledPair pair;
@@ -214,15 +214,17 @@ public final class CriticalBubble {
   /**
    * Logarithm of the determinant factor of the rate.
    *
-   * @return {@code ln [prod' lambda_fv / prod' |lambda_s|]^(1/2)} over all kept modes without the zero
-   *     modes (one in the false vacuum, two at the bubble); unit of energy to the power one half
+   * @return {@code ln [prod' lambda_fv / prod' |lambda_s|]^(1/2)} over all kept modes without the
+   *     zero modes (one in the false vacuum, two at the bubble); unit of energy to the power one
+   *     half
    */
   public double logDeterminantFactor() {
     return spectrum.logDeterminantFactor();
   }
 
   /**
-   * Growth rate of the unstable mode under damped dynamics {@code dpsi/dt = -(i + gamma) dK/dpsi^*}.
+   * Growth rate of the unstable mode under damped dynamics {@code dpsi/dt = -(i + gamma)
+   * dK/dpsi^*}.
    *
    * @param damping dimensionless gamma, greater than zero
    * @return lambda_+, the only positive eigenvalue of {@code -(gamma + i) Hessian/2} (1/time)

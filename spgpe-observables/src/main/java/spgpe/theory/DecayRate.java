@@ -5,23 +5,24 @@ import java.util.List;
 import spgpe.internal.check.Check;
 
 /**
- * One-loop thermal decay rate of the false vacuum on a ring under damped dynamics, with the cutoff of
- * the simulation.
+ * One-loop thermal decay rate of the false vacuum on a ring under damped dynamics, with the cutoff
+ * of the simulation.
  *
  * <p>In orthonormal real mode coordinates the dynamics is {@code dq/dt = -(gamma + i) grad K/2 +
  * noise} and
  *
  * <pre>
- * Gamma/L = 2 (lambda_+/2 pi) J_t J_p (2 pi T)^(-1/2) [prod' lambda_fv/prod' |lambda_s|]^(1/2) exp(-E_b/T)
+ * Gamma/L = 2 (lambda_+/2 pi) J_t J_p (2 pi T)^(-1/2)
+ *           [prod' lambda_fv/prod' |lambda_s|]^(1/2) exp(-E_b/T)
  * </pre>
  *
- * with two mirror saddles, the growth rate lambda_+ of the unstable mode, the norm of the translation
- * mode {@code J_t = (integral of sum_j |psi_j'|^2)^(1/2)} and of the phase mode relative to the vacuum,
- * {@code J_p = (N_s/N_fv)^(1/2)}. Source: Langer, Ann. Phys. 54, 258 (1969); Haenggi, Talkner,
- * Borkovec, Rev. Mod. Phys. 62, 251 (1990).
+ * with two mirror saddles, the growth rate lambda_+ of the unstable mode, the norm of the
+ * translation mode {@code J_t = (integral of sum_j |psi_j'|^2)^(1/2)} and of the phase mode
+ * relative to the vacuum, {@code J_p = (N_s/N_fv)^(1/2)}. Source: Langer, Ann. Phys. 54, 258
+ * (1969); Haenggi, Talkner, Borkovec, Rev. Mod. Phys. 62, 251 (1990).
  *
- * <p>The one-loop prefactor depends on the cutoff at fixed bare parameters (the simulated rate hardly
- * does): compare only at equal ring and cutoff. Immutable.
+ * <p>The one-loop prefactor depends on the cutoff at fixed bare parameters (the simulated rate
+ * hardly does): compare only at equal ring and cutoff. Immutable.
  */
 public final class DecayRate {
   private static final double LOWEST_DAMPING = 0.05;
@@ -124,11 +125,11 @@ public final class DecayRate {
   /**
    * The ring's rate as a prediction with its validity statement.
    *
-   * <p>Simulations of this model (SPGPE on a ring, 1D, J = .1 g n, lambda squared 2.25) over this rate
-   * gave .65, .79, .90 at E_b/T = 10, 14, 18 for gamma = .1 and .42 at E_b/T = 10 for gamma = .02: below
-   * one, rising with E_b/T, falling at small damping where thermalisation is slow (compare Pirvu,
-   * Shkerin, Sibiryakov, arXiv:2408.06411). Hence the band .5 to 1.05 for gamma at least .05 and E_b/T
-   * from 9 to 18; outside it the band is wider and a warning says why.
+   * <p>Simulations of this model (SPGPE on a ring, 1D, J = .1 g n, lambda squared 2.25) over this
+   * rate gave .65, .79, .90 at E_b/T = 10, 14, 18 for gamma = .1 and .42 at E_b/T = 10 for gamma =
+   * .02: below one, rising with E_b/T, falling at small damping where thermalisation is slow
+   * (compare Pirvu, Shkerin, Sibiryakov, arXiv:2408.06411). Hence the band .5 to 1.05 for gamma at
+   * least .05 and E_b/T from 9 to 18; outside it the band is wider and a warning says why.
    *
    * @return the prediction; its band is about the rate of the whole ring
    */

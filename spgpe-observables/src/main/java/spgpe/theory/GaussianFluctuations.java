@@ -8,8 +8,8 @@ import spgpe.internal.check.Check;
  * compare with {@link PairEquilibrium} instead.
  *
  * <p>Relative channel: {@code A = (k^2 + m^2)/2} for the phase and {@code B = k^2/2 + 2 (g n -+ J)}
- * for the density difference (minus in the false vacuum), frequency {@code sqrt(A B)}; total channel
- * {@code A = k^2/2}, {@code B = k^2/2 + 2 g n}. Immutable.
+ * for the density difference (minus in the false vacuum), frequency {@code sqrt(A B)}; total
+ * channel {@code A = k^2/2}, {@code B = k^2/2 + 2 g n}. Immutable.
  */
 public final class GaussianFluctuations {
   private final CoupledPair pair;
@@ -163,8 +163,8 @@ public final class GaussianFluctuations {
    * Curvatures of the energy in orthonormal real coordinates at one wave number.
    *
    * @param waveNumber k (1/length), finite
-   * @return total phase {@code k^2}, relative phase {@code k^2 + m^2}, relative density {@code k^2 +
-   *     4 (g n -+ J)}, total density {@code k^2 + 4 g n}, in this order (energy)
+   * @return total phase {@code k^2}, relative phase {@code k^2 + m^2}, relative density {@code k^2
+   *     + 4 (g n -+ J)}, total density {@code k^2 + 4 g n}, in this order (energy)
    * @throws IllegalArgumentException if k is not finite
    */
   public double[] curvatures(double waveNumber) {

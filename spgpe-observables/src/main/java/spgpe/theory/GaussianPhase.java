@@ -7,8 +7,8 @@ import spgpe.internal.check.Check;
  * T/[(n/2)(k^2 + m^2)]}.
  *
  * <p>This is the limit T to zero. Interactions of the fluctuations change it in proportion to T; in
- * the false vacuum at {@code J = .1 g n}, {@code lambda^2 = 2.25} the variance is larger by 8 percent
- * at E_b/T = 28 and by 22 percent at E_b/T = 14.
+ * the false vacuum at {@code J = .1 g n}, {@code lambda^2 = 2.25} the variance is larger by 8
+ * percent at E_b/T = 28 and by 22 percent at E_b/T = 14.
  *
  * @param mass m, the inverse of the correlation length (1/length), greater than zero
  * @param density density n of one component (1/length), greater than zero

@@ -51,8 +51,8 @@ public final class Mathieu {
    *
    * @param a parameter a, finite, {@code |a| <= 1e6}
    * @param q parameter q, {@code |q| <= 1e6}
-   * @return growth rate (zero in a stable region) and principal value of the characteristic exponent
-   *     in 0 to 1, i.e. {@code cos(pi nu) = trace/2} of the monodromy over pi
+   * @return growth rate (zero in a stable region) and principal value of the characteristic
+   *     exponent in 0 to 1, i.e. {@code cos(pi nu) = trace/2} of the monodromy over pi
    * @throws IllegalArgumentException if a value is out of range
    */
   public static FloquetExponent exponent(double a, double q) {

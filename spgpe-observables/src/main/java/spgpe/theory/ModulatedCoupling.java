@@ -5,17 +5,17 @@ import org.apache.commons.math3.special.BesselJ;
 import spgpe.internal.check.Check;
 
 /**
- * Coherent coupling modulated as {@code J(t) = J_0 + delta omega cos(omega t)}: the averaged potential
- * it makes and the parametric instability it causes.
+ * Coherent coupling modulated as {@code J(t) = J_0 + delta omega cos(omega t)}: the averaged
+ * potential it makes and the parametric instability it causes.
  *
- * <p>Rotating the spinor by {@code exp(i sigma_x delta sin(omega t))} removes the modulation exactly;
- * the average of the rotated interaction is {@code kappa = (g/2)[1 - BesselJ_0(4 delta)]} times {@code
- * S_y^2/4}, and {@code g - kappa} replaces g in the density-difference term {@code S_z^2/4}. The idea is
- * of Fialko et al., EPL 110, 56001 (2015), J. Phys. B 50, 024003 (2017); formulas derived, see {@code
- * docs/theory-references.md}.
+ * <p>Rotating the spinor by {@code exp(i sigma_x delta sin(omega t))} removes the modulation
+ * exactly; the average of the rotated interaction is {@code kappa = (g/2)[1 - BesselJ_0(4 delta)]}
+ * times {@code S_y^2/4}, and {@code g - kappa} replaces g in the density-difference term {@code
+ * S_z^2/4}. The idea is of Fialko et al., EPL 110, 56001 (2015), J. Phys. B 50, 024003 (2017);
+ * formulas derived, see {@code docs/theory-references.md}.
  *
- * <p>Exact linear problem around phase pi: {@code d eta/dt = n A phi - gamma B eta}, {@code d phi/dt =
- * -(B/n) eta - gamma A phi}, {@code A = k^2/2 - 2 J(t)}, {@code B = A + 2 g n}.
+ * <p>Exact linear problem around phase pi: {@code d eta/dt = n A phi - gamma B eta}, {@code d
+ * phi/dt = -(B/n) eta - gamma A phi}, {@code A = k^2/2 - 2 J(t)}, {@code B = A + 2 g n}.
  *
  * @param g contact coupling (energy times length), greater than zero
  * @param density density n of one component (1/length), greater than zero
@@ -95,8 +95,8 @@ public record ModulatedCoupling(
    * Relative mode of the averaged problem, the limit of infinite frequency.
    *
    * @param waveNumber k (1/length), finite
-   * @return frequency {@code sqrt[(K - 2 J_0 + 2 kappa n)(K - 2 J_0 + 2 (g - kappa) n)]}, {@code K =
-   *     k^2/2}; a negative slow rate if the averaged vacuum is unstable
+   * @return frequency {@code sqrt[(K - 2 J_0 + 2 kappa n)(K - 2 J_0 + 2 (g - kappa) n)]}, {@code K
+   *     = k^2/2}; a negative slow rate if the averaged vacuum is unstable
    * @throws IllegalArgumentException if k is not finite
    */
   public DampedMode averagedMode(double waveNumber) {
@@ -169,7 +169,8 @@ public record ModulatedCoupling(
   /**
    * Largest momentum cutoff that leaves the first resonance outside the kept modes.
    *
-   * @return k_c with {@code k_c^2/2 = K_res - g n BesselJ_1(4 delta)} (1/length), zero if there is none
+   * @return k_c with {@code k_c^2/2 = K_res - g n BesselJ_1(4 delta)} (1/length), zero if there is
+   *     none
    */
   public double cutoffForStability() {
     return Math.sqrt(2 * Math.max(0, resonantKinetic() - resonantGrowthRate()));
@@ -250,7 +251,8 @@ public record ModulatedCoupling(
    *
    * @param ring length and cutoff
    * @param damping dimensionless gamma, not negative
-   * @return the rate (1/time); the false vacuum is stable under the modulation if it is not positive
+   * @return the rate (1/time); the false vacuum is stable under the modulation if it is not
+   *     positive
    * @throws IllegalArgumentException if a value is out of range
    * @throws UnconvergedException if a propagator does not converge
    */
@@ -312,9 +314,9 @@ public record ModulatedCoupling(
   }
 
   /**
-   * Exponent of the Mathieu equation that the problem becomes for {@code g n} much larger than {@code
-   * k^2/2}, J_0 and delta omega, with {@code z = omega t/2}, {@code a = 8 g n (k^2/2 - 2 J_0)/omega^2},
-   * {@code |q| = 8 g n delta/omega}.
+   * Exponent of the Mathieu equation that the problem becomes for {@code g n} much larger than
+   * {@code k^2/2}, J_0 and delta omega, with {@code z = omega t/2}, {@code a = 8 g n (k^2/2 - 2
+   * J_0)/omega^2}, {@code |q| = 8 g n delta/omega}.
    *
    * @param waveNumber k (1/length), finite
    * @return growth rate and frequency per unit time

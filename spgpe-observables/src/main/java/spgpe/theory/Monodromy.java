@@ -4,8 +4,8 @@ import java.util.function.DoubleUnaryOperator;
 
 /**
  * Propagator over one period of {@code x' = d x + up(t) y, y' = down(t) x - d y} with periodic
- * coefficients: Magnus expansion of order six on three Gauss points (Blanes, Casas, Oteo, Ros, Phys. Rep. 470, 151
- * (2009); from memory), steps doubled until the trace stands.
+ * coefficients: Magnus expansion of order six on three Gauss points (Blanes, Casas, Oteo, Ros,
+ * Phys. Rep. 470, 151 (2009); from memory), steps doubled until the trace stands.
  */
 final class Monodromy {
   private static final double TOLERANCE = 2e-12;

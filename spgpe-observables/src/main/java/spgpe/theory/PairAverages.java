@@ -8,8 +8,8 @@ package spgpe.theory;
  * @param sySquared {@code <S_y^2>} with {@code S_y = 2 Im psi_1^* psi_2} (1/length squared)
  * @param densityProduct {@code <n_1 n_2>} (1/length squared)
  * @param densitySquared {@code <n_j^2>} of one component (1/length squared)
- * @param truncationError estimate of the largest relative error of these numbers from the basis and,
- *     on a ring, from the states left out of the trace
+ * @param truncationError estimate of the largest relative error of these numbers from the basis
+ *     and, on a ring, from the states left out of the trace
  */
 public record PairAverages(
     double density,

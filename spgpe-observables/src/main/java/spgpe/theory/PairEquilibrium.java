@@ -8,12 +8,12 @@ import spgpe.internal.check.Check;
  * Exact classical-field equilibrium of two coupled components in one dimension, infinite line or
  * ring, without momentum cutoff; {@link #withCutoff} adds the leading effect of a cutoff.
  *
- * <p>Transfer operator of a particle in four dimensions, in units of {@code (g T)^(1/3)}: {@code h =
- * sum_j (-Laplacian_j/2 + s_j^4/2 - alpha s_j^2) - J' (s_1^* s_2 + c.c.) + kappa' (|s_1|^2 |s_2|^2/2
- * - (s_1^*2 s_2^2 + c.c.)/4)}, {@code J' = J/(g T)^(2/3)}, {@code kappa' = kappa/g}, on products of
- * the single-component radial eigenstates. The total angular momentum M (global phase) is conserved:
- * the ground state has M = 0, the first-order coherence decays through M = 1, and the ring is the
- * trace over all M.
+ * <p>Transfer operator of a particle in four dimensions, in units of {@code (g T)^(1/3)}: {@code h
+ * = sum_j (-Laplacian_j/2 + s_j^4/2 - alpha s_j^2) - J' (s_1^* s_2 + c.c.) + kappa' (|s_1|^2
+ * |s_2|^2/2 - (s_1^*2 s_2^2 + c.c.)/4)}, {@code J' = J/(g T)^(2/3)}, {@code kappa' = kappa/g}, on
+ * products of the single-component radial eigenstates. The total angular momentum M (global phase)
+ * is conserved: the ground state has M = 0, the first-order coherence decays through M = 1, and the
+ * ring is the trace over all M.
  *
  * <p>Sources: Scalapino, Sears, Ferrell, Phys. Rev. B 6, 3409 (1972) for the method; two coupled
  * fields: Beck, Mazets, Schweigler, Phys. Rev. A 98, 023613 (2018). Immutable.
@@ -25,9 +25,9 @@ public final class PairEquilibrium {
   private static final int SMALLEST_WIDTH = 8;
   private static final int LARGEST_WIDTH = 64;
   private static final int MOST_STATES = 6;
-  private static final int LARGEST_SECTOR = 14;
-  /** States with a smaller Boltzmann weight than exp(-32) are left out of the ring trace. */
-  private static final double LARGEST_EXPONENT = 32;
+  private static final int LARGEST_SECTOR = 20;
+  /** States with a smaller Boltzmann weight than exp(-24) are left out of the ring trace. */
+  private static final double LARGEST_EXPONENT = 24;
 
   private final CoupledPair pair;
   private final double unit;
@@ -213,7 +213,7 @@ public final class PairEquilibrium {
 
   /**
    * Averages on a ring: {@code sum_s exp(-E_s L) O_ss / sum_s exp(-E_s L)} over the states of both
-   * exchange classes and all total angular momenta with a weight above exp(-32).
+   * exchange classes and all total angular momenta with a weight above exp(-24).
    *
    * @param length circumference L (length), greater than zero
    * @return the averages
@@ -224,17 +224,16 @@ public final class PairEquilibrium {
     double scaledLength = Check.positive(length, "length") * unit;
     double limit = groundEnergy + LARGEST_EXPONENT / scaledLength;
     double gap = fieldCorrelation().slowestRate() / unit;
-    // Sector energies grow at least about quadratically with M (quasi-condensate: exactly).
+    // Sector energies grow between M (ideal gas) and M^2 (quasi-condensate): a lower bound.
     int expected = 2 + (int) Math.ceil(Math.sqrt((limit - groundEnergy) / gap));
+    if (expected > LARGEST_SECTOR + 2) {
+      throw tooShort(length);
+    }
     PairSolver solver = solver(states, halfWidth, Math.min(expected, LARGEST_SECTOR));
     double[] sums = new double[6];
     for (int total = 0; ; total++) {
       if (total > LARGEST_SECTOR) {
-        throw new UnconvergedException(
-            "the ring is too short for its coherence length: more than " + LARGEST_SECTOR
-                + " angular-momentum sectors matter at length=" + length
-                + ", coherence length " + fieldCorrelation().decayLength()
-                + "; use a longer ring");
+        throw tooShort(length);
       }
       if (total > expected) {
         expected = Math.min(2 * expected, LARGEST_SECTOR);
@@ -253,6 +252,13 @@ public final class PairEquilibrium {
             sums[5] / sums[0],
             0);
     return scaled(raw, averages.truncationError() + Math.exp(-LARGEST_EXPONENT));
+  }
+
+  private UnconvergedException tooShort(double length) {
+    return new UnconvergedException(
+        "the ring is too short for its coherence length: more than " + LARGEST_SECTOR
+            + " angular-momentum sectors matter at length=" + length + ", coherence length "
+            + fieldCorrelation().decayLength() + "; use a longer ring or a higher temperature");
   }
 
   private int addSector(
@@ -279,10 +285,10 @@ public final class PairEquilibrium {
    * <p>The missing modes carry {@code dn = 2 T/(pi k_c)} per component and shift the mean field of
    * the kept ones, so the truncated field at mu behaves as the full field at {@code mu' = mu + (2 g
    * + kappa/2) dn}: density {@code n(mu') - dn}, coherence {@code J(mu')}, {@code <S_y^2>(mu') - 4
-   * n(mu') dn}, and likewise {@code <n_1 n_2> - 2 n dn}, {@code <n_j^2> - 4 n dn}. Whether n is taken
-   * at mu or mu' does not matter to this order; mu' was the closer one to an exact sampler in all
-   * five sets tried. The reported truncation error is {@code (dn/n)^2}, the size of the neglected
-   * order.
+   * n(mu') dn}, and likewise {@code <n_1 n_2> - 2 n dn}, {@code <n_j^2> - 4 n dn}. Whether n is
+   * taken at mu or mu' does not matter to this order; mu' was the closer one to an exact sampler in
+   * all five sets tried. The reported truncation error is {@code (dn/n)^2}, the size of the
+   * neglected order.
    *
    * @param pair parameters
    * @param ring length and cutoff of the simulation

@@ -1,8 +1,8 @@
 package spgpe.theory;
 
 /**
- * Transfer operator of two coupled components in the sector of total angular momentum M, on products
- * of single-component radial eigenstates {@code |k1, m> |k2, M - m>}.
+ * Transfer operator of two coupled components in the sector of total angular momentum M, on
+ * products of single-component radial eigenstates {@code |k1, m> |k2, M - m>}.
  *
  * <p>A vector is a sequence of K x K blocks (rows k1, columns k2), one per m. Exchange of the
  * components maps the block range onto itself.

@@ -5,13 +5,13 @@ import spgpe.internal.check.Check;
 /**
  * Critical bubble of the relative phase alone in one dimension, densities frozen, in closed form.
  *
- * <p>With {@code H = integral of (n/4) phi'^2 + 2 J n (-cos phi + (lambda^2/2) sin^2 phi)} and {@code
- * s = sqrt(lambda^2 - 1)} the bubble is {@code phi(x) = pi - 2 arctan(s sech(m x))}, {@code m = 2
- * sqrt(J) s}, of energy {@code n sqrt(J) B_1}, {@code B_1 = 4 (s - arccosh(lambda)/lambda)}. Derived,
- * see {@code docs/theory-references.md}. Immutable.
+ * <p>With {@code H = integral of (n/4) phi'^2 + 2 J n (-cos phi + (lambda^2/2) sin^2 phi)} and
+ * {@code s = sqrt(lambda^2 - 1)} the bubble is {@code phi(x) = pi - 2 arctan(s sech(m x))}, {@code
+ * m = 2 sqrt(J) s}, of energy {@code n sqrt(J) B_1}, {@code B_1 = 4 (s - arccosh(lambda)/lambda)}.
+ * Derived, see {@code docs/theory-references.md}. Immutable.
  *
- * <p>Density response lowers the energy: by 2 percent at {@code J = .01 g n}, 14 percent at {@code J
- * = .1 g n} (lambda squared 2.25). Use {@link CriticalBubble} beyond that.
+ * <p>Density response lowers the energy: by 2 percent at {@code J = .01 g n}, 14 percent at {@code
+ * J = .1 g n} (lambda squared 2.25). Use {@link CriticalBubble} beyond that.
  */
 public final class PhaseBubble {
   private final double density;
@@ -33,8 +33,8 @@ public final class PhaseBubble {
    * @param coherentCoupling J (energy), greater than zero
    * @param lambda barrier parameter, greater than one and at most 1000
    * @return the bubble
-   * @throws IllegalArgumentException if a value is out of range; without {@code lambda > 1} there is
-   *     no metastable state
+   * @throws IllegalArgumentException if a value is out of range; without {@code lambda > 1} there
+   *     is no metastable state
    */
   public static PhaseBubble of(double density, double coherentCoupling, double lambda) {
     Check.positive(density, "density");
@@ -151,8 +151,8 @@ public final class PhaseBubble {
   }
 
   /**
-   * Ratio of fluctuation determinants of the phase, zero mode removed, without cutoff; in lengths of
-   * {@code 1/(2 sqrt(J))}.
+   * Ratio of fluctuation determinants of the phase, zero mode removed, without cutoff; in lengths
+   * of {@code 1/(2 sqrt(J))}.
    *
    * @return {@code det'/det_fv = -B_1/(32 s^5)}; negative because of the one unstable mode
    */

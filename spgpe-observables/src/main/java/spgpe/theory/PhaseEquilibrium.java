@@ -6,9 +6,9 @@ import spgpe.internal.check.Check;
  * Exact classical equilibrium of the relative phase alone on the infinite line, densities frozen:
  * {@code H = integral of (n/4) phi'^2 - 2 J n cos phi + kappa n^2 sin^2 phi}.
  *
- * <p>Without kappa this is the sine-Gordon chain and the transfer operator is Mathieu's equation with
- * {@code z = phi/2}, {@code q = 4 J n^2/T^2}, {@code a = 4 n E/T}: Scalapino, Sears, Ferrell, Phys.
- * Rev. B 6, 3409 (1972). With kappa it is solved in the same Fourier basis. Immutable.
+ * <p>Without kappa this is the sine-Gordon chain and the transfer operator is Mathieu's equation
+ * with {@code z = phi/2}, {@code q = 4 J n^2/T^2}, {@code a = 4 n E/T}: Scalapino, Sears, Ferrell,
+ * Phys. Rev. B 6, 3409 (1972). With kappa it is solved in the same Fourier basis. Immutable.
  *
  * <p>Limit of validity: frozen densities. Against the exact two-component problem the correlation
  * length of sin phi is right within .6 percent for J up to .05 g n when n is the zero-temperature
@@ -151,7 +151,7 @@ public final class PhaseEquilibrium {
     return truncationError;
   }
 
-  /** Spectrum of {@code -4 d^2/dphi^2 - 2 q cos phi + p sin^2 phi} in even and odd Fourier modes. */
+  /** Spectrum of {@code -4 d^2/dphi^2 - 2 q cos phi + p sin^2 phi}, even and odd modes. */
   private static final class Solution {
     final double ground;
     final double cosine;

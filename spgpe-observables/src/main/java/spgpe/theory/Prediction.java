@@ -8,8 +8,8 @@ import spgpe.internal.check.Check;
  *
  * @param value predicted value
  * @param error one-sigma uncertainty of the prediction, zero if exact for the purpose
- * @param lowRatio smallest ratio measurement/value that the theory's approximations allow; one for an
- *     exact theory
+ * @param lowRatio smallest ratio measurement/value that the theory's approximations allow; one for
+ *     an exact theory
  * @param highRatio largest such ratio, not below {@code lowRatio}
  * @param warnings where the theory is used outside its checked range; empty if nowhere
  */
@@ -25,7 +25,8 @@ public record Prediction(
    *     for an exact theory
    * @param highRatio largest such ratio, not below {@code lowRatio}
    * @param warnings where the theory is used outside its checked range; empty if nowhere
-   * @throws IllegalArgumentException if a number is not finite, the error negative or the band empty
+   * @throws IllegalArgumentException if a number is not finite, the error negative or the band
+   *     empty
    */
   public Prediction {
     Check.finite(value, "value");

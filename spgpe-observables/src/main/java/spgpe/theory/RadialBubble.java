@@ -6,10 +6,10 @@ import org.apache.commons.math3.ode.nonstiff.DormandPrince853Integrator;
 import spgpe.internal.check.Check;
 
 /**
- * Circular critical bubble of the relative phase alone in two dimensions, densities frozen, found by
- * shooting. Lengths are in units of {@code 1/(2 sqrt(J))}; the energy is {@code (n/2) B_2(lambda)},
- * independent of J. Scaling (Derrick, J. Math. Phys. 5, 1252 (1964)) makes the potential energy
- * vanish, so that {@code B_2} equals its gradient part. Immutable.
+ * Circular critical bubble of the relative phase alone in two dimensions, densities frozen, found
+ * by shooting. Lengths are in units of {@code 1/(2 sqrt(J))}; the energy is {@code (n/2)
+ * B_2(lambda)}, independent of J. Scaling (Derrick, J. Math. Phys. 5, 1252 (1964)) makes the
+ * potential energy vanish, so that {@code B_2} equals its gradient part. Immutable.
  */
 public final class RadialBubble {
   private static final double START = 1e-3;

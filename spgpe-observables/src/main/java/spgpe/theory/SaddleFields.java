@@ -11,8 +11,8 @@ import org.apache.commons.math3.linear.SingularMatrixException;
  *
  * <p>Energy density {@code u'^2 + v'^2 + g rho^2 - 2 mu rho - 2 J (u^2 - v^2) + 4 kappa u^2 v^2},
  * {@code rho = u^2 + v^2}. Fluctuations split by parity and by the symmetry {@code psi_1 <->
- * psi_2^*}: class A keeps it ({@code delta u, delta v}), class B breaks it ({@code psi_1 += p + i q,
- * psi_2 += -p + i q}). Blocks are in orthonormal real coordinates.
+ * psi_2^*}: class A keeps it ({@code delta u, delta v}), class B breaks it ({@code psi_1 += p + i
+ * q, psi_2 += -p + i q}). Blocks are in orthonormal real coordinates.
  */
 final class SaddleFields {
   private static final int NEWTON_LIMIT = 60;
@@ -210,8 +210,8 @@ final class SaddleFields {
   }
 
   /**
-   * Hessian block. Class A has rows (u, v); class B has rows (q, -p), so that multiplication of both
-   * fields by i maps the A coordinates one to one on the B coordinates.
+   * Hessian block. Class A has rows (u, v); class B has rows (q, -p), so that multiplication of
+   * both fields by i maps the A coordinates one to one on the B coordinates.
    */
   double[][] block(boolean keepsSymmetry, boolean even) {
     double g = pair.g();

@@ -69,10 +69,10 @@ final class SaddleSpectrum {
   }
 
   /**
-   * With {@code c = 2 lambda/(1 + gamma^2)} the unstable mode (a, b) obeys {@code (H_A + c gamma) a + c
-   * b = 0}, {@code (H_B + c gamma) b = c a}, hence {@code F(c) a = 0} with the symmetric {@code F(c) =
-   * H_A + c gamma + c^2 (H_B + c gamma)^{-1}}, which grows with c. Solved by Rayleigh iteration in the
-   * eigenbasis of H_B.
+   * With {@code c = 2 lambda/(1 + gamma^2)} the unstable mode (a, b) obeys {@code (H_A + c gamma) a
+   * + c b = 0}, {@code (H_B + c gamma) b = c a}, hence {@code F(c) a = 0} with the symmetric {@code
+   * F(c) = H_A + c gamma + c^2 (H_B + c gamma)^{-1}}, which grows with c. Solved by Rayleigh
+   * iteration in the eigenbasis of H_B.
    */
   double growthRate(double damping) {
     double[][] transformed = transformedBlock();

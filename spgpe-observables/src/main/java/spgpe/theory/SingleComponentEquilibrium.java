@@ -7,8 +7,8 @@ import spgpe.internal.check.Check;
  * |psi'|^2/2 + (g/2)|psi|^4 - mu |psi|^2}.
  *
  * <p>The weight {@code exp(-K/T)} along x is the imaginary-time path integral of a particle in two
- * dimensions; with {@code psi = a s}, {@code a^2 = (T^2/g)^(1/3)} and energies in units of {@code (g
- * T)^(1/3)} its Hamiltonian is {@code -Laplacian/2 + s^4/2 - alpha s^2} with the only parameter
+ * dimensions; with {@code psi = a s}, {@code a^2 = (T^2/g)^(1/3)} and energies in units of {@code
+ * (g T)^(1/3)} its Hamiltonian is {@code -Laplacian/2 + s^4/2 - alpha s^2} with the only parameter
  * {@code alpha = mu/(g T)^(2/3)}. Method: Scalapino, Sears, Ferrell, Phys. Rev. B 6, 3409 (1972);
  * Castin et al., J. Mod. Opt. 47, 2671 (2000). Immutable.
  */
@@ -56,7 +56,8 @@ public final class SingleComponentEquilibrium {
    * @param mu chemical potential (energy)
    * @param temperature temperature (energy), greater than zero
    * @return the equilibrium
-   * @throws IllegalArgumentException if a value is not finite, out of range, or {@code |alpha| > 100}
+   * @throws IllegalArgumentException if a value is not finite, out of range, or {@code |alpha| >
+   *     100}
    * @throws UnconvergedException if the basis does not converge
    */
   public static SingleComponentEquilibrium of(double g, double mu, double temperature) {

@@ -11,12 +11,12 @@
  * </pre>
  *
  * and the stationary law is {@code exp(-K/T)}. The relative phase is {@code phi = theta_1 -
- * theta_2}; with {@code J > 0} the true vacuum has {@code phi = 0} and the false vacuum {@code phi =
- * pi}. Derivations and sources: {@code docs/theory-references.md}.
+ * theta_2}; with {@code J > 0} the true vacuum has {@code phi = 0} and the false vacuum {@code phi
+ * = pi}. Derivations and sources: {@code docs/theory-references.md}.
  *
- * <p>All types are immutable and safe for use by several threads. Each solver refines its own basis,
- * reports its truncation error and refuses with {@link spgpe.theory.UnconvergedException} rather than
- * returning an unconverged number.
+ * <p>All types are immutable and safe for use by several threads. Each solver refines its own
+ * basis, reports its truncation error and refuses with {@link spgpe.theory.UnconvergedException}
+ * rather than returning an unconverged number.
  */
 @NullMarked
 package spgpe.theory;

@@ -94,8 +94,8 @@ class DecayRateTest {
   }
 
   /**
-   * Overdamped phase: the closed form against the same formula evaluated from Fourier spectra at two
-   * cutoffs, whose error falls as 1/cutoff and is extrapolated away.
+   * Overdamped phase: the closed form against the same formula evaluated from Fourier spectra at
+   * two cutoffs, whose error falls as 1/cutoff and is extrapolated away.
    */
   @ParameterizedTest
   @CsvSource({"1.2, 9", "1.5, 9", "2, 12"})

@@ -174,6 +174,29 @@ class PairEquilibriumTest {
         s.fieldCorrelation().decayLength(), e.fieldCorrelation().decayLength(), 1e-7);
   }
 
+  /** Ring trace of an uncoupled pair against the trace of the radial problem, many states. */
+  @Test
+  void uncoupledRing() {
+    double length = 12;
+    double unit = Math.cbrt(.3);
+    RadialStates radial = RadialStates.of(.8 / (unit * unit), 8, 14, 0);
+    double weight = 0;
+    double square = 0;
+    for (int m = 0; m <= 14; m++) {
+      for (int k = 0; k < 8; k++) {
+        double gap = radial.energy[m][k] - radial.energy[0][0];
+        double w = (m == 0 ? 1 : 2) * Math.exp(-gap * length * unit);
+        weight += w;
+        square += w * radial.square[m][k * 8 + k];
+      }
+    }
+    double amplitudeSquared = unit * unit;
+    PairEquilibrium e = PairEquilibrium.of(new CoupledPair(1, .8, 0, 0, .3));
+    double line = e.averages().density();
+    assertEquals(amplitudeSquared * square / weight, e.onRing(length).density(), 2e-8);
+    assertTrue(Math.abs(e.onRing(length).density() - line) > 1e-3);
+  }
+
   @Test
   void refusals() {
     assertThrows(

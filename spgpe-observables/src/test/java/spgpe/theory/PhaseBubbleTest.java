@@ -81,8 +81,8 @@ class PhaseBubbleTest {
   }
 
   /**
-   * The digits of a shooting code with its own tolerance; half radius in 1/(2 sqrt J), there read off
-   * an output grid, here confirmed by {@link #radialCentre}.
+   * The digits of a shooting code with its own tolerance; half radius in 1/(2 sqrt J), there read
+   * off an output grid, here confirmed by {@link #radialCentre}.
    */
   @ParameterizedTest
   @CsvSource({

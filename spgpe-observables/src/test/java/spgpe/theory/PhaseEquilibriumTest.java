@@ -93,8 +93,8 @@ class PhaseEquilibriumTest {
   }
 
   /**
-   * The independent row at T = .01 (n = 1.04450385, J/n = .99156582, length 1.28125153) is that of a
-   * basis cut at angular momentum 24; the converged values differ from it by 8e-8 to 4e-5.
+   * The independent row at T = .01 (n = 1.04450385, J/n = .99156582, length 1.28125153) is that of
+   * a basis cut at angular momentum 24; the converged values differ from it by 8e-8 to 4e-5.
    */
   @Test
   void truncatedBasis() {
