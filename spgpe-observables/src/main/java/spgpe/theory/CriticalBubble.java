@@ -11,6 +11,10 @@ import spgpe.internal.check.Check;
  * PhaseBubble}; accepted only with exactly one negative and two zero modes (translation and global
  * phase). Immutable.
  *
+ * <p>The interaction is {@code (g/4)(N^2 + S_z^2) + (kappa/4) S_y^2}. For kappa above g it is
+ * cheaper to leave the false vacuum through {@code S_z = n_1 - n_2} than through {@code S_y}, and
+ * the symmetric bubble gets further negative modes; such parameters are refused.
+ *
  * <p>An exact bubble on the infinite line satisfies {@code integral of sum_j |psi_j'|^2 = E_b}
  * (first integral of the static equations); compare {@link #gradientSquared} with {@link #energy}.
  */
@@ -46,14 +50,20 @@ public final class CriticalBubble {
    * @param pair metastable parameters; the temperature is not used
    * @param ring length and cutoff of the simulation to compare with; cutoff mode at most 200
    * @return the bubble
-   * @throws IllegalArgumentException if there is no metastable state, the ring is shorter than the
-   *     bubble or the cutoff is out of range
+   * @throws IllegalArgumentException if there is no metastable state, kappa is not below g, the
+   *     ring is shorter than the bubble or the cutoff is out of range
    * @throws UnconvergedException if no saddle with one negative mode is found
    */
   public static CriticalBubble of(CoupledPair pair, RingModes ring) {
     Check.notNull(pair, "pair").requireMetastable();
     Check.notNull(ring, "ring");
     Check.inRange(ring.cutoffMode(), 4, 200, "cutoffMode");
+    Check.argument(
+        pair.biquadraticCoupling() < pair.g(),
+        "the bubble of the relative phase needs biquadraticCoupling < g: at or above it the pair"
+            + " passes the barrier through a density difference instead and this bubble is no"
+            + " longer the saddle: biquadraticCoupling=%s, g=%s",
+        pair.biquadraticCoupling(), pair.g());
     double mass = GaussianFluctuations.of(pair, Vacuum.FALSE).mass();
     Check.argument(
         ring.length() * mass > 8,

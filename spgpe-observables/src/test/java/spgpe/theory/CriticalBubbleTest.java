@@ -98,6 +98,28 @@ class CriticalBubbleTest {
     assertEquals(-.578048 * energyUnit, b.negativeEigenvalue(), 1e-6);
   }
 
+  /**
+   * At kappa = g the spin part of the interaction is isotropic in (S_y, S_z); above it the bubble
+   * of the relative phase has a second negative mode, in the class of density differences.
+   */
+  @Test
+  void phaseBubbleIsNoSaddleAboveIsotropy() {
+    for (double kappa : new double[] {.95, 1.05}) {
+      CoupledPair pair = new CoupledPair(1, 1.3, .3, kappa, .05);
+      RingBasis basis = new RingBasis(24, 40);
+      SaddleFields fields = SaddleFields.guess(pair, basis, false).newton();
+      SaddleSpectrum spectrum = new SaddleSpectrum(pair, fields);
+      assertEquals(kappa < 1 ? 1 : 2, spectrum.negativeModes(), "kappa=" + kappa);
+      double lowest = SymmetricEigen.of(fields.block(false, true)).value(0);
+      assertEquals(kappa < 1, lowest > -1e-9, "lowest " + lowest);
+      if (kappa > 1) {
+        assertThrows(
+            IllegalArgumentException.class,
+            () -> CriticalBubble.of(pair, new RingModes(24, 40)));
+      }
+    }
+  }
+
   @Test
   void refusals() {
     RingModes ring = new RingModes(48, 24);
