@@ -56,7 +56,7 @@ class SnippetsTest {
     for (Path source : files(SOURCES, ".java")) {
       Matcher region = REGION.matcher(Files.readString(source));
       while (region.find()) {
-        regions.put(region.group(1), region.group(2).stripIndent().strip());
+        regions.put(region.group(1), region.group(2).stripTrailing().stripIndent());
       }
     }
     Set<String> seen = new HashSet<>();
