@@ -32,7 +32,7 @@ abstract class BaseStepper implements Stepper {
   @Override
   public final void start(Amplitudes initial, long firstStep) {
     Check.argument(firstStep >= 0, "first step must be >= 0: firstStep=%s", firstStep);
-    state.set(initial);
+    state.set(Check.notNull(initial, "state"));
     step = firstStep;
     started = true;
     atSymmetricPoint = true;
@@ -52,6 +52,7 @@ abstract class BaseStepper implements Stepper {
   @Override
   public final void observe(Amplitudes target) {
     Check.state(started, "start(state, firstStep) must be called before observe(target)");
+    Check.notNull(target, "target");
     if (atSymmetricPoint) {
       target.set(state);
       return;

@@ -1,5 +1,6 @@
 package spgpe.run;
 
+import spgpe.internal.check.Check;
 import spgpe.model.EnergyMeter;
 import spgpe.model.Model;
 import spgpe.projector.Amplitudes;
@@ -38,10 +39,12 @@ public final class Snapshot {
    * @param amplitudes state with one lane; viewed, not copied
    * @param time time
    * @return the snapshot
-   * @throws IllegalArgumentException if the shape does not fit
+   * @throws IllegalArgumentException if the shape does not fit or the time is not finite
    */
   public static Snapshot of(Model model, Amplitudes amplitudes, double time) {
-    amplitudes.requireShape(model.region(), model.components(), 1);
+    Check.notNull(model, "model");
+    Check.finite(time, "time");
+    Check.notNull(amplitudes, "amplitudes").requireShape(model.region(), model.components(), 1);
     Snapshot snapshot = new Snapshot(model);
     snapshot.show(amplitudes, time, 0, 0);
     return snapshot;
