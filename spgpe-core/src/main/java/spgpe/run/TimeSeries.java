@@ -19,7 +19,18 @@ public final class TimeSeries implements Accumulator<TimeSeries> {
    * @param values values[s] are the numbers measured at times[s]
    */
   @SuppressWarnings("ArrayRecordComponent") // plain data, compared by nobody
-  public record Series(TrajectoryEnd end, double[] times, double[][] values) {}
+  public record Series(TrajectoryEnd end, double[] times, double[][] values) {
+    /**
+     * Checks the values.
+     *
+     * @throws IllegalArgumentException if something is null
+     */
+    public Series {
+      Check.notNull(end, "end");
+      Check.notNull(times, "times");
+      Check.notNull(values, "values");
+    }
+  }
 
   private final double[] times;
   private final int size;
