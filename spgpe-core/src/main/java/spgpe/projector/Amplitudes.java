@@ -122,8 +122,8 @@ public final class Amplitudes {
    * @throws IllegalArgumentException if the shapes do not fit
    */
   public void setLane(int lane, Amplitudes source) {
-    Check.inRange(lane, 0, lanes - 1, "lane");
     Check.notNull(source, "source");
+    Check.inRange(lane, 0, lanes - 1, "lane");
     source.requireShape(region, re.length, 1);
     for (int c = 0; c < re.length; c++) {
       for (int m = 0; m < source.re[c].length; m++) {
@@ -141,8 +141,8 @@ public final class Amplitudes {
    * @throws IllegalArgumentException if the shapes do not fit
    */
   public void copyLane(int lane, Amplitudes target) {
-    Check.inRange(lane, 0, lanes - 1, "lane");
     Check.notNull(target, "target");
+    Check.inRange(lane, 0, lanes - 1, "lane");
     target.requireShape(region, re.length, 1);
     for (int c = 0; c < re.length; c++) {
       for (int m = 0; m < target.re[c].length; m++) {

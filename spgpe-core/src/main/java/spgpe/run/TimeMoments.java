@@ -51,8 +51,9 @@ public final class TimeMoments implements Accumulator<TimeMoments> {
 
   @Override
   public void add(int sample, double[] values) {
+    Check.notNull(values, "values");
     Check.inRange(sample, 0, counts.length - 1, "sample");
-    if (Check.notNull(values, "values").length != size) {
+    if (values.length != size) {
       Check.argument(
           false, "a sample must have as many numbers as announced: size=%s, numbers=%s",
           size, values.length);

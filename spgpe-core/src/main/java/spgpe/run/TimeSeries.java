@@ -58,9 +58,10 @@ public final class TimeSeries implements Accumulator<TimeSeries> {
 
   @Override
   public void add(int sample, double[] values) {
+    Check.notNull(values, "values");
     Check.inRange(sample, 0, times.length - 1, "sample");
     Check.argument(
-        Check.notNull(values, "values").length == size,
+        values.length == size,
         "a sample must have as many numbers as announced: size=%s, numbers=%s", size, values.length);
     open.add(values.clone());
     openTimes.add(times[sample]);
