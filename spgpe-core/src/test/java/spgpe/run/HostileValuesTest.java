@@ -10,6 +10,7 @@ import java.util.function.IntFunction;
 import java.util.function.IntPredicate;
 import net.jqwik.api.Arbitraries;
 import net.jqwik.api.Arbitrary;
+import net.jqwik.api.EdgeCasesMode;
 import net.jqwik.api.ForAll;
 import net.jqwik.api.Property;
 import net.jqwik.api.Provide;
@@ -140,7 +141,7 @@ class HostileValuesTest {
         Arbitraries.integers());
   }
 
-  @Property(tries = 200)
+  @Property(tries = 200, edgeCases = EdgeCasesMode.NONE)
   void numbersAreRefusedByNameAndValueOrTaken(@ForAll("hostile") double x) {
     for (NumberRule rule : numberRules()) {
       if (rule.refuses.test(x)) {
@@ -151,7 +152,7 @@ class HostileValuesTest {
     }
   }
 
-  @Property(tries = 100)
+  @Property(tries = 100, edgeCases = EdgeCasesMode.NONE)
   void wholeNumbersAreRefusedByNameAndValueOrTaken(@ForAll("hostileInts") int n) {
     for (WholeRule rule : wholeRules()) {
       if (rule.refuses.test(n)) {
@@ -179,7 +180,7 @@ class HostileValuesTest {
   }
 
   /** A whole plan with one or several hostile numbers. */
-  @Property(tries = 400)
+  @Property(tries = 400, edgeCases = EdgeCasesMode.NONE)
   void aPlanIsRefusedOrFailsWithAReasonOrGivesFiniteNumbers(
       @ForAll("hostile") double one,
       @ForAll("hostile") double two,

@@ -235,8 +235,8 @@ class ArchitectureTest {
   }
 
   /**
-   * Static final fields must hold values that do not change. A number, text, enum constant, logger or
-   * function is one; a collection must be unmodifiable; an object of the project may have final
+   * Static final fields must hold values that do not change. A number, text, enum constant, logger
+   * or function is one; a collection must be unmodifiable; an object of the project may have final
    * fields only. Arrays are allowed as constants if no other package sees them and no method that
    * reads one returns an array it has not cloned; that nobody writes to them is seen by comparing
    * their contents before and after a run (next test).
@@ -316,7 +316,11 @@ class ArchitectureTest {
             Hamiltonian.pair(1, 0.1).with(CoherentCoupling.constant(0.1)),
             Reservoir.of(0.1, 1, 0.1));
     Ensemble plan =
-        Ensemble.of(model).startingFrom(InitialState.uniform(1, -1)).trajectories(3).seed(1).until(5);
+        Ensemble.of(model)
+            .startingFrom(InitialState.uniform(1, -1))
+            .trajectories(3)
+            .seed(1)
+            .until(5);
     assertTrue(plan.integratedBy(OuRk4.ofStep(0.1)).run().isComplete());
     assertTrue(plan.integratedBy(Rk4Ip.ofStep(0.1)).run().isComplete());
     assertEquals(before, staticArrays());
