@@ -48,19 +48,24 @@ public final class ContactInteraction implements LocalTerm {
    * @throws IllegalArgumentException if the matrix is not square, symmetric and finite
    */
   public static ContactInteraction ofMatrix(double[][] g) {
-    int n = g.length;
+    int n = Check.notNull(g, "interaction matrix").length;
     Check.argument(n >= 1, "interaction matrix must have at least one row");
     double[][] copy = new double[n][];
     for (int j = 0; j < n; j++) {
+      copy[j] = Check.notNull(g[j], "row of the interaction matrix").clone();
       Check.argument(
-          g[j].length == n, "interaction matrix must be square: rows=%s, columns=%s", n, g[j].length);
-      copy[j] = g[j].clone();
+          copy[j].length == n,
+          "interaction matrix must be square: rows=%s, columns=%s", n, copy[j].length);
       for (int k = 0; k < n; k++) {
-        Check.finite(g[j][k], "interaction g");
+        Check.finite(copy[j][k], "interaction g");
+      }
+    }
+    for (int j = 0; j < n; j++) {
+      for (int k = 0; k < j; k++) {
         Check.argument(
-            g[j][k] == g[k][j],
+            copy[j][k] == copy[k][j],
             "interaction matrix must be symmetric: g[%s][%s]=%s, g[%s][%s]=%s",
-            j, k, g[j][k], k, j, g[k][j]);
+            j, k, copy[j][k], k, j, copy[k][j]);
       }
     }
     return new ContactInteraction(copy);

@@ -32,9 +32,11 @@ public final class Detuning implements SpectralTerm {
    *
    * @param offsets one for each component, finite
    * @return the term
-   * @throws IllegalArgumentException if a value is not finite
+   * @throws IllegalArgumentException if a value is not finite or none is given
    */
   public static Detuning ofOffsets(double... offsets) {
+    Check.notNull(offsets, "offsets");
+    Check.argument(offsets.length > 0, "at least one energy offset must be given");
     for (double offset : offsets) {
       Check.finite(offset, "energy offset");
     }

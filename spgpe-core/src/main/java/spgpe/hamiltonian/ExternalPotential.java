@@ -126,10 +126,11 @@ public final class ExternalPotential implements LocalTerm {
 
   private double[] table(PointBlock block) {
     double[] values = table;
-    Check.state(
-        values != null && values.length == block.grid().points(),
-        "potential \"%s\" must be prepared for the grid it is used on", name);
-    return Check.notNull(values, "table");
+    if (values == null || values.length != block.grid().points()) { // allocates nothing in a step
+      throw new IllegalStateException(
+          "potential \"" + name + "\" must be prepared for the grid it is used on");
+    }
+    return values;
   }
 
   private int firstComponent() {

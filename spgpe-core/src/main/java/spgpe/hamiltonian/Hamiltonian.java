@@ -27,7 +27,9 @@ public final class Hamiltonian {
    * @throws IllegalArgumentException if a mass is out of range or none is given
    */
   public static Hamiltonian ofMasses(double... masses) {
-    return new Hamiltonian(masses.length, List.of(Kinetic.ofMasses(masses)));
+    Kinetic kinetic = Kinetic.ofMasses(masses);
+    Check.inRange(masses.length, 1, 255, "number of components");
+    return new Hamiltonian(masses.length, List.of(kinetic));
   }
 
   /**

@@ -23,6 +23,7 @@ public final class Kinetic implements SpectralTerm {
    * @throws IllegalArgumentException if a mass is out of range
    */
   public static Kinetic ofMasses(double... masses) {
+    Check.notNull(masses, "masses");
     Check.argument(masses.length > 0, "at least one mass must be given");
     for (double mass : masses) {
       Check.positive(mass, "mass");

@@ -8,6 +8,8 @@ import spgpe.projector.CoherentRegion;
  * add to it; not thread-safe.
  */
 public final class ModeMatrix {
+  private static final int MAX_NUMBERS = 1 << 28;
+
   private final CoherentRegion region;
   private final int components;
   private final double[] re;
@@ -17,12 +19,18 @@ public final class ModeMatrix {
    * Makes matrices of zeros.
    *
    * @param region coherent region
-   * @param components number of components
+   * @param components number of components, 1 to 255
+   * @throws IllegalArgumentException if the number is out of range
    */
   public ModeMatrix(CoherentRegion region, int components) {
     this.region = Check.notNull(region, "region");
     this.components = Check.inRange(components, 1, 255, "components");
-    this.re = new double[region.modes() * components * components];
+    long size = (long) region.modes() * components * components;
+    Check.argument(
+        size <= MAX_NUMBERS,
+        "modes times components squared must not exceed %s: modes=%s, components=%s",
+        MAX_NUMBERS, region.modes(), components);
+    this.re = new double[(int) size];
     this.im = new double[re.length];
   }
 
@@ -50,7 +58,7 @@ public final class ModeMatrix {
    * @param mode mode index
    * @param component component index
    * @param value what to add, finite
-   * @throws IllegalArgumentException if the value is not finite
+   * @throws IllegalArgumentException if the value is not finite or there is no such element
    */
   public void addDiagonal(int mode, int component, double value) {
     Check.finite(value, "diagonal element");
@@ -65,7 +73,8 @@ public final class ModeMatrix {
    * @param j column
    * @param real real part, finite
    * @param imaginary imaginary part, finite
-   * @throws IllegalArgumentException if i equals j or a value is not finite
+   * @throws IllegalArgumentException if i equals j, a value is not finite or there is no such
+   *     element
    */
   public void addPair(int mode, int i, int j, double real, double imaginary) {
     Check.argument(i != j, "row and column of a pair must differ: i=%s, j=%s", i, j);
@@ -84,6 +93,7 @@ public final class ModeMatrix {
    * @param i row
    * @param j column
    * @return Re h_ij
+   * @throws IllegalArgumentException if there is no such element
    */
   public double re(int mode, int i, int j) {
     return re[index(mode, i, j)];
@@ -96,6 +106,7 @@ public final class ModeMatrix {
    * @param i row
    * @param j column
    * @return Im h_ij
+   * @throws IllegalArgumentException if there is no such element
    */
   public double im(int mode, int i, int j) {
     return im[index(mode, i, j)];
@@ -139,6 +150,9 @@ public final class ModeMatrix {
   }
 
   private int index(int mode, int i, int j) {
+    Check.inRange(mode, 0, region.modes() - 1, "mode index");
+    Check.inRange(i, 0, components - 1, "row");
+    Check.inRange(j, 0, components - 1, "column");
     return (mode * components + i) * components + j;
   }
 }

@@ -6,6 +6,7 @@ import java.util.function.BooleanSupplier;
 import org.jspecify.annotations.Nullable;
 import spgpe.integrate.Integrator;
 import spgpe.integrate.Stepper;
+import spgpe.internal.check.Check;
 import spgpe.model.Model;
 import spgpe.projector.Amplitudes;
 import spgpe.reservoir.NoiseGenerator;
@@ -18,6 +19,8 @@ import spgpe.reservoir.RandomStreams;
 final class BlockRunner {
   /** Steps between checks for divergence and cancellation when nothing is observed. */
   private static final long GUARD_INTERVAL = 64;
+
+  private static final String INITIAL = "initial state";
 
   /** Receives what a block has finished. */
   interface Sink {
@@ -47,6 +50,9 @@ final class BlockRunner {
   private final boolean[] running;
   private final List<List<Channel.Probe<?>>> probes = new ArrayList<>();
   private long firstTrajectory;
+  /** What is being asked that the user supplied, and its name; empty between such calls. */
+  private String asked = "";
+  private String askedName = "";
 
   BlockRunner(
       Model model, InitialState initialState, Integrator integrator, RandomStreams streams,
@@ -108,6 +114,7 @@ final class BlockRunner {
 
   private void prepare(long first, int count) {
     firstTrajectory = first;
+    asking(INITIAL, "");
     java.util.Arrays.fill(channelPosition, 0);
     java.util.Arrays.fill(rulePosition, 0);
     java.util.Arrays.fill(running, false);
@@ -118,6 +125,9 @@ final class BlockRunner {
       noise.assign(lane, trajectory);
       single.clear();
       initialState.prepare(model, streams.initialState(trajectory), single);
+      int bad = firstBadComponent(single);
+      Check.argument(
+          bad < 0, "initial state must be finite: trajectory=%s, component=%s", trajectory, bad);
       all.setLane(lane, single);
       lastGood[lane].set(single);
       lastGoodTime[lane] = 0;
@@ -131,6 +141,7 @@ final class BlockRunner {
       probes.add(own);
     }
     stepper.start(all, 0);
+    asking("", "");
   }
 
   private boolean isDue(long step) {
@@ -178,7 +189,7 @@ final class BlockRunner {
     snapshot.show(single, time, step, trajectory);
     for (int c = 0; c < channels.size(); c++) {
       if (isAt(channels.get(c).steps(), channelPosition[c], step)) {
-        channels.get(c).recording().observable().measure(snapshot, buffers[c]);
+        measure(channels.get(c).recording().observable(), buffers[c]);
         probes.get(lane).get(c).accumulator().add(channelPosition[c], buffers[c]);
       }
     }
@@ -189,11 +200,31 @@ final class BlockRunner {
     }
   }
 
+  private void measure(Observable observable, double[] result) {
+    asking("observable", observable.name());
+    observable.measure(snapshot, result);
+    for (int i = 0; i < result.length; i++) {
+      if (!Double.isFinite(result[i])) {
+        Check.argument(
+            false,
+            "what an observable measures must be finite: observable=\"%s\", number=%s, value=%s,"
+                + " trajectory=%s, time=%s",
+            observable.name(), i, result[i], snapshot.trajectory(), snapshot.time());
+      }
+    }
+    asking("", "");
+  }
+
   private @Nullable TrajectoryEnd endAt(long step, double time, long trajectory) {
     for (int r = 0; r < ruleSteps.length; r++) {
-      if (isAt(ruleSteps[r], rulePosition[r], step) && stopRules.get(r).shouldStop(snapshot)) {
-        return new TrajectoryEnd(
-            trajectory, time, TrajectoryEnd.Reason.STOPPED, stopRules.get(r).name());
+      if (isAt(ruleSteps[r], rulePosition[r], step)) {
+        asking("stop rule", stopRules.get(r).name());
+        boolean stop = stopRules.get(r).shouldStop(snapshot);
+        asking("", "");
+        if (stop) {
+          return new TrajectoryEnd(
+              trajectory, time, TrajectoryEnd.Reason.STOPPED, stopRules.get(r).name());
+        }
       }
     }
     return step == lastStep
@@ -219,8 +250,18 @@ final class BlockRunner {
     return -1;
   }
 
+  private void asking(String kind, String name) {
+    asked = kind;
+    askedName = name;
+  }
+
   /** Where the block stands, for error messages. */
   String position() {
-    return "trajectories from " + firstTrajectory + ", time=" + stepper.time();
+    String at = "trajectories from " + firstTrajectory;
+    if (asked.equals(INITIAL)) {
+      return at + ", " + INITIAL;
+    }
+    return at + ", time=" + stepper.time()
+        + (asked.isEmpty() ? "" : ", " + asked + " \"" + askedName + "\"");
   }
 }

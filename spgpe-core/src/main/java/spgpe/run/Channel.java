@@ -1,7 +1,12 @@
 package spgpe.run;
 
+import java.util.Arrays;
+import spgpe.internal.check.Check;
+
 /** A recording of a run with its step numbers and the sum over the trajectories so far. */
 final class Channel<A extends Accumulator<A>> {
+  private static final int MAX_SIZE = 1 << 26;
+
   private final Recording<A> recording;
   private final long[] steps;
   private final double[] times;
@@ -19,6 +24,10 @@ final class Channel<A extends Accumulator<A>> {
 
   static <A extends Accumulator<A>> Channel<A> of(
       Recording<A> recording, double dt, long lastStep, int size) {
+    Check.argument(
+        size >= 1 && size <= MAX_SIZE,
+        "size of an observable must lie in 1..%s: observable=\"%s\", size=%s",
+        MAX_SIZE, recording.observable().name(), size);
     long[] steps = recording.schedule().steps(dt, lastStep);
     double[] times = new double[steps.length];
     for (int i = 0; i < times.length; i++) {
@@ -52,6 +61,11 @@ final class Channel<A extends Accumulator<A>> {
   }
 
   Channel<A> mergedWith(Channel<A> other) {
+    Check.argument(
+        size == other.size && Arrays.equals(times, other.times),
+        "results must be of the same scheduled times and sizes: recording=\"%s\", times=%s and %s,"
+            + " size=%s and %s",
+        recording, times.length, other.times.length, size, other.size);
     return new Channel<>(recording, steps, times, size, tree.mergedWith(other.tree));
   }
 

@@ -163,7 +163,10 @@ public final class Ensemble {
    */
   public Ensemble stopWhen(StopRule rule) {
     Settings s = settings.copy();
-    s.stopRules = added(s.stopRules, Check.notNull(rule, "stop rule"));
+    Check.notNull(rule, "stop rule");
+    Check.notNull(rule.name(), "name of the stop rule");
+    Check.notNull(rule.schedule(), "schedule of the stop rule");
+    s.stopRules = added(s.stopRules, rule);
     return new Ensemble(s);
   }
 
@@ -241,7 +244,7 @@ public final class Ensemble {
   }
 
   /**
-   * Runs in the calling thread.
+   * Runs in the calling thread. An interrupt of that thread cancels the run and is kept set.
    *
    * @return the result
    * @throws IllegalStateException if the plan is not complete
@@ -255,7 +258,8 @@ public final class Ensemble {
 
   /**
    * Runs on an executor and waits. The library starts no threads; every trajectory block is one task.
-   * An interrupt of the waiting thread cancels the run and is kept set.
+   * An interrupt of the waiting thread cancels the run and is kept set; the call then waits only for
+   * blocks already begun, so it also frees a caller whose executor dropped tasks it had accepted.
    *
    * @param executor where the blocks run; the waiting thread must not be its only one
    * @return the result

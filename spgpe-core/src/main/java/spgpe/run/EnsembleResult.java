@@ -73,9 +73,11 @@ public final class EnsembleResult {
    *
    * @param other result of other trajectory indices of the same plan
    * @return joined result, the same bits as if run together
-   * @throws IllegalArgumentException if a trajectory is in both or the recordings differ
+   * @throws IllegalArgumentException if a trajectory is in both, or if the recordings or their times
+   *     differ
    */
   public EnsembleResult mergedWith(EnsembleResult other) {
+    Check.notNull(other, "other");
     Check.argument(
         channels.size() == other.channels.size(),
         "results must have the same recordings: here=%s, other=%s",

@@ -4,12 +4,11 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.TreeMap;
 import java.util.concurrent.ConcurrentLinkedQueue;
-import java.util.concurrent.CountDownLatch;
 import java.util.concurrent.Executor;
-import java.util.concurrent.RejectedExecutionException;
 import java.util.concurrent.atomic.AtomicBoolean;
 import java.util.concurrent.atomic.AtomicReference;
 import org.jspecify.annotations.Nullable;
+import spgpe.internal.check.Check;
 import spgpe.projector.Amplitudes;
 
 /** One execution of an ensemble plan. */
@@ -22,6 +21,8 @@ final class EnsembleRun {
   private final AtomicReference<@Nullable Failure> failure = new AtomicReference<>();
   private final TreeMap<Long, TrajectoryEnd> ends = new TreeMap<>();
   private final Object lock = new Object();
+  private final TaskCount tasks = new TaskCount();
+  private volatile @Nullable Thread caller;
   private long stopped;
   private long diverged;
   private @Nullable Amplitudes lastState;
@@ -42,49 +43,45 @@ final class EnsembleRun {
   }
 
   EnsembleResult execute(Executor executor) {
+    caller = Thread.currentThread();
+    for (Channel<?> channel : channels) {
+      channel.probe();
+    }
     idle.add(newRunner()); // contradictions show here, in the caller's thread
     long blocks = (plan.count() + plan.lanes() - 1) / plan.lanes();
-    int parts = (int) Math.min(blocks, Integer.MAX_VALUE);
-    CountDownLatch pending = new CountDownLatch(parts);
-    for (int part = 0; part < parts; part++) {
+    Check.argument(
+        blocks <= Integer.MAX_VALUE,
+        "a run must not have more than 2^31-1 blocks of trajectories: trajectories=%s, lanes=%s; use"
+            + " more lanes or run parts and merge them", plan.count(), plan.lanes());
+    int parts = (int) blocks;
+    for (int part = 0; part < parts && !stop.get(); part++) {
       long block = part;
+      tasks.submitted();
       try {
         executor.execute(
             () -> {
-              try {
-                runBlock(block);
-              } finally {
-                pending.countDown();
+              if (tasks.begin()) {
+                try {
+                  runBlock(block);
+                } finally {
+                  tasks.end();
+                }
               }
             });
-      } catch (RejectedExecutionException e) {
+      } catch (RuntimeException | Error e) {
         fail("the executor refused a task", e);
-        pending.countDown();
+        tasks.refused();
       }
     }
-    await(pending);
+    if (tasks.await(() -> stop.set(true), stop::get)) {
+      Thread.currentThread().interrupt();
+    }
     Failure failed = failure.get();
     if (failed != null) {
       throw new RunFailedException(
           failed.where() + ": " + failed.cause().getMessage(), failed.cause(), result());
     }
     return result();
-  }
-
-  private void await(CountDownLatch pending) {
-    boolean interrupted = false;
-    while (true) {
-      try {
-        pending.await();
-        break;
-      } catch (InterruptedException e) {
-        interrupted = true;
-        stop.set(true);
-      }
-    }
-    if (interrupted) {
-      Thread.currentThread().interrupt();
-    }
   }
 
   private BlockRunner newRunner() {
@@ -94,7 +91,12 @@ final class EnsembleRun {
   }
 
   private boolean isStopped() {
-    return stop.get() || plan.cancelled().getAsBoolean();
+    if (!stop.get()
+        && (plan.cancelled().getAsBoolean()
+            || (Thread.currentThread() == caller && caller.isInterrupted()))) {
+      stop.set(true);
+    }
+    return stop.get();
   }
 
   private void runBlock(long block) {

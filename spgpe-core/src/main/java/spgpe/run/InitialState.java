@@ -41,6 +41,7 @@ public interface InitialState {
    * @throws IllegalArgumentException if a value is not finite
    */
   static InitialState uniform(double... psi) {
+    Check.notNull(psi, "psi");
     double[] values = psi.clone();
     for (double value : values) {
       Check.finite(value, "uniform field psi");
@@ -60,6 +61,8 @@ public interface InitialState {
    * @throws IllegalArgumentException if a value is out of range or the lengths differ
    */
   static InitialState uniform(double[] densities, double[] phases) {
+    Check.notNull(densities, "densities");
+    Check.notNull(phases, "phases");
     Check.argument(
         densities.length == phases.length,
         "densities and phases must be as many: densities=%s, phases=%s",
@@ -111,11 +114,18 @@ public interface InitialState {
   /**
    * Copies of a given state, the same for each trajectory.
    *
-   * @param state state with one lane; copied
+   * @param state state with one lane, finite; copied
    * @return the initial state
+   * @throws IllegalArgumentException if the state has several lanes or is not finite
    */
   static InitialState of(Amplitudes state) {
+    Check.notNull(state, "state");
+    Check.argument(
+        state.lanes() == 1, "an initial state must have one lane: lanes=%s", state.lanes());
     Amplitudes kept = state.copy();
+    for (int c = 0; c < kept.components(); c++) {
+      Check.finite(kept.atomNumber(c, 0), "atom number of the initial state, component " + c + ",");
+    }
     return (model, random, target) -> target.set(kept);
   }
 

@@ -28,6 +28,10 @@ public interface Observable {
   /**
    * Measures.
    *
+   * <p>Every number must be finite: one NaN would spoil a mean over all trajectories without a trace
+   * of its origin. A run fails with the observable's name, time and trajectory if it is not. Where a
+   * quantity may be undefined, measure a flag as a second number.
+   *
    * @param snapshot one trajectory at one time; read only, valid during the call
    * @param result overwritten; has the length {@link #size}
    */

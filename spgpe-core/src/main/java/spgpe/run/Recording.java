@@ -31,8 +31,10 @@ public final class Recording<A extends Accumulator<A>> {
    */
   public static <A extends Accumulator<A>> Recording<A> of(
       Observable observable, Schedule schedule, Accumulator.Factory<A> factory) {
+    Check.notNull(observable, "observable");
+    Check.notNull(observable.name(), "name of the observable");
     return new Recording<>(
-        Check.notNull(observable, "observable"),
+        observable,
         Check.notNull(schedule, "schedule"),
         Check.notNull(factory, "factory"));
   }
@@ -56,7 +58,7 @@ public final class Recording<A extends Accumulator<A>> {
   }
 
   A create(double[] times, int size) {
-    return factory.create(times, size);
+    return Check.notNull(factory.create(times, size), "accumulator of the factory");
   }
 
   @Override

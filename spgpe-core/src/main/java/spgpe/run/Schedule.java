@@ -40,6 +40,7 @@ public final class Schedule {
    * @throws IllegalArgumentException if the times are out of range or order, or none is given
    */
   public static Schedule at(double... times) {
+    Check.notNull(times, "times");
     Check.argument(times.length > 0, "at least one time must be given");
     for (int i = 0; i < times.length; i++) {
       Check.notNegative(times[i], "scheduled time");
@@ -71,6 +72,9 @@ public final class Schedule {
       int count = 0;
       for (double time : listed) {
         long step = wholeSteps(time, dt, "scheduled time");
+        Check.argument(
+            count == 0 || step > steps[count - 1],
+            "scheduled times must be different time steps: time=%s, time step=%s", time, dt);
         if (step <= lastStep) {
           steps[count++] = step;
         }

@@ -43,10 +43,12 @@ public final class Snapshot {
    * @param amplitudes state with one lane; viewed, not copied
    * @param time time
    * @return the snapshot
-   * @throws IllegalArgumentException if the shape does not fit
+   * @throws IllegalArgumentException if the shape does not fit or the time is not finite
    */
   public static Snapshot of(Model model, Amplitudes amplitudes, double time) {
-    amplitudes.requireShape(model.region(), model.components(), 1);
+    Check.notNull(model, "model");
+    Check.finite(time, "time");
+    Check.notNull(amplitudes, "amplitudes").requireShape(model.region(), model.components(), 1);
     Snapshot snapshot = new Snapshot(model);
     snapshot.show(amplitudes, time, 0, 0);
     return snapshot;

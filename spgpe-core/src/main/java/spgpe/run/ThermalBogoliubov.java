@@ -44,6 +44,7 @@ public final class ThermalBogoliubov implements InitialState {
    * @throws IllegalArgumentException if a value is not finite
    */
   public static ThermalBogoliubov around(double... psi) {
+    Check.notNull(psi, "psi");
     for (double value : psi) {
       Check.finite(value, "uniform field psi");
     }
@@ -58,6 +59,9 @@ public final class ThermalBogoliubov implements InitialState {
    */
   @Override
   public void prepare(Model model, UniformRandomProvider random, Amplitudes target) {
+    Check.notNull(model, "model");
+    Check.notNull(random, "random");
+    Check.notNull(target, "target");
     InitialState.uniform(psi).prepare(model, random, target);
     double[][] local = localHessian(model);
     CoherentRegion region = model.region();

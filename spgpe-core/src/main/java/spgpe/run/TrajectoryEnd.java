@@ -1,5 +1,7 @@
 package spgpe.run;
 
+import spgpe.internal.check.Check;
+
 /**
  * How a trajectory ended. Immutable and thread-safe.
  *
@@ -9,6 +11,18 @@ package spgpe.run;
  * @param detail name of the stop rule, or what diverged; empty at the end of the run
  */
 public record TrajectoryEnd(long trajectory, double time, Reason reason, String detail) {
+  /**
+   * Checks the values.
+   *
+   * @throws IllegalArgumentException if a number is negative or not finite, or something is null
+   */
+  public TrajectoryEnd {
+    Check.argument(trajectory >= 0, "trajectory index must be >= 0: trajectory=%s", trajectory);
+    Check.notNegative(time, "time");
+    Check.notNull(reason, "reason");
+    Check.notNull(detail, "detail");
+  }
+
   /** Why a trajectory ended. */
   public enum Reason {
     /** The end time was reached. */
