@@ -79,6 +79,11 @@ public final class CriticalBubble {
     return PhaseBubble.of(pair)::phase;
   }
 
+  SaddleSummary summary() {
+    return new SaddleSummary(
+        1, ring.length(), energy(), gradientSquared(), atomRatio(), spectrum);
+  }
+
   /**
    * Parameters.
    *

@@ -164,7 +164,8 @@ final class SaddleFields {
     double sum = 0;
     int n = basis.count(0);
     for (int i = 0; i < n; i++) {
-      sum += 2 * basis.squaredWaveNumber(0, i) * (state[i] * state[i] + state[n + i] * state[n + i]);
+      double weight = state[i] * state[i] + state[n + i] * state[n + i];
+      sum += 2 * basis.squaredWaveNumber(0, i) * weight;
     }
     return sum;
   }

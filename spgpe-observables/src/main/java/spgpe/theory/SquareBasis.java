@@ -6,7 +6,8 @@ import java.util.List;
 /**
  * Modes of a periodic square with {@code n_x^2 + n_y^2 <= cutoff^2} in the symmetry classes of the
  * square: even-even symmetric (0) and antisymmetric (1) under exchange of the axes, even-odd with
- * its mirror image (2), odd-odd symmetric (3) and antisymmetric (4). Grid on a quarter of the square.
+ * its mirror image (2), odd-odd symmetric (3) and antisymmetric (4). Grid on a quarter of the
+ * square.
  */
 final class SquareBasis implements ModeBasis {
   private static final int MIXED = 2;
@@ -15,9 +16,8 @@ final class SquareBasis implements ModeBasis {
   final int cutoff;
   private final int side;
   private final List<List<int[]>> modes = new ArrayList<>();
-  /** modes of a class on the grid times the root of the weight, [class][mode][point]. */
+  /** Modes of a class on the grid times the root of the weight, [class][mode][point]. */
   private final double[][][] weighted;
-
   private final double[] weights;
 
   SquareBasis(double length, int cutoff) {
@@ -167,8 +167,12 @@ final class SquareBasis implements ModeBasis {
       for (int p = 0; p < product.length; p++) {
         product[p] = f[i][p] * function[p];
       }
-      for (int j = 0; j < f.length; j++) {
-        matrix[row + i][column + j] += VectorMath.dot(product, f[j]);
+      for (int j = 0; j <= i; j++) {
+        double element = VectorMath.dot(product, f[j]);
+        matrix[row + i][column + j] += element;
+        if (j < i) {
+          matrix[row + j][column + i] += element;
+        }
       }
     }
   }

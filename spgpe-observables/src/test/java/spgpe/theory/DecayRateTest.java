@@ -38,9 +38,9 @@ class DecayRateTest {
     CriticalBubble b = bubble(coherent, length, modes);
     DecayRate r = DecayRate.of(b, b.energy() / barrier, damping);
     assertEquals(rate, r.total(), tolerance * rate);
-    assertEquals(r.total(), r.perLength() * length, 1e-14 * rate);
+    assertEquals(r.total(), r.density() * length, 1e-14 * rate);
     assertEquals(barrier, r.barrierOverTemperature(), 1e-12);
-    assertEquals(r.perLength(), r.prefactorPerLength() * Math.exp(-barrier), 1e-14 * rate);
+    assertEquals(r.density(), r.prefactor() * Math.exp(-barrier), 1e-14 * rate);
   }
 
   /**
