@@ -1,5 +1,6 @@
 package spgpe.theory;
 
+import java.util.function.DoubleUnaryOperator;
 import spgpe.internal.check.Check;
 
 /**
@@ -21,14 +22,16 @@ import spgpe.internal.check.Check;
 public final class CriticalBubble {
   private final CoupledPair pair;
   private final RingModes ring;
+  private final RingBasis basis;
   private final SaddleFields fields;
   private final SaddleSpectrum spectrum;
 
   private CriticalBubble(CoupledPair pair, RingModes ring) {
     this.pair = pair;
     this.ring = ring;
-    fields = find(pair, new RingBasis(ring.length(), ring.cutoffMode()));
-    double edge = Math.PI - fields.phase(fields.basis.halfPoints() - 1);
+    basis = new RingBasis(ring.length(), ring.cutoffMode());
+    fields = SaddleSearch.from(pair, basis, CriticalBubble::profile);
+    double edge = Math.PI - fields.phase(fields.basis.points() - 1);
     Check.argument(
         Math.abs(edge) < 0.02,
         "the ring is too short for the bubble: relative phase opposite the centre differs from pi"
@@ -72,48 +75,13 @@ public final class CriticalBubble {
     return new CriticalBubble(pair, ring);
   }
 
-  private static SaddleFields find(CoupledPair pair, RingBasis basis) {
-    for (boolean local : new boolean[] {false, true}) {
-      try {
-        SaddleFields found = SaddleFields.guess(pair, basis, local).newton();
-        if (looksLikeBubble(found)) {
-          return found;
-        }
-      } catch (UnconvergedException e) {
-        // Another start or continuation from weak coupling may still work; the last one reports.
-        continue;
-      }
-    }
-    return continuation(pair, basis);
+  private static DoubleUnaryOperator profile(CoupledPair pair) {
+    return PhaseBubble.of(pair)::phase;
   }
 
-  private static boolean looksLikeBubble(SaddleFields fields) {
-    return fields.energy() > 0
-        && fields.phase(0) < Math.PI - 0.05
-        && Math.abs(fields.phase(fields.basis.halfPoints() - 1) - Math.PI) < 0.1;
-  }
-
-  /** From weak coherent coupling at fixed lambda and density, lengths scaled as 1/sqrt(J). */
-  private static SaddleFields continuation(CoupledPair pair, RingBasis basis) {
-    double lambda = Math.sqrt(pair.lambdaSquared());
-    double n = pair.falseVacuumDensity();
-    double target = pair.coherentCoupling();
-    double j = Math.min(target, 0.02 * pair.g() * n);
-    SaddleFields current = null;
-    while (true) {
-      CoupledPair at =
-          j == target
-              ? pair
-              : CoupledPair.fromFalseVacuum(pair.g(), n, j, lambda, pair.temperature());
-      RingBasis scaled = new RingBasis(basis.length * Math.sqrt(target / j), basis.cutoff);
-      SaddleFields start =
-          current == null ? SaddleFields.guess(at, scaled, false) : current.movedTo(at, scaled);
-      current = start.newton();
-      if (j == target) {
-        return current;
-      }
-      j = Math.min(target, 1.15 * j);
-    }
+  SaddleSummary summary() {
+    return new SaddleSummary(
+        1, ring.length(), energy(), gradientSquared(), atomRatio(), spectrum);
   }
 
   /**
@@ -169,8 +137,10 @@ public final class CriticalBubble {
    * @throws IllegalArgumentException if the position is not finite
    */
   public double density(double position) {
-    double[] f = fields.at(Check.finite(position, "position"));
-    return f[0] * f[0] + f[1] * f[1];
+    Check.finite(position, "position");
+    double u = basis.valueAt(fields.coefficientsOfU(), position);
+    double v = basis.valueAt(fields.coefficientsOfV(), position);
+    return u * u + v * v;
   }
 
   /**
@@ -181,8 +151,10 @@ public final class CriticalBubble {
    * @throws IllegalArgumentException if the position is not finite
    */
   public double phase(double position) {
-    double[] f = fields.at(Check.finite(position, "position"));
-    return 2 * Math.atan2(f[1], f[0]);
+    Check.finite(position, "position");
+    double u = basis.valueAt(fields.coefficientsOfU(), position);
+    double v = basis.valueAt(fields.coefficientsOfV(), position);
+    return 2 * Math.atan2(v, u);
   }
 
   /**
@@ -249,7 +221,7 @@ public final class CriticalBubble {
    * Weight of the highest kept modes in the profile; the energy moves by about its square when the
    * cutoff is raised.
    *
-   * @return largest coefficient of the last two modes over the largest coefficient
+   * @return largest coefficient near the cutoff over the largest coefficient
    */
   public double spectralTail() {
     return fields.spectralTail();

@@ -29,21 +29,26 @@ public final class DecayRate {
   private static final double LOWEST_BARRIER = 9;
   private static final double HIGHEST_BARRIER = 18;
 
-  private final double length;
+  private final double volume;
   private final double barrier;
   private final double damping;
   private final double growthRate;
-  private final double prefactorPerLength;
+  private final double prefactor;
+  private final boolean planar;
 
-  private DecayRate(CriticalBubble bubble, double temperature, double damping) {
+  private DecayRate(SaddleSummary saddle, double temperature, double damping) {
     this.damping = damping;
-    length = bubble.ring().length();
-    barrier = bubble.energy() / temperature;
-    growthRate = bubble.growthRate(damping);
+    volume = saddle.volume();
+    planar = saddle.dimension() == 2;
+    barrier = saddle.energy() / temperature;
+    growthRate = saddle.spectrum().growthRate(damping);
+    // One factor (2 pi T)^(-1/2) for each zero mode that the saddle has and the vacuum has not.
+    double translation = saddle.gradientSquared() / saddle.dimension();
     double zeroModes =
-        Math.sqrt(bubble.gradientSquared() * bubble.atomRatio() / (2 * Math.PI * temperature));
-    prefactorPerLength =
-        growthRate / Math.PI * zeroModes * Math.exp(bubble.logDeterminantFactor());
+        Math.pow(translation / (2 * Math.PI * temperature), 0.5 * saddle.dimension())
+            * Math.sqrt(saddle.atomRatio());
+    prefactor =
+        growthRate / Math.PI * zeroModes * Math.exp(saddle.spectrum().logDeterminantFactor());
   }
 
   /**
@@ -58,7 +63,7 @@ public final class DecayRate {
    */
   public static DecayRate of(CriticalBubble bubble, double temperature, double damping) {
     return new DecayRate(
-        Check.notNull(bubble, "bubble"),
+        Check.notNull(bubble, "bubble").summary(),
         Check.positive(temperature, "temperature"),
         Check.positive(damping, "damping"));
   }
@@ -78,30 +83,48 @@ public final class DecayRate {
   }
 
   /**
-   * Rate density.
+   * Rate over a bubble in two dimensions.
    *
-   * @return Gamma/L, decays per length and time
+   * @param bubble critical bubble on the square and cutoff of the simulation
+   * @param temperature T (energy), greater than zero
+   * @param damping dimensionless gamma, greater than zero
+   * @return the rate; not compared with simulations in two dimensions, where the one-loop prefactor
+   *     depends strongly on the cutoff
+   * @throws IllegalArgumentException if a value is not finite and positive
+   * @throws UnconvergedException if the growth rate does not converge
    */
-  public double perLength() {
-    return prefactorPerLength * Math.exp(-barrier);
+  public static DecayRate of(PlanarBubble bubble, double temperature, double damping) {
+    return new DecayRate(
+        Check.notNull(bubble, "bubble").summary(),
+        Check.positive(temperature, "temperature"),
+        Check.positive(damping, "damping"));
   }
 
   /**
-   * Rate of the whole ring.
+   * Rate density.
+   *
+   * @return decays per time and per length (1D) or area (2D)
+   */
+  public double density() {
+    return prefactor * Math.exp(-barrier);
+  }
+
+  /**
+   * Rate of the whole ring or square.
    *
    * @return Gamma, decays per time
    */
   public double total() {
-    return length * perLength();
+    return volume * density();
   }
 
   /**
    * Prefactor of the Boltzmann factor.
    *
-   * @return decays per length and time without {@code exp(-E_b/T)}
+   * @return decays per time and per length (1D) or area (2D) without {@code exp(-E_b/T)}
    */
-  public double prefactorPerLength() {
-    return prefactorPerLength;
+  public double prefactor() {
+    return prefactor;
   }
 
   /**
@@ -135,6 +158,11 @@ public final class DecayRate {
    */
   public Prediction prediction() {
     List<String> warnings = new ArrayList<>();
+    if (planar) {
+      warnings.add(
+          "two dimensions: the ratio band was measured in one dimension only, and the prefactor"
+              + " rises steeply with the cutoff");
+    }
     double low = 0.5;
     double high = 1.05;
     if (barrier < LOWEST_BARRIER) {

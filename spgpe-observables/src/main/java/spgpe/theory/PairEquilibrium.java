@@ -20,6 +20,7 @@ import spgpe.internal.check.Check;
  */
 public final class PairEquilibrium {
   private static final double TOLERANCE = 2e-8;
+  private static final double LENGTH_TOLERANCE = 1e-5;
   private static final int FEWEST_STATES = 6;
   private static final int LARGEST_STATES = 18;
   private static final int SMALLEST_WIDTH = 8;
@@ -36,6 +37,7 @@ public final class PairEquilibrium {
   private final int halfWidth;
   private final double groundEnergy;
   private final PairAverages averages;
+  private final double lengthError;
   private final Map<PairSolver.Channel, CorrelationFunction> correlations;
 
   private PairEquilibrium(CoupledPair pair) {
@@ -53,11 +55,13 @@ public final class PairEquilibrium {
     PairSolver.State ground = solver.ground(0);
     PairAverages current = solver.averages(0, ground.vector);
     double error = 0;
+    int previousWidth = width;
     // First the angular momenta, then the radial states, each until the averages stand.
     for (boolean radial = false; ; ) {
       int nextStates = radial ? k + 2 : k;
       int nextWidth = radial ? width : width + 3 + width / 8;
       PairAverages previous = current;
+      previousWidth = radial ? previousWidth : width;
       solver = solver(nextStates, nextWidth, 1);
       ground = solver.ground(0);
       current = solver.averages(0, ground.vector);
@@ -83,12 +87,24 @@ public final class PairEquilibrium {
     groundEnergy = ground.energy;
     averages = scaled(current, error);
     correlations = new EnumMap<>(PairSolver.Channel.class);
+    PairSolver reduced = solver(states - 2, previousWidth, 1);
+    PairSolver.State reducedGround = reduced.ground(0);
+    double lengthChange = 0;
     for (PairSolver.Channel channel : PairSolver.Channel.values()) {
+      CorrelationFunction correlation = solver.correlation(channel, ground);
+      double other = reduced.correlation(channel, reducedGround).slowestRate();
+      lengthChange = Math.max(lengthChange, Math.abs(other / correlation.slowestRate() - 1));
       double weight =
           channel == PairSolver.Channel.FIELD
               ? amplitudeSquared
               : amplitudeSquared * amplitudeSquared;
-      correlations.put(channel, solver.correlation(channel, ground).scaled(weight, unit));
+      correlations.put(channel, correlation.scaled(weight, unit));
+    }
+    lengthError = lengthChange;
+    if (!(lengthError <= LENGTH_TOLERANCE)) {
+      throw new UnconvergedException(
+          "the correlation lengths are not converged: relative change " + lengthError + " > "
+              + LENGTH_TOLERANCE + " for " + pair + "; raise the temperature");
     }
   }
 
@@ -201,6 +217,16 @@ public final class PairEquilibrium {
    */
   public CorrelationFunction fieldCorrelation() {
     return correlation(PairSolver.Channel.FIELD);
+  }
+
+  /**
+   * Largest relative change of the four correlation lengths when both basis sizes are reduced by one
+   * step; the error of the lengths reported here is smaller.
+   *
+   * @return the relative change
+   */
+  public double lengthError() {
+    return lengthError;
   }
 
   private CorrelationFunction correlation(PairSolver.Channel channel) {

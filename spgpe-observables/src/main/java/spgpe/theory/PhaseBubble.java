@@ -182,14 +182,14 @@ public final class PhaseBubble {
 
   private double lowestEigenvalue(int cutoff) {
     RingBasis basis = new RingBasis(2 * (22 + Math.log1p(root)) / root, cutoff);
-    double[] curvature = new double[basis.halfPoints()];
+    double[] curvature = new double[basis.points()];
     for (int p = 0; p < curvature.length; p++) {
-      double y = 2 * Math.atan(root / Math.cosh(root * basis.position(p)));
+      double y = 2 * Math.atan(root / Math.cosh(root * basis.radius(p)));
       curvature[p] = -Math.cos(y) + lambda * lambda * Math.cos(2 * y);
     }
     double[][] h = new double[cutoff + 1][cutoff + 1];
-    basis.addMultiplication(h, 0, 0, curvature, true);
-    basis.addKinetic(h, 0, true);
+    basis.addMultiplication(h, 0, 0, curvature, RingBasis.EVEN);
+    basis.addKinetic(h, 0, RingBasis.EVEN);
     return SymmetricEigen.of(h).value(0);
   }
 }

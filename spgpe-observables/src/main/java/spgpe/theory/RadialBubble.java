@@ -1,8 +1,11 @@
 package spgpe.theory;
 
+import org.apache.commons.math3.ode.ContinuousOutputModel;
 import org.apache.commons.math3.ode.FirstOrderDifferentialEquations;
 import org.apache.commons.math3.ode.events.EventHandler;
 import org.apache.commons.math3.ode.nonstiff.DormandPrince853Integrator;
+import org.apache.commons.math3.ode.sampling.StepHandler;
+import org.jspecify.annotations.Nullable;
 import spgpe.internal.check.Check;
 
 /**
@@ -15,10 +18,13 @@ public final class RadialBubble {
   private static final double START = 1e-3;
   private static final double END = 400;
   private static final double TOLERANCE = 1e-12;
+  private static final double SPACING = 0.02;
 
   private final double lambda;
   private final double centralPhase;
   private final Shot shot;
+  /** phi and phi' on a grid of spacing SPACING from START on. */
+  private final double[][] samples;
 
   private RadialBubble(double lambda) {
     this.lambda = lambda;
@@ -28,14 +34,16 @@ public final class RadialBubble {
     double deep = Math.log(1e-12);
     for (int i = 0; i < 64 && shallow - deep > 1e-15 * Math.abs(deep); i++) {
       double middle = 0.5 * (shallow + deep);
-      if (new Shot(square, Math.exp(middle)).overshoots) {
+      if (new Shot(square, Math.exp(middle), null).overshoots) {
         deep = middle;
       } else {
         shallow = middle;
       }
     }
     centralPhase = Math.exp(deep);
-    shot = new Shot(square, centralPhase);
+    ContinuousOutputModel path = new ContinuousOutputModel();
+    shot = new Shot(square, centralPhase, path);
+    samples = sample(path);
     double mismatch = Math.abs(shot.potential) / shot.gradient;
     if (!(mismatch < 1e-5)) {
       throw new UnconvergedException(
@@ -115,6 +123,39 @@ public final class RadialBubble {
     return shot.halfRadius;
   }
 
+  private static double[][] sample(ContinuousOutputModel path) {
+    int count = (int) ((path.getFinalTime() - START) / SPACING) + 1;
+    double[][] values = new double[count][];
+    for (int i = 0; i < count; i++) {
+      path.setInterpolatedTime(START + i * SPACING);
+      double[] y = path.getInterpolatedState();
+      values[i] = new double[] {y[0], y[1]};
+    }
+    return values;
+  }
+
+  /**
+   * Relative phase of the bubble.
+   *
+   * @param radius distance from the centre in units of {@code 1/(2 sqrt(J))}, not negative
+   * @return phi(r), error below 1e-6; pi beyond the resolved tail
+   * @throws IllegalArgumentException if the radius is negative or not finite
+   */
+  public double phase(double radius) {
+    double x = (Check.notNegative(radius, "radius") - START) / SPACING;
+    int i = (int) Math.floor(Math.max(0, x));
+    if (i + 1 >= samples.length) {
+      return Math.PI;
+    }
+    double t = Math.max(0, x - i);
+    double[] a = samples[i];
+    double[] b = samples[i + 1];
+    double rest = 1 - t;
+    // Cubic Hermite interpolation.
+    return rest * rest * ((1 + 2 * t) * a[0] + t * SPACING * a[1])
+        + t * t * ((3 - 2 * t) * b[0] - rest * SPACING * b[1]);
+  }
+
   /** One trajectory from the centre; y = (phi, phi', gradient energy, potential energy). */
   private static final class Shot implements FirstOrderDifferentialEquations {
     private final double square;
@@ -123,7 +164,7 @@ public final class RadialBubble {
     double potential;
     double halfRadius = Double.NaN;
 
-    Shot(double square, double phase) {
+    Shot(double square, double phase, @Nullable StepHandler recorder) {
       this.square = square;
       double slope = 0.5 * force(phase) * START;
       double[] y = {
@@ -135,6 +176,9 @@ public final class RadialBubble {
       integrator.addEventHandler(new Crossing(0, Math.PI, true), 0.5, 1e-12, 200);
       Crossing half = new Crossing(0, 0.5 * (Math.PI + phase), false);
       integrator.addEventHandler(half, 0.5, 1e-10, 200);
+      if (recorder != null) {
+        integrator.addStepHandler(recorder);
+      }
       integrator.integrate(this, START, y, END, y);
       overshoots = y[1] > 0.5 * Math.abs(y[0] - Math.PI);
       gradient = y[2];

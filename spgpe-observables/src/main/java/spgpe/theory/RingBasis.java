@@ -1,10 +1,10 @@
 package spgpe.theory;
 
-/**
- * Orthonormal cosine and sine modes on a ring and Galerkin matrices of even multiplication
- * operators; products of four modes are integrated exactly.
- */
-final class RingBasis {
+/** Orthonormal cosine (class 0) and sine (class 1) modes on a ring; grid on the half ring. */
+final class RingBasis implements ModeBasis {
+  static final int EVEN = 0;
+  static final int ODD = 1;
+
   final double length;
   final int cutoff;
   private final int points;
@@ -21,16 +21,48 @@ final class RingBasis {
     }
   }
 
-  /** Grid points of the half ring, x = 0 .. L/2. */
-  int halfPoints() {
+  @Override
+  public int classes() {
+    return 2;
+  }
+
+  @Override
+  public int degeneracy(int symmetry) {
+    return 1;
+  }
+
+  @Override
+  public int count(int symmetry) {
+    return symmetry == EVEN ? cutoff + 1 : cutoff;
+  }
+
+  @Override
+  public double squaredWaveNumber(int symmetry, int mode) {
+    double k = waveNumber(mode + symmetry);
+    return k * k;
+  }
+
+  @Override
+  public double volume() {
+    return length;
+  }
+
+  @Override
+  public RingBasis stretched(double factor) {
+    return new RingBasis(length * factor, cutoff);
+  }
+
+  @Override
+  public int points() {
     return points / 2 + 1;
   }
 
-  double position(int point) {
+  @Override
+  public double radius(int point) {
     return length * point / points;
   }
 
-  double waveNumber(int mode) {
+  private double waveNumber(int mode) {
     return 2 * Math.PI * mode / length;
   }
 
@@ -46,9 +78,9 @@ final class RingBasis {
     return mode == 0 ? 1 / Math.sqrt(length) : Math.sqrt(2 / length);
   }
 
-  /** Values on the half grid of an even function given by cosine coefficients. */
-  double[] values(double[] coefficients) {
-    double[] f = new double[halfPoints()];
+  @Override
+  public double[] values(double[] coefficients) {
+    double[] f = new double[points()];
     for (int n = 0; n <= cutoff; n++) {
       double c = coefficients[n] * norm(n);
       for (int p = 0; p < f.length; p++) {
@@ -58,8 +90,17 @@ final class RingBasis {
     return f;
   }
 
-  /** Cosine coefficients of an even function on the half grid. */
-  double[] coefficients(double[] values) {
+  /** Value at any position of an even function given by cosine coefficients. */
+  double valueAt(double[] coefficients, double x) {
+    double sum = 0;
+    for (int n = 0; n <= cutoff; n++) {
+      sum += coefficients[n] * norm(n) * Math.cos(waveNumber(n) * x);
+    }
+    return sum;
+  }
+
+  @Override
+  public double[] coefficients(double[] values) {
     double[] c = new double[cutoff + 1];
     for (int n = 0; n <= cutoff; n++) {
       for (int p = 0; p < values.length; p++) {
@@ -70,7 +111,8 @@ final class RingBasis {
     return c;
   }
 
-  double integral(double[] values) {
+  @Override
+  public double integral(double[] values) {
     double sum = 0;
     for (int p = 0; p < values.length; p++) {
       sum += weight(p) * values[p];
@@ -78,36 +120,22 @@ final class RingBasis {
     return sum;
   }
 
-  /** Adds the matrix of multiplication by an even function to a block; even or odd modes. */
-  void addMultiplication(
-      double[][] matrix, int row, int column, double[] function, boolean even) {
+  @Override
+  public void addMultiplication(
+      double[][] matrix, int row, int column, double[] function, int symmetry) {
     double[] moments = new double[2 * cutoff + 1];
     for (int m = 0; m < moments.length; m++) {
       for (int p = 0; p < function.length; p++) {
         moments[m] += weight(p) * cosine(m, p) * function[p];
       }
     }
-    int first = even ? 0 : 1;
-    int sign = even ? 1 : -1;
-    for (int i = first; i <= cutoff; i++) {
-      for (int j = first; j <= cutoff; j++) {
+    int sign = symmetry == EVEN ? 1 : -1;
+    for (int i = symmetry; i <= cutoff; i++) {
+      for (int j = symmetry; j <= cutoff; j++) {
         double scale = 0.5 * norm(i) * norm(j);
-        matrix[row + i - first][column + j - first] +=
+        matrix[row + i - symmetry][column + j - symmetry] +=
             scale * (moments[Math.abs(i - j)] + sign * moments[i + j]);
       }
     }
-  }
-
-  /** Adds k^2 to the diagonal of a block. */
-  void addKinetic(double[][] matrix, int start, boolean even) {
-    int first = even ? 0 : 1;
-    for (int i = first; i <= cutoff; i++) {
-      double k = waveNumber(i);
-      matrix[start + i - first][start + i - first] += k * k;
-    }
-  }
-
-  int count(boolean even) {
-    return even ? cutoff + 1 : cutoff;
   }
 }

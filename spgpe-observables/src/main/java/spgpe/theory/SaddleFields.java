@@ -1,12 +1,13 @@
 package spgpe.theory;
 
+import java.util.function.DoubleUnaryOperator;
 import org.apache.commons.math3.linear.Array2DRowRealMatrix;
 import org.apache.commons.math3.linear.ArrayRealVector;
 import org.apache.commons.math3.linear.LUDecomposition;
 import org.apache.commons.math3.linear.SingularMatrixException;
 
 /**
- * Even two-component configuration {@code psi_1 = u + i v}, {@code psi_2 = u - i v} on a ring,
+ * Symmetric two-component configuration {@code psi_1 = u + i v}, {@code psi_2 = u - i v} in a box,
  * projected on the kept modes: energy, force, Newton iteration and Hessian blocks.
  *
  * <p>Energy density {@code u'^2 + v'^2 + g rho^2 - 2 mu rho - 2 J (u^2 - v^2) + 4 kappa u^2 v^2},
@@ -17,29 +18,29 @@ import org.apache.commons.math3.linear.SingularMatrixException;
 final class SaddleFields {
   private static final int NEWTON_LIMIT = 60;
 
-  final RingBasis basis;
+  final ModeBasis basis;
   private final CoupledPair pair;
-  /** Cosine coefficients of u, then of v. */
+  /** Coefficients of u, then of v, in the symmetric class. */
   private final double[] state;
   private final double[] u;
   private final double[] v;
 
-  SaddleFields(CoupledPair pair, RingBasis basis, double[] state) {
+  SaddleFields(CoupledPair pair, ModeBasis basis, double[] state) {
     this.pair = pair;
     this.basis = basis;
     this.state = state;
-    int n = basis.cutoff + 1;
+    int n = basis.count(0);
     u = basis.values(java.util.Arrays.copyOfRange(state, 0, n));
     v = basis.values(java.util.Arrays.copyOfRange(state, n, 2 * n));
   }
 
-  /** Fields with the profile of the phase-only bubble and either uniform or local density. */
-  static SaddleFields guess(CoupledPair pair, RingBasis basis, boolean localDensity) {
-    PhaseBubble bubble = PhaseBubble.of(pair);
-    double[] a = new double[basis.halfPoints()];
+  /** Fields with a given phase profile and either uniform or local density. */
+  static SaddleFields guess(
+      CoupledPair pair, ModeBasis basis, DoubleUnaryOperator profile, boolean localDensity) {
+    double[] a = new double[basis.points()];
     double[] b = new double[a.length];
     for (int i = 0; i < a.length; i++) {
-      double phi = bubble.phase(basis.position(i));
+      double phi = profile.applyAsDouble(basis.radius(i));
       double s = Math.sin(phi);
       double density =
           localDensity
@@ -60,9 +61,9 @@ final class SaddleFields {
   }
 
   /** The same coefficients under other parameters and length, scaled to keep the values. */
-  SaddleFields movedTo(CoupledPair other, RingBasis target) {
+  SaddleFields movedTo(CoupledPair other, ModeBasis target) {
     double[] moved = state.clone();
-    VectorMath.scale(moved, Math.sqrt(target.length / basis.length));
+    VectorMath.scale(moved, Math.sqrt(target.volume() / basis.volume()));
     return new SaddleFields(other, target, moved);
   }
 
@@ -72,9 +73,9 @@ final class SaddleFields {
     double[] force = current.force();
     double size = VectorMath.norm(force);
     double scale = pair.g() * Math.pow(Math.max(1e-300, pair.falseVacuumDensity()), 1.5)
-        * Math.sqrt(basis.length);
+        * Math.sqrt(basis.volume());
     for (int i = 0; i < NEWTON_LIMIT && size > 1e-12 * scale; i++) {
-      double[] step = solve(current.block(true, true), force);
+      double[] step = solve(current.block(true, 0), force);
       double fraction = 1;
       SaddleFields next = null;
       while (fraction > 1e-3) {
@@ -99,7 +100,7 @@ final class SaddleFields {
     if (!(size <= 1e-10 * scale)) {
       throw new UnconvergedException(
           "the Newton iteration for the critical bubble did not converge: force " + size
-              + " for " + pair + " on a ring of length " + basis.length);
+              + " for " + pair + " in a box of volume " + basis.volume());
     }
     return current;
   }
@@ -133,11 +134,11 @@ final class SaddleFields {
       fv[i] = (common + 2 * j + 4 * kappa * u2) * v[i];
     }
     double[] f = join(basis.coefficients(fu), basis.coefficients(fv));
-    int n = basis.cutoff + 1;
+    int n = basis.count(0);
     for (int i = 0; i < n; i++) {
-      double k = basis.waveNumber(i);
-      f[i] += k * k * state[i];
-      f[n + i] += k * k * state[n + i];
+      double square = basis.squaredWaveNumber(0, i);
+      f[i] += square * state[i];
+      f[n + i] += square * state[n + i];
     }
     return f;
   }
@@ -161,10 +162,10 @@ final class SaddleFields {
   /** Integral of sum_j |psi_j'|^2. */
   double gradientSquared() {
     double sum = 0;
-    int n = basis.cutoff + 1;
+    int n = basis.count(0);
     for (int i = 0; i < n; i++) {
-      double k = basis.waveNumber(i);
-      sum += 2 * k * k * (state[i] * state[i] + state[n + i] * state[n + i]);
+      double weight = state[i] * state[i] + state[n + i] * state[n + i];
+      sum += 2 * basis.squaredWaveNumber(0, i) * weight;
     }
     return sum;
   }
@@ -174,15 +175,20 @@ final class SaddleFields {
     return 2 * VectorMath.dot(state, state);
   }
 
-  /** Largest coefficient among the last two modes relative to the largest bubble coefficient. */
+  /** Largest coefficient near the cutoff relative to the largest bubble coefficient. */
   double spectralTail() {
-    int n = basis.cutoff + 1;
+    int n = basis.count(0);
+    double top = 0;
+    for (int i = 0; i < n; i++) {
+      top = Math.max(top, basis.squaredWaveNumber(0, i));
+    }
     double largest = 0;
     double tail = 0;
     for (int i = 0; i < n; i++) {
-      double c = Math.hypot(state[i], i == 0 ? 0 : state[n + i]);
+      double square = basis.squaredWaveNumber(0, i);
+      double c = Math.hypot(state[i], square == 0 ? 0 : state[n + i]);
       largest = Math.max(largest, c);
-      if (i >= n - 2) {
+      if (square > 0.9 * top) {
         tail = Math.max(tail, c);
       }
     }
@@ -197,23 +203,19 @@ final class SaddleFields {
     return 2 * Math.atan2(v[point], u[point]);
   }
 
-  /** Fields at any position, {u, v}. */
-  double[] at(double x) {
-    int n = basis.cutoff + 1;
-    double[] f = new double[2];
-    for (int i = 0; i < n; i++) {
-      double c = Math.sqrt((i == 0 ? 1 : 2) / basis.length) * Math.cos(basis.waveNumber(i) * x);
-      f[0] += c * state[i];
-      f[1] += c * state[n + i];
-    }
-    return f;
+  double[] coefficientsOfU() {
+    return java.util.Arrays.copyOf(state, state.length / 2);
+  }
+
+  double[] coefficientsOfV() {
+    return java.util.Arrays.copyOfRange(state, state.length / 2, state.length);
   }
 
   /**
    * Hessian block. Class A has rows (u, v); class B has rows (q, -p), so that multiplication of
    * both fields by i maps the A coordinates one to one on the B coordinates.
    */
-  double[][] block(boolean keepsSymmetry, boolean even) {
+  double[][] block(boolean keepsSymmetry, int symmetry) {
     double g = pair.g();
     double kappa = pair.biquadraticCoupling();
     double j = pair.coherentCoupling();
@@ -237,14 +239,14 @@ final class SaddleFields {
         cross[i] = -(g - kappa) * product;
       }
     }
-    int n = basis.count(even);
+    int n = basis.count(symmetry);
     double[][] h = new double[2 * n][2 * n];
-    basis.addMultiplication(h, 0, 0, first, even);
-    basis.addMultiplication(h, n, n, second, even);
-    basis.addMultiplication(h, 0, n, cross, even);
-    basis.addMultiplication(h, n, 0, cross, even);
-    basis.addKinetic(h, 0, even);
-    basis.addKinetic(h, n, even);
+    basis.addMultiplication(h, 0, 0, first, symmetry);
+    basis.addMultiplication(h, n, n, second, symmetry);
+    basis.addMultiplication(h, 0, n, cross, symmetry);
+    basis.addMultiplication(h, n, 0, cross, symmetry);
+    basis.addKinetic(h, 0, symmetry);
+    basis.addKinetic(h, n, symmetry);
     return h;
   }
 }

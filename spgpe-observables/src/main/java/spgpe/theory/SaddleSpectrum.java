@@ -1,12 +1,14 @@
 package spgpe.theory;
 
-/** Hessian spectrum of a critical bubble in its four symmetry blocks and the unstable mode. */
+import spgpe.internal.check.Check;
+
+/** Hessian spectrum of a critical bubble in its symmetry blocks and the unstable mode. */
 final class SaddleSpectrum {
   private static final int ITERATIONS = 60;
 
   private final SaddleFields fields;
   private final double zeroTolerance;
-  private final SymmetricEigen evenBroken;
+  private final SymmetricEigen symmetricBroken;
   private int negativeCount;
   private int zeroCount;
   private double negative;
@@ -17,34 +19,44 @@ final class SaddleSpectrum {
     this.fields = fields;
     double[] vacuum = GaussianFluctuations.of(pair, Vacuum.FALSE).curvatures(0);
     zeroTolerance = 1e-7 * vacuum[3];
-    collect(SymmetricEigen.of(fields.block(true, true)));
-    collect(SymmetricEigen.of(fields.block(true, false)));
-    evenBroken = SymmetricEigen.of(fields.block(false, true));
-    collect(evenBroken);
-    collect(SymmetricEigen.of(fields.block(false, false)));
-    for (int n = -fields.basis.cutoff; n <= fields.basis.cutoff; n++) {
-      for (double square :
-          GaussianFluctuations.of(pair, Vacuum.FALSE).curvatures(fields.basis.waveNumber(n))) {
-        if (square > 0) {
-          logSum += Math.log(square);
+    ModeBasis basis = fields.basis;
+    SymmetricEigen broken = null;
+    for (int symmetry = 0; symmetry < basis.classes(); symmetry++) {
+      int copies = basis.degeneracy(symmetry);
+      collect(SymmetricEigen.of(fields.block(true, symmetry)), copies);
+      SymmetricEigen eigen = SymmetricEigen.of(fields.block(false, symmetry));
+      collect(eigen, copies);
+      broken = broken == null ? eigen : broken;
+      collectVacuum(vacuum, symmetry);
+    }
+    symmetricBroken = Check.notNull(broken, "spectrum");
+  }
+
+  private void collectVacuum(double[] vacuum, int symmetry) {
+    ModeBasis basis = fields.basis;
+    for (int i = 0; i < basis.count(symmetry); i++) {
+      for (double curvature : vacuum) {
+        double value = basis.squaredWaveNumber(symmetry, i) + curvature;
+        if (value > 0) {
+          logSum += basis.degeneracy(symmetry) * Math.log(value);
         }
       }
     }
   }
 
-  private void collect(SymmetricEigen eigen) {
+  private void collect(SymmetricEigen eigen, int copies) {
     for (int i = 0; i < eigen.size(); i++) {
       double value = eigen.value(i);
       if (Math.abs(value) < zeroTolerance) {
-        zeroCount++;
+        zeroCount += copies;
         zeroError = Math.max(zeroError, Math.abs(value));
         continue;
       }
       if (value < 0) {
-        negativeCount++;
+        negativeCount += copies;
         negative = Math.min(negative, value);
       }
-      logSum -= Math.log(Math.abs(value));
+      logSum -= copies * Math.log(Math.abs(value));
     }
   }
 
@@ -102,16 +114,16 @@ final class SaddleSpectrum {
   }
 
   private double[][] transformedBlock() {
-    double[][] h = fields.block(true, true);
+    double[][] h = fields.block(true, 0);
     int n = h.length;
     double[][] half = new double[n][];
     for (int k = 0; k < n; k++) {
-      half[k] = VectorMath.times(h, evenBroken.vector(k));
+      half[k] = VectorMath.times(h, symmetricBroken.vector(k));
     }
     double[][] t = new double[n][n];
     for (int i = 0; i < n; i++) {
       for (int k = 0; k < n; k++) {
-        t[i][k] = VectorMath.dot(evenBroken.vector(i), half[k]);
+        t[i][k] = VectorMath.dot(symmetricBroken.vector(i), half[k]);
       }
     }
     return t;
@@ -136,7 +148,7 @@ final class SaddleSpectrum {
   }
 
   private double stiffness(int k) {
-    return Math.max(0, evenBroken.value(k));
+    return Math.max(0, symmetricBroken.value(k));
   }
 
   /** Root c of a^T F(c) a = 0 by bisection and Newton steps; the left side grows with c. */

@@ -38,9 +38,9 @@ class DecayRateTest {
     CriticalBubble b = bubble(coherent, length, modes);
     DecayRate r = DecayRate.of(b, b.energy() / barrier, damping);
     assertEquals(rate, r.total(), tolerance * rate);
-    assertEquals(r.total(), r.perLength() * length, 1e-14 * rate);
+    assertEquals(r.total(), r.density() * length, 1e-14 * rate);
     assertEquals(barrier, r.barrierOverTemperature(), 1e-12);
-    assertEquals(r.perLength(), r.prefactorPerLength() * Math.exp(-barrier), 1e-14 * rate);
+    assertEquals(r.density(), r.prefactor() * Math.exp(-barrier), 1e-14 * rate);
   }
 
   /**
@@ -114,10 +114,10 @@ class DecayRateTest {
   private static double spectralRate(double lambda, double barrier, int cutoff) {
     double s = Math.sqrt(lambda * lambda - 1);
     RingBasis basis = new RingBasis(28 / s, cutoff);
-    double[] curvature = new double[basis.halfPoints()];
+    double[] curvature = new double[basis.points()];
     double[] slopeSquared = new double[curvature.length];
     for (int p = 0; p < curvature.length; p++) {
-      double x = s * basis.position(p);
+      double x = s * basis.radius(p);
       double f = s / Math.cosh(x);
       double y = 2 * Math.atan(f);
       curvature[p] = -Math.cos(y) + lambda * lambda * Math.cos(2 * y);
@@ -126,16 +126,15 @@ class DecayRateTest {
     }
     double logDeterminant = 0;
     double negative = 0;
-    for (boolean even : new boolean[] {true, false}) {
-      int n = basis.count(even);
+    for (int symmetry = 0; symmetry < 2; symmetry++) {
+      int n = basis.count(symmetry);
       double[][] h = new double[n][n];
-      basis.addMultiplication(h, 0, 0, curvature, even);
-      basis.addKinetic(h, 0, even);
+      basis.addMultiplication(h, 0, 0, curvature, symmetry);
+      basis.addKinetic(h, 0, symmetry);
       SymmetricEigen eigen = SymmetricEigen.of(h);
       for (int i = 0; i < n; i++) {
-        double k = basis.waveNumber(even ? i : i + 1);
-        logDeterminant += Math.log(k * k + s * s);
-        if (!even && i == 0) {
+        logDeterminant += Math.log(basis.squaredWaveNumber(symmetry, i) + s * s);
+        if (symmetry == RingBasis.ODD && i == 0) {
           continue;
         }
         negative = Math.min(negative, eigen.value(i));

@@ -37,6 +37,9 @@ class ModulatedCouplingTest {
     FloquetExponent e = SLOW.withFrequency(omega).floquet(0, 0);
     assertEquals(0, e.growth(), 0);
     assertEquals(frequency, e.frequency(), 6e-9);
+    // The averaged potential is off by .445/omega^2 relative.
+    double excess = e.frequency() / SLOW.averagedMode(0).frequency() - 1;
+    assertEquals(.445, excess * omega * omega, .445 * 2 / (omega * omega) + .002);
   }
 
   /**

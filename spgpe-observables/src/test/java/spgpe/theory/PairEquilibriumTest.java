@@ -58,7 +58,8 @@ class PairEquilibriumTest {
     if (lengthCoherence != null) {
       assertEquals(lengthCoherence, e.coherenceCorrelation().decayLength(), 1e-7);
     }
-    assertTrue(a.truncationError() < 2e-8);
+    assertTrue(a.truncationError() < 3e-8);
+    assertTrue(e.lengthError() < 1e-5, () -> "lengths " + e.lengthError());
     // Zero distance is fixed by the averages.
     assertEquals(a.sySquared(), e.syCorrelation().at(0), 1e-8);
     assertEquals(a.imbalanceSquared(), e.imbalanceCorrelation().at(0), 1e-6);
@@ -88,6 +89,22 @@ class PairEquilibriumTest {
     assertEquals(density, a.density(), 1e-8);
     assertEquals(coherence, a.coherence(), 1e-8);
     assertEquals(sySquared, a.sySquared(), 2e-8);
+  }
+
+  /** Gaps of the angular-momentum sectors M = 1, 2, 3, per length. */
+  @ParameterizedTest
+  @CsvSource({
+    ".1, .15, .25, .10381193, .36367009, .75243674", ".05, .10, .1, .02788061, .11115124, .24875974"
+  })
+  void sectorGaps(
+      double coherent, double kappa, double temperature, double one, double two, double three) {
+    double unit = Math.cbrt(temperature);
+    double energy = unit * unit;
+    PairSolver solver = new PairSolver(1 / energy, coherent / energy, kappa, 10, 16, 3);
+    double ground = solver.ground(0).energy;
+    assertEquals(one, unit * (solver.ground(1).energy - ground), 1e-8);
+    assertEquals(two, unit * (solver.ground(2).energy - ground), 1e-8);
+    assertEquals(three, unit * (solver.ground(3).energy - ground), 1e-8);
   }
 
   @Test
