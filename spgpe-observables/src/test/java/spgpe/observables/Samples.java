@@ -63,6 +63,12 @@ public final class Samples {
     Random random = new Random(seed);
     int points = model.region().grid().points();
     double length = model.region().grid().volume();
+    double[] cosines = new double[points];
+    double[] sines = new double[points];
+    for (int i = 0; i < points; i++) {
+      cosines[i] = Math.cos(2 * Math.PI * i / points);
+      sines[i] = Math.sin(2 * Math.PI * i / points);
+    }
     return () -> {
       double[] phi = new double[points];
       for (int n = 0; n <= points / 2; n++) {
@@ -73,8 +79,7 @@ public final class Samples {
         double b = alone ? 0 : sigma * random.nextGaussian();
         for (int i = 0; i < points; i++) {
           int turn = (int) ((long) n * i % points);
-          double angle = 2 * Math.PI * turn / points;
-          phi[i] += a * Math.cos(angle) + b * Math.sin(angle);
+          phi[i] += a * cosines[turn] + b * sines[turn];
         }
       }
       double dx = length / points;

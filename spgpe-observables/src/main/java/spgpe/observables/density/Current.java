@@ -1,8 +1,7 @@
 package spgpe.observables.density;
 
-import spgpe.hamiltonian.HamiltonianTerm;
-import spgpe.hamiltonian.Kinetic;
 import spgpe.internal.check.Check;
+import spgpe.internal.measure.Masses;
 import spgpe.internal.measure.PointwiseProfile;
 import spgpe.model.Model;
 import spgpe.projector.Amplitudes;
@@ -24,7 +23,7 @@ public final class Current {
     final ModeTransform transform;
 
     Scratch(Model model) {
-      masses = masses(model);
+      masses = Masses.of(model);
       gradientModes = new Amplitudes(model.region(), model.components(), 1);
       gradient = new Field(model.region().grid(), model.components(), 1);
       transform = model.region().transform(model.components(), 1, model.fourierProvider());
@@ -44,7 +43,8 @@ public final class Current {
    */
   public static Observable ofComponent(int component, int axis) {
     Check.inRange(component, 0, 254, "component");
-    return profile("current of component " + component, component + 1, axis, c -> c == component ? 1 : 0);
+    return profile(
+        "current of component " + component, component + 1, axis, c -> c == component ? 1 : 0);
   }
 
   /**
@@ -103,23 +103,5 @@ public final class Current {
                 * (psi.re(c)[i] * s.gradient.im(c)[i] - psi.im(c)[i] * s.gradient.re(c)[i]);
       }
     }
-  }
-
-  private static double[] masses(Model model) {
-    double[] masses = new double[model.components()];
-    int found = 0;
-    for (HamiltonianTerm term : model.hamiltonian().terms()) {
-      if (term instanceof Kinetic kinetic) {
-        found++;
-        for (int c = 0; c < masses.length; c++) {
-          masses[c] = kinetic.mass(c);
-        }
-      }
-    }
-    Check.argument(
-        found == 1,
-        "currents need the masses of exactly one kinetic term: kinetic terms=%s, %s",
-        found, model.hamiltonian());
-    return masses;
   }
 }
