@@ -167,8 +167,8 @@ class ThermometerTest {
 
   /**
    * Every thermometer on an interacting pair in equilibrium with T = 0.05, mu = 1.1. Fixed seed; 4
-   * standard errors, false alarm 6e-5 for each of 11 values; errors are 0.5 to 3 %, so a factor
-   * of 2 in the noise (T) or a chemical potential off by 3 % is seen.
+   * standard errors, false alarm 6e-5 for each of 11 values; errors are at most 3 %, so a noise
+   * strength wrong by 12 % or a chemical potential wrong by 4 % (fit) is always seen.
    */
   @Test
   void thermometersReadTheTemperatureOfTheReservoir() {
