@@ -1,0 +1,161 @@
+package spgpe.observables.correlation;
+
+import spgpe.internal.check.Check;
+import spgpe.internal.measure.CurveFit;
+import spgpe.observables.Estimates;
+import spgpe.observables.Measured;
+
+/**
+ * Correlation length from a fit of C(r) = A f(r) over a range of distances:
+ *
+ * <pre>
+ *   exponential:        f(r) = exp(-r/xi)
+ *   hyperbolic cosine:  f(r) = cosh((L/2 - r)/xi) / cosh(L/(2 xi)),   the same on a ring of length L.
+ * </pre>
+ *
+ * <p>Neighbouring distances are strongly correlated, so the fit uses the covariance across
+ * trajectories; its inverse is scaled by (N-p-2)/(N-1) for N trajectories and p points, because the
+ * inverse of an estimated covariance is too large (Hartlap, Simon, Schneider, Astron. Astrophys.
+ * 464, 399 (2007), from memory). A true correlation length is the decay at large r: choose the range
+ * where a second fit from a larger distance agrees. Immutable and thread-safe.
+ *
+ * @param length xi with its error
+ * @param amplitude A with its error
+ * @param chiSquare weighted sum of squares
+ * @param degreesOfFreedom points less two
+ * @param points number of fitted points
+ */
+public record CorrelationLength(
+    Measured length, Measured amplitude, double chiSquare, int degreesOfFreedom, int points) {
+
+  /**
+   * Fits an exponential with the covariance of the points.
+   *
+   * @param correlation the correlation
+   * @param from smallest distance used
+   * @param to largest distance used
+   * @return the fit
+   * @throws IllegalArgumentException if there are fewer than three points in the range, too few
+   *     trajectories for their covariance, or no minimum
+   */
+  public static CorrelationLength exponential(
+      CorrelationFunction correlation, double from, double to) {
+    return fit(correlation, from, to, CorrelationLength::exponentialCurve, true);
+  }
+
+  /**
+   * Fits a hyperbolic cosine with the covariance of the points.
+   *
+   * @param correlation the correlation on a ring
+   * @param from smallest distance used
+   * @param to largest distance used
+   * @return the fit
+   * @throws IllegalArgumentException if there are fewer than three points in the range, too few
+   *     trajectories for their covariance, no ring, or no minimum
+   */
+  public static CorrelationLength hyperbolicCosine(
+      CorrelationFunction correlation, double from, double to) {
+    return fit(correlation, from, to, ringCurve(correlation), true);
+  }
+
+  /**
+   * Fits a hyperbolic cosine with the errors of the points only. The error and chi-square of the
+   * result are then not to be trusted; use it when there are too few trajectories for a covariance.
+   *
+   * @param correlation the correlation on a ring
+   * @param from smallest distance used
+   * @param to largest distance used
+   * @return the fit
+   * @throws IllegalArgumentException if there are fewer than three points in the range, no ring, or
+   *     no minimum
+   */
+  public static CorrelationLength hyperbolicCosineIgnoringCovariance(
+      CorrelationFunction correlation, double from, double to) {
+    return fit(correlation, from, to, ringCurve(correlation), false);
+  }
+
+  private static CurveFit.Curve ringCurve(CorrelationFunction correlation) {
+    double period = correlation.period();
+    Check.argument(
+        Double.isFinite(period), "a hyperbolic cosine needs a ring: period=%s", period);
+    return (x, p, gradient) -> ringCurve(x, p, gradient, period);
+  }
+
+  private static double exponentialCurve(double x, double[] p, double[] gradient) {
+    double f = Math.exp(-x * p[1]);
+    gradient[0] = f;
+    gradient[1] = -p[0] * x * f;
+    return p[0] * f;
+  }
+
+  /** p[1] = 1/xi; written with decaying exponentials only. */
+  private static double ringCurve(double x, double[] p, double[] gradient, double period) {
+    double q = Math.abs(p[1]);
+    double near = Math.exp(-x * q);
+    double far = Math.exp(-(period - x) * q);
+    double whole = Math.exp(-period * q);
+    double f = (near + far) / (1 + whole);
+    double slope =
+        (-x * near - (period - x) * far) / (1 + whole) + f * period * whole / (1 + whole);
+    gradient[0] = f;
+    gradient[1] = p[0] * slope * Math.signum(p[1]);
+    return p[0] * f;
+  }
+
+  private static CorrelationLength fit(
+      CorrelationFunction c, double from, double to, CurveFit.Curve curve, boolean covariance) {
+    Check.notNull(c, "correlation");
+    Check.argument(to > from, "the range must have from < to: from=%s, to=%s", from, to);
+    int first = 0;
+    while (first < c.size() && c.distance(first) < from) {
+      first++;
+    }
+    int end = first;
+    while (end < c.size() && c.distance(end) <= to) {
+      end++;
+    }
+    int n = end - first;
+    Check.argument(
+        n >= 3, "the range must hold at least three distances: from=%s, to=%s, distances=%s",
+        from, to, n);
+    Estimates e = c.estimates();
+    double scale = 1;
+    if (covariance) {
+      Check.argument(
+          e.trajectories() > n + 2,
+          "the covariance of p points needs more than p + 2 trajectories: points=%s,"
+              + " trajectories=%s; narrow the range or ignore the covariance", n, e.trajectories());
+      scale = (e.trajectories() - n - 2.0) / (e.trajectories() - 1.0);
+    }
+    double[] x = new double[n];
+    double[] y = new double[n];
+    double[][] cov = new double[n][n];
+    for (int i = 0; i < n; i++) {
+      x[i] = c.distance(first + i);
+      y[i] = e.value(first + i);
+      for (int j = 0; j < n; j++) {
+        cov[i][j] = covariance || i == j ? e.covariance(first + i, first + j) : 0;
+      }
+    }
+    CurveFit.Result r = CurveFit.fit(x, y, cov, scale, guess(x, y), curve);
+    double q = Math.abs(r.parameters()[1]);
+    Check.argument(
+        q > 0, "the correlation does not decay over the range: from=%s, to=%s", from, to);
+    return new CorrelationLength(
+        new Measured(1 / q, r.error(1) / (q * q)),
+        new Measured(r.parameters()[0], r.error(0)),
+        r.chiSquare(), r.degreesOfFreedom(), n);
+  }
+
+  private static double[] guess(double[] x, double[] y) {
+    int last = x.length - 1;
+    while (last > 0 && !(y[last] / y[0] > 0.02)) {
+      last--;
+    }
+    double q =
+        last == 0 || y[last] >= y[0]
+            ? 1 / (x[x.length - 1] - x[0])
+            : Math.log(y[0] / y[last]) / (x[last] - x[0]);
+    return new double[] {y[0] * Math.exp(q * x[0]), q};
+  }
+}
