@@ -221,8 +221,8 @@ public final class PairEquilibrium {
   }
 
   /**
-   * Largest relative change of the four correlation lengths when both basis sizes are reduced by one
-   * step; the error of the lengths reported here is smaller.
+   * Largest relative change of the four correlation lengths when both basis sizes are reduced by
+   * one step; the error of the lengths reported here is smaller.
    *
    * @return the relative change
    */
