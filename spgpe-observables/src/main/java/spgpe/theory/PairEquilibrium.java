@@ -44,11 +44,12 @@ public final class PairEquilibrium {
     this.pair = pair;
     unit = Math.cbrt(pair.g() * pair.temperature());
     amplitudeSquared = Math.cbrt(pair.temperature() * pair.temperature() / pair.g());
+    double largest = Math.abs(alpha()) + pair.coherentCoupling() / (unit * unit);
     Check.argument(
-        Math.abs(alpha()) <= 40,
-        "|alpha| with alpha=mu/(g T)^(2/3) must be <= 40: alpha=%s (mu=%s, g=%s, temperature=%s);"
-            + " at lower temperature use GaussianFluctuations",
-        alpha(), pair.mu(), pair.g(), pair.temperature());
+        largest <= 40,
+        "(|mu| + J)/(g T)^(2/3) must be <= 40: it is %s (mu=%s, J=%s, g=%s, temperature=%s); at"
+            + " lower temperature use GaussianFluctuations",
+        largest, pair.mu(), pair.coherentCoupling(), pair.g(), pair.temperature());
     int k = FEWEST_STATES;
     int width = startingWidth(pair);
     PairSolver solver = solver(k, width, 1);
@@ -113,7 +114,7 @@ public final class PairEquilibrium {
    *
    * @param pair parameters
    * @return the equilibrium
-   * @throws IllegalArgumentException if {@code |mu|/(g T)^(2/3) > 40}
+   * @throws IllegalArgumentException if {@code (|mu| + J)/(g T)^(2/3) > 40}
    * @throws UnconvergedException if the largest basis is too small
    */
   public static PairEquilibrium of(CoupledPair pair) {
@@ -220,8 +221,8 @@ public final class PairEquilibrium {
   }
 
   /**
-   * Largest relative change of the four correlation lengths when both basis sizes are reduced by one
-   * step; the error of the lengths reported here is smaller.
+   * Largest relative change of the four correlation lengths when both basis sizes are reduced by
+   * one step; the error of the lengths reported here is smaller.
    *
    * @return the relative change
    */

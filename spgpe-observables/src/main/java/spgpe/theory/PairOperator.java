@@ -15,6 +15,7 @@ final class PairOperator {
   private final int blocks;
   private final double hopOne;
   private final double hopTwo;
+  private final double shift;
 
   /**
    * Sets up the operator.
@@ -24,9 +25,15 @@ final class PairOperator {
    * @param halfWidth blocks kept on each side of the centre
    * @param coherent J/(g T)^(2/3)
    * @param biquadratic kappa/g
+   * @param shift alpha of the radial states minus alpha of the problem
    */
   PairOperator(
-      RadialStates radial, int total, int halfWidth, double coherent, double biquadratic) {
+      RadialStates radial,
+      int total,
+      int halfWidth,
+      double coherent,
+      double biquadratic,
+      double shift) {
     this.radial = radial;
     this.states = radial.states;
     this.total = total;
@@ -35,6 +42,7 @@ final class PairOperator {
     blocks = 2 * halfWidth + 1 - (total % 2);
     hopOne = coherent;
     hopTwo = biquadratic;
+    this.shift = shift;
   }
 
   /** Largest |m| that a sector of this size touches, with one spare for raised states. */
@@ -80,6 +88,12 @@ final class PairOperator {
           int i = index(b, k, l);
           y[i] += (e1[k] + e2[l]) * x[i];
         }
+      }
+      if (shift != 0) {
+        double[] left = radial.square[Math.abs(m1)];
+        double[] right = radial.square[Math.abs(total - m1)];
+        addBlock(left, false, x, b, null, false, y, b, shift, work);
+        addBlock(null, false, x, b, right, true, y, b, shift, work);
       }
     }
     addDensityProduct(x, y, 0.5 * hopTwo, work);

@@ -7,11 +7,13 @@ import java.util.List;
 final class PairSolver {
   private static final int STEP_LIMIT = 420;
   private static final double RESIDUAL = 1e-9;
+  private static final double SHIFT_FROM = 3;
 
   private final RadialStates radial;
   private final int halfWidth;
   private final double coherent;
   private final double biquadratic;
+  private final double shift;
 
   PairSolver(
       double alpha,
@@ -23,13 +25,15 @@ final class PairSolver {
     this.halfWidth = halfWidth;
     this.coherent = coherent;
     this.biquadratic = biquadratic;
+    // Radial states of the mean field: in the locked state the partner adds J to mu.
+    shift = alpha + coherent > SHIFT_FROM ? coherent : 0;
     radial =
         RadialStates.of(
-            alpha, states, PairOperator.momentaNeeded(largestSector, halfWidth), 0);
+            alpha + shift, states, PairOperator.momentaNeeded(largestSector, halfWidth), 0);
   }
 
   PairOperator sector(int total) {
-    return new PairOperator(radial, total, halfWidth, coherent, biquadratic);
+    return new PairOperator(radial, total, halfWidth, coherent, biquadratic, shift);
   }
 
   /** A normalised eigenvector and its energy. */

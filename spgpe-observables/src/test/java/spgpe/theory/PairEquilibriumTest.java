@@ -224,8 +224,10 @@ class PairEquilibriumTest {
     assertThrows(IllegalArgumentException.class, () -> new CoupledPair(1, 1, -.1, .1, .1));
     CoupledPair cold = new CoupledPair(1, 1, .1, .1, 1e-3);
     assertThrows(IllegalArgumentException.class, () -> PairEquilibrium.of(cold));
-    // Strongly locked phase: needs more angular momenta than the largest basis has.
-    CoupledPair stiff = new CoupledPair(1, 1, 200, 0, .01);
+    CoupledPair locked = new CoupledPair(1, 1, 200, 0, .01);
+    assertThrows(IllegalArgumentException.class, () -> PairEquilibrium.of(locked));
+    // S_y frozen by a huge kappa: needs more radial states than the largest basis has.
+    CoupledPair stiff = new CoupledPair(1, 1, .1, 300, .1);
     assertThrows(UnconvergedException.class, () -> PairEquilibrium.of(stiff));
     PairEquilibrium e = PairEquilibrium.of(new CoupledPair(1, 1, .05, .1, .1));
     assertThrows(UnconvergedException.class, () -> e.onRing(0.5));
