@@ -16,6 +16,8 @@ public record Axis(int points, double length) {
   /**
    * Checks the values.
    *
+   * @param points number of points N
+   * @param length ring length L
    * @throws IllegalArgumentException if a value is out of range
    */
   public Axis {

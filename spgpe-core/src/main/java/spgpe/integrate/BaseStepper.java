@@ -32,7 +32,7 @@ abstract class BaseStepper implements Stepper {
   @Override
   public final void start(Amplitudes initial, long firstStep) {
     Check.argument(firstStep >= 0, "first step must be >= 0: firstStep=%s", firstStep);
-    state.set(Check.notNull(initial, "state"));
+    state.set(initial);
     step = firstStep;
     started = true;
     atSymmetricPoint = true;
@@ -40,9 +40,7 @@ abstract class BaseStepper implements Stepper {
 
   @Override
   public final void advance() {
-    if (!started) { // allocates nothing in a step
-      throw new IllegalStateException("start(state, firstStep) must be called before advance()");
-    }
+    Check.state(started, "start(state, firstStep) must be called before advance()");
     if (isNoisy()) {
       noise.fill(step, atSymmetricPoint ? NoiseUse.START : NoiseUse.WHOLE, normals);
     }
@@ -53,10 +51,7 @@ abstract class BaseStepper implements Stepper {
 
   @Override
   public final void observe(Amplitudes target) {
-    if (!started) {
-      throw new IllegalStateException("start(state, firstStep) must be called before observe");
-    }
-    Check.notNull(target, "target");
+    Check.state(started, "start(state, firstStep) must be called before observe(target)");
     if (atSymmetricPoint) {
       target.set(state);
       return;

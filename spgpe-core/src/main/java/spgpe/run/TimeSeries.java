@@ -23,6 +23,9 @@ public final class TimeSeries implements Accumulator<TimeSeries> {
     /**
      * Checks the values.
      *
+     * @param end how the trajectory ended
+     * @param times times of its samples
+     * @param values numbers measured at each time
      * @throws IllegalArgumentException if something is null
      */
     public Series {

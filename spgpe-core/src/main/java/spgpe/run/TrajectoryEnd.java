@@ -14,6 +14,10 @@ public record TrajectoryEnd(long trajectory, double time, Reason reason, String 
   /**
    * Checks the values.
    *
+   * @param trajectory index of the trajectory
+   * @param time time at which it ended
+   * @param reason why
+   * @param detail name of the stop rule, or what diverged
    * @throws IllegalArgumentException if a number is negative or not finite, or something is null
    */
   public TrajectoryEnd {

@@ -76,7 +76,7 @@ class NullArgumentsTest {
     Map<Class<?>, Object> map = new HashMap<>();
     map.put(int.class, 1);
     map.put(long.class, 1L);
-    map.put(double.class, 1.0);
+    map.put(double.class, 0.05);
     map.put(boolean.class, true);
     map.put(String.class, "name");
     map.put(double[].class, new double[] {1});

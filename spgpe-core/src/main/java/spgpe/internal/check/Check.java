@@ -40,6 +40,19 @@ public final class Check {
   }
 
   /**
+   * Throws unless the condition holds, without making an array for values: for time steps.
+   *
+   * @param condition what must be true
+   * @param message message
+   * @throws IllegalStateException if the condition is false
+   */
+  public static void state(boolean condition, String message) {
+    if (!condition) {
+      throw new IllegalStateException(message);
+    }
+  }
+
+  /**
    * Refuses null with the parameter's name.
    *
    * @param value value to test

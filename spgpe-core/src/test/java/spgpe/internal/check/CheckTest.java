@@ -46,5 +46,6 @@ class CheckTest {
     assertEquals("y", Check.notNull("y", "x"));
     Check.argument(true, "never");
     Check.state(true, "never");
+    Check.state(true, "never %s", 1);
   }
 }
