@@ -175,7 +175,7 @@ class ThermometerTest {
     Model model = Fields.pair(12, 24);
     Model damped = model.withReservoir(Reservoir.of(0.05, 1.1, 0.5));
     Equipartition bands = Equipartition.inBands(0, 0.1, 0.6, 1.2, 2, 4);
-    Schedule every = Schedule.every(1).startingAt(20);
+    Schedule every = Schedule.every(2).startingAt(20);
     Recording<TimeAverage> band = Recording.of(bands, every, TimeAverage::new);
     Recording<TimeAverage> free =
         Recording.of(DynamicalTemperature.inverse(), every, TimeAverage::new);
@@ -203,8 +203,10 @@ class ThermometerTest {
     assertMeasures(
         0.05, DynamicalTemperature.temperatureFromCurvature(result.get(ratio)), 0.03);
     OccupationTail tail = OccupationTail.fit(model, 0, result.get(occupation), 1.5, 4);
-    // the tail is a limit: at k >= 1.5 the pairing with -k still changes n_k by a few percent
-    assertEquals(0.05, tail.temperature().value(), 0.004);
+    // Bogoliubov: T/n = (e + a) - b^2/(e + a) with e + a +- b = e + 0.74 and e + 2.6 (phase and
+    // density branch at n = 1.2): the bend makes the straight line too steep, between e = 1.1 and
+    // 4.9 by 4.7 % (chord), and the temperature that much too low
+    assertMeasures(0.05 / 1.047, tail.temperature(), 0.03);
   }
 
   private static void assertMeasures(double expected, Measured found, double relative) {

@@ -1,0 +1,214 @@
+package spgpe.observables.bubble;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.util.List;
+import java.util.concurrent.ExecutorService;
+import java.util.concurrent.Executors;
+import java.util.function.Supplier;
+import org.junit.jupiter.api.Test;
+import spgpe.integrate.OuRk4;
+import spgpe.model.Model;
+import spgpe.observables.Estimates;
+import spgpe.observables.Fields;
+import spgpe.observables.FirstPassage;
+import spgpe.observables.Measured;
+import spgpe.observables.Samples;
+import spgpe.observables.TimeAverage;
+import spgpe.observables.correlation.CorrelationFunction;
+import spgpe.observables.correlation.NaturalModes;
+import spgpe.observables.correlation.OneBodyMatrix;
+import spgpe.observables.correlation.TemporalCorrelation;
+import spgpe.observables.phase.ComponentPhase;
+import spgpe.observables.phase.RelativePhase;
+import spgpe.observables.spectrum.ModeAmplitude;
+import spgpe.observables.topology.PhaseSlips;
+import spgpe.reservoir.Reservoir;
+import spgpe.run.Ensemble;
+import spgpe.run.EnsembleResult;
+import spgpe.run.InitialState;
+import spgpe.run.Recording;
+import spgpe.run.Schedule;
+import spgpe.run.Snapshot;
+import spgpe.run.TrajectoryEnd;
+
+class MetastableStateTest {
+  /**
+   * Gaussian phase about pi, m = 0.7, L = 40: c(r) from the mode sum, then &lt;cos&gt; = -exp(-v/2),
+   * &lt;cos cos'&gt; = exp(-v) cosh c, &lt;sin sin'&gt; = exp(-v) sinh c. Fixed seed, 4 standard errors:
+   * false alarm 6e-5 for each of 3 values; the errors bound what is seen (0.1 %, 5 %, 2 %).
+   */
+  @Test
+  void fluctuationsOfAGaussianPhase() {
+    Model model = Fields.latticePair(128, 40);
+    List<TimeAverage> average =
+        Samples.average(
+            model, 1000,
+            Samples.gaussianPhase(model, k -> 0.1 / (0.5 * (k * k + 0.49)), Math.PI, 31),
+            MetastableFluctuations.observable());
+    MetastableFluctuations f = MetastableFluctuations.of(average.get(0), model);
+    double v = 0.13653452;
+    double[] c = new double[128];
+    for (int n = -64; n < 64; n++) {
+      double k = 2 * Math.PI * n / 40;
+      for (int r = 0; r < 128; r++) {
+        c[r] += 0.2 / (k * k + 0.49) / 40 * Math.cos(k * r * 40 / 128);
+      }
+    }
+    double integral = 0;
+    for (int r = 0; r < 128; r++) {
+      integral += Math.sinh(c[r]) * 40 / 128 / 2 / Math.sinh(c[0]);
+    }
+    int half = 64 + 3;
+    Measured mean = average.get(0).estimate(half - 1);
+    assertEquals(mean.value(), f.meanCosine(), 1e-12);
+    assertTrue(mean.standardError() < 1e-3, mean::toString);
+    assertEquals(-Math.exp(-v / 2), f.meanCosine(), 4 * mean.standardError());
+    Measured length =
+        average.get(0).derived(
+            x -> {
+              double sum = 0;
+              for (int r = 0; r < 128; r++) {
+                sum += x[half + Math.min(r, 128 - r)] * 40 / 128 / 2 / x[half];
+              }
+              return sum;
+            });
+    assertEquals(length.value(), f.phaseLength(), 1e-9);
+    assertTrue(length.standardError() < 0.07, length::toString);
+    assertEquals(integral, f.phaseLength(), 4 * length.standardError());
+    assertEquals(1 / 0.7, integral, 0.05 / 0.7); // cutoff and sinh: a few percent longer
+    Measured variance = average.get(0).derived(x -> x[0] - x[half - 1] * x[half - 1]);
+    assertTrue(variance.standardError() < 0.02 * variance.value(), variance::toString);
+    assertEquals(Math.exp(-v) * (Math.cosh(v) - 1), variance.value(), 4 * variance.standardError());
+    assertEquals(Math.sqrt(variance.value()), f.deviation(0), 1e-9);
+
+    // the smoothed deviation against smoothing the frames themselves
+    Supplier<Snapshot> again =
+        Samples.gaussianPhase(model, k -> 0.1 / (0.5 * (k * k + 0.49)), Math.PI, 31);
+    PeriodicSmoothing smoothing = new PeriodicSmoothing(128, 40.0 / 128, 1.1);
+    double sum = 0;
+    double square = 0;
+    for (int s = 0; s < 1000; s++) {
+      double[] smooth = new double[128];
+      smoothing.apply(Fields.measure(RelativePhase.cosine(), again.get()), smooth);
+      for (double value : smooth) {
+        sum += value / 1000 / 128;
+        square += value * value / 1000 / 128;
+      }
+    }
+    assertEquals(Math.sqrt(square - sum * sum), f.deviation(1.1), 1e-6);
+
+    BubbleSettings settings = BubbleSettings.from(f);
+    assertEquals(0.75 * f.phaseLength(), settings.smoothing(), 1e-12);
+    assertEquals(
+        f.meanCosine() + 5 * f.deviation(settings.smoothing()), settings.growLevel(), 1e-12);
+    assertEquals((1 + f.meanCosine()) / 2, settings.seedLevel(), 1e-12);
+    assertEquals(2 * f.phaseLength(), settings.minimumWidth(), 1e-12);
+    assertTrue(settings.origin().startsWith("from the metastable state: mean cosine -0.93"));
+    assertTrue(settings.withSmoothing(1).origin().endsWith("changed by hand"));
+  }
+
+  @Test
+  void hotStatesAreRefused() {
+    Model model = Fields.latticePair(64, 20);
+    List<TimeAverage> average =
+        Samples.average(
+            model, 200, Samples.gaussianPhase(model, k -> 3 / (k * k + 0.5), Math.PI, 32),
+            MetastableFluctuations.observable());
+    MetastableFluctuations f = MetastableFluctuations.of(average.get(0), model);
+    String message = Fields.refusal(() -> BubbleSettings.from(f));
+    assertTrue(message.contains("cannot be told from"), message);
+    TimeAverage wrong = new TimeAverage(new double[] {0}, 3);
+    assertTrue(
+        Fields.refusal(() -> MetastableFluctuations.of(wrong, model)).contains("numbers=3"));
+    TimeAverage empty = new TimeAverage(new double[] {0}, 70);
+    assertTrue(
+        Fields.refusal(() -> MetastableFluctuations.of(empty, model)).contains("no sample"));
+  }
+
+  /** A decay run with everything recorded: the same bits for every split, and sensible numbers. */
+  @Test
+  void decayRunRecordsEverythingBitIdentically() {
+    Model model =
+        Fields.pair(16, 32).withReservoir(Reservoir.of(0.0645, 1.1, 0.5)); // decays within a few 100
+    Schedule every = Schedule.every(1);
+    Recording<TimeAverage> before =
+        Recording.of(
+            MetastableFluctuations.observable(), every.startingAt(20),
+            TimeAverage.beforeDecay(20, 60));
+    BubbleSettings given =
+        BubbleSettings.atLevel(0).withSmoothing(1).withHysteresis(0, -0.4).accepting(3, 2);
+    Recording<BubbleCensus> census =
+        Recording.of(RelativePhase.cosine(), every, BubbleDetector.of(given).census(32));
+    Recording<OneBodyMatrix> matrix =
+        Recording.of(ModeAmplitude.ofComponent(0), every, OneBodyMatrix.beforeDecay(20, 60));
+    Recording<TemporalCorrelation> memory =
+        Recording.of(
+            RelativePhase.meanCosine(), every, TemporalCorrelation.realBeforeDecay(4, 20, 60));
+    Recording<PhaseSlips> slips =
+        Recording.of(ComponentPhase.winding(0), every, PhaseSlips::new);
+    Ensemble plan =
+        Ensemble.of(model).startingFrom(InitialState.uniform(1, -1))
+            .integratedBy(OuRk4.ofStep(0.1)).seed(41).until(220)
+            .stopWhen(FirstPassage.upward(RelativePhase.meanCosine(), 0.6, every))
+            .record(before).record(census).record(matrix).record(memory).record(slips);
+    EnsembleResult whole = plan.trajectories(13).lanes(1).runOn(Runnable::run);
+    ExecutorService two = Executors.newFixedThreadPool(2);
+    EnsembleResult parts;
+    try {
+      parts =
+          plan.trajectories(7, 6).lanes(4).runOn(two)
+              .mergedWith(plan.trajectories(0, 7).lanes(2).runOn(two));
+    } finally {
+      two.shutdown();
+    }
+    TimeAverage a = whole.get(before);
+    TimeAverage b = parts.get(before);
+    assertEquals(a.samples(), b.samples());
+    assertTrue(a.samples() > 100, a::toString);
+    Estimates ea = a.estimates();
+    Estimates eb = b.estimates();
+    for (int i = 0; i < a.size(); i++) {
+      assertEquals(a.mean(i), b.mean(i), 0.0);
+      assertEquals(ea.covariance(i, 0), eb.covariance(i, 0), 0.0);
+      assertEquals(a.sampleVariance(i), b.sampleVariance(i), 0.0);
+    }
+    NaturalModes m = whole.get(matrix).naturalModes();
+    NaturalModes n = parts.get(matrix).naturalModes();
+    for (int i = 0; i < m.size(); i++) {
+      assertEquals(m.occupation(i), n.occupation(i), 0.0);
+    }
+    assertTrue(m.condensateFraction() > 0.5 && m.condensateFraction() < 1);
+    CorrelationFunction c = whole.get(memory).connected(0);
+    CorrelationFunction d = parts.get(memory).connected(0);
+    for (int lag = 0; lag < c.size(); lag++) {
+      assertEquals(c.value(lag), d.value(lag), 0.0);
+      assertEquals(c.standardError(lag), d.standardError(lag), 0.0);
+    }
+    assertTrue(c.value(0) > 0 && c.value(4) < c.value(0));
+    assertEquals(whole.get(slips).slips(), parts.get(slips).slips());
+    List<BubbleHistory> x = whole.get(census).histories();
+    List<BubbleHistory> y = parts.get(census).histories();
+    assertEquals(13, x.size());
+    for (int t = 0; t < 13; t++) {
+      assertEquals(x.get(t).events(), y.get(t).events());
+      assertEquals(t, x.get(t).trajectory());
+    }
+
+    int decayed = 0;
+    for (TrajectoryEnd end : whole.ends()) {
+      if (!end.isStopped()) {
+        continue;
+      }
+      decayed++;
+      List<Bubble> born = x.get((int) end.trajectory()).nucleations();
+      assertTrue(!born.isEmpty(), "no bubble before the decay of " + end);
+      assertTrue(born.get(0).birthTime() <= end.time());
+    }
+    assertTrue(decayed >= 5, "decayed " + decayed);
+    BubbleSettings derived = BubbleSettings.from(MetastableFluctuations.of(a, model));
+    assertTrue(derived.growLevel() < derived.seedLevel());
+    assertEquals(1 / Math.sqrt(0.5), MetastableFluctuations.of(a, model).phaseLength(), 1.0);
+  }
+}
