@@ -9,10 +9,18 @@ import spgpe.projector.Amplitudes;
 public final class DivergedException extends RuntimeException {
   private static final long serialVersionUID = 1L;
 
+  /** Index of the trajectory. */
   private final long trajectory;
+
+  /** When it was found. */
   private final double time;
+
+  /** First component that was not finite. */
   private final int component;
+
+  /** Time of the last good state. */
   private final double lastGoodTime;
+
   private final transient Amplitudes lastGoodState;
 
   DivergedException(

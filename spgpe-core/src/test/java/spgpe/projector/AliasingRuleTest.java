@@ -55,8 +55,8 @@ class AliasingRuleTest {
   }
 
   /**
-   * Ten modes each side: 41 points for a cubic and 61 for a quintic force (derived in docs/theory.md).
-   * One point fewer shows in the force, and the needed number leaves rounding only.
+   * Ten modes each side: 41 points for a cubic and 61 for a quintic force (derived, see
+   * docs/theory.md). One point fewer shows in the force, and the needed number leaves rounding only.
    */
   @Test
   void theForceItselfShowsTheThreshold() {

@@ -196,7 +196,8 @@ public abstract class ProjectorContract {
     }
     Amplitudes expected = new Amplitudes(region(), 1, LANES);
     transform.toModes(field, expected);
-    double scale = Math.sqrt(IntStream.range(0, LANES).mapToDouble(l -> expected.atomNumber(0, l)).sum());
+    double number = IntStream.range(0, LANES).mapToDouble(l -> expected.atomNumber(0, l)).sum();
+    double scale = Math.sqrt(number);
     for (int i = 0; i < expected.re(0).length; i++) {
       assertEquals(expected.re(0)[i], found.re(0)[i], 1e-13 * scale);
       assertEquals(expected.im(0)[i], found.im(0)[i], 1e-13 * scale);

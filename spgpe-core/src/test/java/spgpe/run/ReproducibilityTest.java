@@ -121,7 +121,8 @@ class ReproducibilityTest {
     }
   }
 
-  private static final List<Object> REFERENCE = List.copyOf(contents(plan(Setup.SPLIT_COUNTER).run()));
+  private static final List<Object> REFERENCE =
+      List.copyOf(contents(plan(Setup.SPLIT_COUNTER).run()));
 
   @Property(tries = 25)
   void anySplitMergedInAnyOrderGivesTheSameBits(

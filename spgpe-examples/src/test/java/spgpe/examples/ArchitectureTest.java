@@ -243,9 +243,9 @@ class ArchitectureTest {
   }
 
   /**
-   * Static final fields must hold values that do not change. A number, text, date, font, colour, enum
-   * constant, logger or function is one; a collection must be unmodifiable; an object of the project may have final
-   * fields only. Arrays are allowed as constants if no other package sees them and no method that
+   * Static final fields must hold values that do not change. A number, text, date, font, colour,
+   * enum constant, logger or function is one; a collection must be unmodifiable; an object of the
+   * project may have final fields only. Arrays are allowed as constants if no other package sees them and no method that
    * reads one returns an array it has not cloned; that nobody writes to them is seen by comparing
    * their contents before and after a run (next test).
    */
