@@ -129,7 +129,8 @@ class CorrelationTest {
         Fields.refusal(() -> CorrelationLength.hyperbolicCosine(onLine, 0, 10));
     assertTrue(period.contains("needs a ring"), period);
     assertTrue(
-        Fields.refusal(() -> CorrelationLength.exponential(onLine, 1, 1.6)).contains("distances=2"));
+        Fields.refusal(() -> CorrelationLength.exponential(onLine, 1, 1.6))
+            .contains("distances=2"));
     CorrelationFunction poor =
         CorrelationFunction.of(x, Estimates.of(ring, covariance, 22), 20);
     assertTrue(
