@@ -1,7 +1,6 @@
 package spgpe.run;
 
 import java.util.IdentityHashMap;
-import java.util.Map;
 import java.util.function.Function;
 import spgpe.internal.check.Check;
 import spgpe.model.EnergyMeter;
@@ -21,7 +20,7 @@ public final class Snapshot {
   private final ModeTransform transform;
   private final EnergyMeter meter;
   private final Field field;
-  private final Map<Object, Object> scratch = new IdentityHashMap<>();
+  private final IdentityHashMap<Object, Object> scratch = new IdentityHashMap<>();
   private Amplitudes amplitudes;
   private boolean fieldIsCurrent;
   private double time;

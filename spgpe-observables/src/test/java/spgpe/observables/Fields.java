@@ -9,11 +9,11 @@ import spgpe.model.Model;
 import spgpe.projector.Amplitudes;
 import spgpe.projector.CoherentRegion;
 import spgpe.projector.Projector;
+import spgpe.reservoir.RandomStreams;
 import spgpe.reservoir.Reservoir;
 import spgpe.run.InitialState;
 import spgpe.run.Observable;
 import spgpe.run.Snapshot;
-import spgpe.reservoir.RandomStreams;
 
 /** Synthetic fields with known properties. */
 public final class Fields {
@@ -46,7 +46,8 @@ public final class Fields {
 
   /** A pair on a lattice of all modes. */
   public static Model latticePair(int points, double length) {
-    return Model.ofAliasing(ring(points, length), Hamiltonian.pair(1, 0), Reservoir.of(0.05, 1, 0.1));
+    return Model.ofAliasing(
+        ring(points, length), Hamiltonian.pair(1, 0), Reservoir.of(0.05, 1, 0.1));
   }
 
   /** A snapshot of a given field. */

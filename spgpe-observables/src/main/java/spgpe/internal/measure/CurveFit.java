@@ -58,7 +58,7 @@ public final class CurveFit {
   private CurveFit() {}
 
   /**
-   * Fits.
+   * Generalised least squares: weights are the inverse covariance.
    *
    * @param x positions
    * @param y values
@@ -71,11 +71,53 @@ public final class CurveFit {
    */
   public static Result fit(
       double[] x, double[] y, double[][] covariance, double scale, double[] start, Curve curve) {
+    LeastSquaresOptimizer.Optimum best =
+        optimum(x, y, whitening(covariance, Math.sqrt(scale)), start, curve);
+    return result(best, best.getCovariances(SINGULAR * SINGULAR), x.length - start.length);
+  }
+
+  /**
+   * Least squares with the inverse variances as weights; the errors of the parameters take the whole
+   * covariance into account: H J^T C J H with H = (J^T J)^-1, all in units of the single errors.
+   *
+   * @param x positions
+   * @param y values
+   * @param covariance covariance of the values
+   * @param start first guess
+   * @param curve the curve
+   * @return result; the sum of squares is not distributed as chi-square
+   * @throws IllegalArgumentException if a variance is not positive or no minimum is found
+   */
+  public static Result fitWithVariances(
+      double[] x, double[] y, double[][] covariance, double[] start, Curve curve) {
+    int n = x.length;
+    double[][] diagonal = new double[n][n];
+    for (int i = 0; i < n; i++) {
+      diagonal[i][i] = covariance[i][i];
+    }
+    RealMatrix whitening = whitening(diagonal, 1);
+    LeastSquaresOptimizer.Optimum best = optimum(x, y, whitening, start, curve);
+    RealMatrix correlation =
+        whitening.multiply(new Array2DRowRealMatrix(covariance)).multiply(whitening.transpose());
+    RealMatrix gain =
+        best.getCovariances(SINGULAR * SINGULAR).multiply(best.getJacobian().transpose());
+    return result(
+        best, gain.multiply(correlation).multiply(gain.transpose()), n - start.length);
+  }
+
+  private static Result result(
+      LeastSquaresOptimizer.Optimum best, RealMatrix covariance, int degreesOfFreedom) {
+    return new Result(
+        best.getPoint().toArray(), covariance.getData(),
+        best.getResiduals().dotProduct(best.getResiduals()), degreesOfFreedom);
+  }
+
+  private static LeastSquaresOptimizer.Optimum optimum(
+      double[] x, double[] y, RealMatrix whitening, double[] start, Curve curve) {
     Check.argument(
         x.length > start.length,
         "a fit needs more points than parameters: points=%s, parameters=%s",
         x.length, start.length);
-    RealMatrix whitening = whitening(covariance, Math.sqrt(scale));
     ArrayRealVector target = new ArrayRealVector(whitening.operate(y));
     MultivariateJacobianFunction model =
         point -> {
@@ -90,16 +132,12 @@ public final class CurveFit {
               whitening.multiply(new Array2DRowRealMatrix(jacobian, false)));
         };
     try {
-      LeastSquaresOptimizer.Optimum best =
-          new LevenbergMarquardtOptimizer()
-              .optimize(
-                  new LeastSquaresBuilder()
-                      .start(start).target(target).model(model)
-                      .maxEvaluations(MAX_ITERATIONS).maxIterations(MAX_ITERATIONS).build());
-      return new Result(
-          best.getPoint().toArray(), best.getCovariances(SINGULAR * SINGULAR).getData(),
-          best.getResiduals().dotProduct(best.getResiduals()), x.length - start.length);
-    } catch (MathIllegalStateException | org.apache.commons.math3.linear.SingularMatrixException e) {
+      return new LevenbergMarquardtOptimizer()
+          .optimize(
+              new LeastSquaresBuilder()
+                  .start(start).target(target).model(model)
+                  .maxEvaluations(MAX_ITERATIONS).maxIterations(MAX_ITERATIONS).build());
+    } catch (MathIllegalStateException e) {
       throw new IllegalArgumentException(
           "the fit found no minimum: points=" + x.length + ", cause=" + e.getMessage()
               + "; choose a range in which the data follow the curve", e);

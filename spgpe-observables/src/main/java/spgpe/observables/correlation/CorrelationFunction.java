@@ -11,11 +11,14 @@ public final class CorrelationFunction {
   private final double[] distances;
   private final Estimates estimates;
   private final double period;
+  private final double resolution;
 
-  CorrelationFunction(double[] distances, Estimates estimates, double period) {
+  CorrelationFunction(
+      double[] distances, Estimates estimates, double period, double resolution) {
     this.distances = distances;
     this.estimates = estimates;
     this.period = period;
+    this.resolution = resolution;
   }
 
   /**
@@ -39,7 +42,7 @@ public final class CorrelationFunction {
           "distances must be finite and increase: distances[%s]=%s", i, distances[i]);
     }
     Check.argument(period > 0, "period (length of the ring) must be > 0: period=%s", period);
-    return new CorrelationFunction(distances.clone(), estimates, period);
+    return new CorrelationFunction(distances.clone(), estimates, period, 0);
   }
 
   /**
@@ -97,5 +100,15 @@ public final class CorrelationFunction {
    */
   public double period() {
     return period;
+  }
+
+  /**
+   * Distance over which a field of the kept modes can change, L/(2 n_max + 1). Points of a finer grid
+   * are interpolations of each other: their covariance is nearly singular, and fits leave them out.
+   *
+   * @return resolution; 0 if every distance counts
+   */
+  public double resolution() {
+    return resolution;
   }
 }

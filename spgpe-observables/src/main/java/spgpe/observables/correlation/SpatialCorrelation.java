@@ -323,8 +323,9 @@ public final class SpatialCorrelation implements Observable {
         "the average must be of this correlation: correlation=\"%s\", numbers=%s, numbers of the"
             + " average=%s", name, size(model), average.size());
     Estimates estimates = average.derivedVector(function);
-    return new CorrelationFunction(
-        distances(model), estimates, model.region().grid().axis(0).length());
+    double length = model.region().grid().axis(0).length();
+    double resolution = length / (2 * model.region().largestMode(0) + 1);
+    return new CorrelationFunction(distances(model), estimates, length, resolution);
   }
 
   @Override

@@ -217,6 +217,6 @@ public final class TemporalCorrelation implements Accumulator<TemporalCorrelatio
     for (int lag = 0; lag <= lags; lag++) {
       tau[lag] = lag * spacing;
     }
-    return new CorrelationFunction(tau, estimates, Double.POSITIVE_INFINITY);
+    return new CorrelationFunction(tau, estimates, Double.POSITIVE_INFINITY, 0);
   }
 }

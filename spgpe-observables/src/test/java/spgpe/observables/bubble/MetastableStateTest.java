@@ -35,9 +35,9 @@ import spgpe.run.TrajectoryEnd;
 
 class MetastableStateTest {
   /**
-   * Gaussian phase about pi, m = 0.7, L = 40: c(r) from the mode sum, then &lt;cos&gt; = -exp(-v/2),
-   * &lt;cos cos'&gt; = exp(-v) cosh c, &lt;sin sin'&gt; = exp(-v) sinh c. Fixed seed, 4 standard errors:
-   * false alarm 6e-5 for each of 3 values; the errors bound what is seen (0.1 %, 5 %, 2 %).
+   * Gaussian phase about pi, m = 0.7, L = 40: c(r) from the mode sum, then the mean cosine is
+   * -exp(-v/2), the correlations are exp(-v) cosh c and exp(-v) sinh c. Fixed seed, 4 standard
+   * errors: false alarm 6e-5 for each of 3 values; the errors bound what is seen (0.1 %, 5 %, 2 %).
    */
   @Test
   void fluctuationsOfAGaussianPhase() {
@@ -131,7 +131,8 @@ class MetastableStateTest {
   @Test
   void decayRunRecordsEverythingBitIdentically() {
     Model model =
-        Fields.pair(16, 32).withReservoir(Reservoir.of(0.0645, 1.1, 0.5)); // decays within a few 100
+        Fields.pair(16, 32)
+            .withReservoir(Reservoir.of(0.0645, 1.1, 0.5)); // decays within a few 100
     Schedule every = Schedule.every(1);
     Recording<TimeAverage> before =
         Recording.of(

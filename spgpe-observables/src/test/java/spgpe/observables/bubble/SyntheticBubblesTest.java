@@ -11,7 +11,7 @@ import spgpe.run.TimeSeries;
 import spgpe.run.TrajectoryEnd;
 
 /**
- * Two bubbles on a ring, phi = pi prod (1 + tanh((d - r)/w))/2 with r = sqrt(R0^2 + v^2 (t - t0)^2):
+ * Two bubbles on a ring, phi = pi prod (1 + tanh((d - r)/w))/2, r = sqrt(R0^2 + v^2 (t - t0)^2):
  * (x0, t0, v, R0) = (12, 5, 0.8, 2) and (57, 14, 0.8, 2), L = 60, w = 0.8, dx = dt = 0.25. Expected
  * numbers derived, see docs/observables.md.
  */
@@ -151,7 +151,8 @@ class SyntheticBubblesTest {
     for (long seed = 1; seed <= 4; seed++) {
       double[][] noisy = frames(0.5, seed);
       raw +=
-          BubbleDetector.of(BubbleSettings.atLevel(0)).find(times(), noisy, LENGTH).bubbles().size();
+          BubbleDetector.of(BubbleSettings.atLevel(0))
+              .find(times(), noisy, LENGTH).bubbles().size();
       BubbleSettings careful =
           BubbleSettings.atLevel(0).withSmoothing(0.75).withHysteresis(0, -0.2).accepting(2, 1);
       List<Bubble> born = BubbleDetector.of(careful).find(times(), noisy, LENGTH).nucleations();

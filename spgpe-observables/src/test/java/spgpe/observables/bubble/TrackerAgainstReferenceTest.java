@@ -14,7 +14,7 @@ import org.junit.jupiter.api.Test;
 class TrackerAgainstReferenceTest {
   private static final double LENGTH = 24;
 
-  /** A sum of a few waves with slowly changing amplitudes: regions are born, merge, split, vanish. */
+  /** A sum of waves with slowly changing amplitudes: regions are born, merge, split, vanish. */
   private static double[][] randomFrames(long seed, int frames, int points) {
     Random random = new Random(seed);
     int waves = 6;

@@ -117,7 +117,9 @@ class CorrelationTest {
     assertEquals(3, fit.amplitude().value(), 1e-7);
     assertEquals(0, fit.chiSquare(), 1e-8);
     assertEquals(20, fit.points());
-    CorrelationLength plain = CorrelationLength.hyperbolicCosineIgnoringCovariance(onRing, 0, 10);
+    CorrelationLength plain =
+        CorrelationLength.hyperbolicCosine(
+            onRing, 0, 10, CorrelationLength.Weighting.COVARIANCE);
     assertEquals(2.5, plain.length().value(), 1e-7);
     CorrelationFunction onLine =
         CorrelationFunction.of(
@@ -127,11 +129,15 @@ class CorrelationTest {
         Fields.refusal(() -> CorrelationLength.hyperbolicCosine(onLine, 0, 10));
     assertTrue(period.contains("needs a ring"), period);
     assertTrue(
-        Fields.refusal(() -> CorrelationLength.exponential(onLine, 1, 1.6)).contains("distances=2"));
+        Fields.refusal(() -> CorrelationLength.exponential(onLine, 1, 1.6))
+            .contains("distances=2"));
     CorrelationFunction poor =
         CorrelationFunction.of(x, Estimates.of(ring, covariance, 22), 20);
     assertTrue(
-        Fields.refusal(() -> CorrelationLength.hyperbolicCosine(poor, 0, 10))
+        Fields.refusal(
+                () ->
+                    CorrelationLength.hyperbolicCosine(
+                        poor, 0, 10, CorrelationLength.Weighting.COVARIANCE))
             .contains("trajectories=22"));
   }
 
@@ -139,8 +145,7 @@ class CorrelationTest {
   void errorOfTheFitIsRight() {
     // 400 synthetic data sets with correlated errors; the scatter of the length must agree with the
     // error quoted. Ratio of variances has relative standard deviation sqrt(2/399) = 0.07: 4 sigma
-    // are 0.28, false-alarm probability 6e-5; it sees an error wrong by 15 %, as from ignoring the
-    // covariance (checked: ratio far off).
+    // are 0.28, false-alarm probability 6e-5; it sees an error wrong by a quarter.
     double[] x = new double[8];
     double[] exact = new double[8];
     double[][] root = new double[8][8];
@@ -160,28 +165,32 @@ class CorrelationTest {
       }
     }
     Random random = new Random(3);
-    double sum = 0;
-    double quoted = 0;
-    double chi = 0;
-    for (int run = 0; run < 400; run++) {
-      double[] y = exact.clone();
-      for (int m = 0; m < 8; m++) {
-        double z = random.nextGaussian();
-        for (int i = 0; i < 8; i++) {
-          y[i] += root[i][m] * z;
+    for (CorrelationLength.Weighting weighting : CorrelationLength.Weighting.values()) {
+      double sum = 0;
+      double quoted = 0;
+      double chi = 0;
+      for (int run = 0; run < 400; run++) {
+        double[] y = exact.clone();
+        for (int m = 0; m < 8; m++) {
+          double z = random.nextGaussian();
+          for (int i = 0; i < 8; i++) {
+            y[i] += root[i][m] * z;
+          }
         }
+        CorrelationLength fit =
+            CorrelationLength.exponential(
+                CorrelationFunction.of(
+                    x, Estimates.of(y, covariance, 1_000_000), Double.POSITIVE_INFINITY),
+                0, 3, weighting);
+        sum += Math.pow(fit.length().value() - 1, 2) / 400;
+        quoted += Math.pow(fit.length().standardError(), 2) / 400;
+        chi += fit.chiSquare() / 400;
       }
-      CorrelationLength fit =
-          CorrelationLength.exponential(
-              CorrelationFunction.of(
-                  x, Estimates.of(y, covariance, 1_000_000), Double.POSITIVE_INFINITY),
-              0, 3);
-      sum += Math.pow(fit.length().value() - 1, 2) / 400;
-      quoted += Math.pow(fit.length().standardError(), 2) / 400;
-      chi += fit.chiSquare() / 400;
+      assertEquals(1, sum / quoted, 0.28, weighting.name());
+      if (weighting == CorrelationLength.Weighting.COVARIANCE) {
+        assertEquals(6, chi, 4 * Math.sqrt(12.0 / 400)); // mean of chi-square with 6 degrees
+      }
     }
-    assertEquals(1, sum / quoted, 0.28);
-    assertEquals(6, chi, 4 * Math.sqrt(12.0 / 400)); // mean of chi-square with 6 degrees
   }
 
   @Test

@@ -133,10 +133,14 @@ class GaussianFieldTest {
 
     // 1/m = 1.428571; the fit sees a wrong length (for example 1/(2m)) at once. Below x = 1 the
     // cutoff shows.
-    CorrelationLength fit = CorrelationLength.hyperbolicCosine(c, 1.2, 6);
+    CorrelationLength fit =
+        CorrelationLength.hyperbolicCosine(c, 1.2, 6, CorrelationLength.Weighting.COVARIANCE);
     assertWithin4(1 / 0.7, fit.length().value(), fit.length().standardError(), 0.04);
     // chi-square of 14 degrees of freedom beyond 36.1 has probability 1e-3
     assertEquals(14, fit.degreesOfFreedom());
+    CorrelationLength robust = CorrelationLength.hyperbolicCosine(c, 1.2, 6);
+    assertWithin4(1 / 0.7, robust.length().value(), robust.length().standardError(), 0.06);
+    assertTrue(robust.length().standardError() >= fit.length().standardError());
     assertTrue(fit.chiSquare() < 36.1 && fit.chiSquare() > 2, "chi2 " + fit.chiSquare());
   }
 }
