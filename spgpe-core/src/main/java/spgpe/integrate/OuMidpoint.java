@@ -134,23 +134,36 @@ public final class OuMidpoint implements Integrator {
       java.util.Arrays.fill(done, false);
       int iterations = 0;
       do {
-        Check.state(
-            iterations < MAX_ITERATIONS,
-            "midpoint iteration must converge within %s iterations: time=%s, step=%s,"
-                + " tolerance=%s; use a smaller step (g n dt/2 must stay well below 1)",
-            MAX_ITERATIONS, time, dt, tolerance);
+        requireConvergence(iterations < MAX_ITERATIONS, time);
         forces.localForce(time + dt / 2, middle, force);
         stage.add(start, dt / 2, force, next);
         iterations++;
-      } while (!takeNext());
+      } while (!takeNext(time));
       for (int c = 0; c < state.components(); c++) {
         reflect(middle.re(c), start.re(c), state.re(c));
         reflect(middle.im(c), start.im(c), state.im(c));
       }
     }
 
+    private void requireConvergence(boolean condition, double time) {
+      Check.state(
+          condition,
+          "midpoint iteration must converge within %s iterations: time=%s, step=%s,"
+              + " tolerance=%s; use a smaller step (g n dt/2 must stay well below 1)",
+          MAX_ITERATIONS, time, dt, tolerance);
+    }
+
+    private boolean isFinite(int lane) {
+      for (int c = 0; c < start.components(); c++) {
+        if (!(start.atomNumber(c, lane) < Double.POSITIVE_INFINITY)) {
+          return false;
+        }
+      }
+      return true;
+    }
+
     /** Takes over the lanes that have not converged; true if all have. */
-    private boolean takeNext() {
+    private boolean takeNext(double time) {
       java.util.Arrays.fill(changes, 0);
       java.util.Arrays.fill(sizes, 0);
       for (int c = 0; c < state.components(); c++) {
@@ -159,8 +172,12 @@ public final class OuMidpoint implements Integrator {
       }
       boolean all = true;
       for (int lane = 0; lane < done.length; lane++) {
-        // a lane that is NaN or infinite will not get better: left to the guard of the run
-        done[lane] |= changes[lane] <= tolerance * sizes[lane] || !(changes[lane] < 1e300);
+        if (!done[lane] && !(changes[lane] < 1e150)) {
+          // a lane that was not finite before is left to the guard of the run
+          requireConvergence(!isFinite(lane), time);
+          done[lane] = true;
+        }
+        done[lane] |= changes[lane] <= tolerance * sizes[lane];
         all &= done[lane];
       }
       return all;
