@@ -1,31 +1,14 @@
 package spgpe.integrate;
 
-import spgpe.internal.check.Check;
 import spgpe.model.Model;
 import spgpe.projector.Amplitudes;
 
-/**
- * Noise in two independent kicks of half a step, one before and one after a deterministic step:
- *
- * <pre>a_jk += sqrt(gamma_j T dt/2) (z + i z')   twice in each step.</pre>
- *
- * <p>Two neighbouring kicks are drawn as one. Independence matters: one normal split into equal
- * halves, or noise held constant over the stages of a step, cools the modes of high energy and has
- * weak order 1 (docs/integrators.md). Immutable and thread-safe.
- */
-public final class HalfKicks {
+/** The kicks of {@link KickedStepper}; two neighbouring half kicks are drawn as one. Immutable. */
+final class HalfKicks {
   private final double[] whole;
   private final boolean noisy;
 
-  /**
-   * Makes the kicks of a model.
-   *
-   * @param model the model
-   * @param dt time step, finite and positive
-   * @throws IllegalArgumentException if the step is out of range
-   */
-  public HalfKicks(Model model, double dt) {
-    Check.positive(dt, "time step");
+  HalfKicks(Model model, double dt) {
     this.whole = new double[model.components()];
     boolean any = false;
     for (int c = 0; c < whole.length; c++) {
@@ -35,36 +18,19 @@ public final class HalfKicks {
     this.noisy = any;
   }
 
-  /**
-   * Whether there is any noise.
-   *
-   * @return true if any gamma_j T &gt; 0
-   */
-  public boolean isNoisy() {
+  boolean isNoisy() {
     return noisy;
   }
 
-  /**
-   * Kicks a state before a deterministic step, see {@link AbstractStepper#step}.
-   *
-   * @param half whether to take one half kick instead of two neighbouring ones
-   * @param normals standard normals
-   * @param state changed
-   */
-  public void kick(boolean half, Amplitudes normals, Amplitudes state) {
+  /** Two neighbouring half kicks, or a single one. */
+  void kick(boolean half, Amplitudes normals, Amplitudes state) {
     if (noisy) {
       add(half ? Math.sqrt(0.5) : 1, normals, state);
     }
   }
 
-  /**
-   * Takes the half of a kick that an observer must see, see {@link AbstractStepper#toSymmetricPoint}.
-   *
-   * @param normals standard normals of the two neighbouring half kicks together
-   * @param rest further standard normals
-   * @param target changed
-   */
-  public void halfOfKick(Amplitudes normals, Amplitudes rest, Amplitudes target) {
+  /** The first of two neighbouring half kicks, given the normals of both together. */
+  void halfOfKick(Amplitudes normals, Amplitudes rest, Amplitudes target) {
     if (noisy) {
       // (z + z')/2 has variance 1/2 and covariance 1/2 with z
       add(0.5, normals, target);

@@ -64,10 +64,8 @@ public final class HeunIp implements Integrator {
     return "HeunIp: Heun in the interaction picture with independent half kicks, step=" + step;
   }
 
-  private static final class Worker extends AbstractStepper {
+  private static final class Worker extends KickedStepper {
     private final ModeTable flow;
-    private final StageSum stage;
-    private final HalfKicks kicks;
     private final Amplitudes force;
     private final Amplitudes increment;
     private final Amplitudes probe;
@@ -75,34 +73,20 @@ public final class HeunIp implements Integrator {
     Worker(Model model, NoiseGenerator noise, int lanes, double dt) {
       super(model, noise, lanes, dt);
       this.flow = LinearFlow.over(dt, model, lanes);
-      this.stage = new StageSum(model);
-      this.kicks = new HalfKicks(model, dt);
       this.force = new Amplitudes(model.region(), model.components(), lanes);
       this.increment = new Amplitudes(model.region(), model.components(), lanes);
       this.probe = new Amplitudes(model.region(), model.components(), lanes);
     }
 
     @Override
-    protected boolean isNoisy() {
-      return kicks.isNoisy();
-    }
-
-    @Override
-    protected void step(boolean fromSymmetricPoint, Amplitudes normals, double time) {
-      kicks.kick(fromSymmetricPoint, normals, state);
+    protected void deterministicStep(double time) {
       forces.localForce(time, state, force);
-      stage.add(state, dt / 2, force, increment);
-      stage.add(state, dt, force, probe);
+      addIncrement(state, dt / 2, force, increment);
+      addIncrement(state, dt, force, probe);
       flow.multiply(increment, state); // E a + k1/2
       flow.multiply(probe, increment); // E a + k1
       forces.localForce(time + dt, increment, force);
-      stage.add(state, dt / 2, force, state);
-    }
-
-    @Override
-    protected void toSymmetricPoint(Amplitudes normals, Amplitudes rest, Amplitudes target) {
-      target.set(state);
-      kicks.halfOfKick(normals, rest, target);
+      addIncrement(state, dt / 2, force, state);
     }
   }
 }

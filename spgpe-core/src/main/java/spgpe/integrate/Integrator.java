@@ -6,7 +6,7 @@ import spgpe.reservoir.NoiseGenerator;
 /**
  * A numerical scheme with its settings: an immutable recipe that makes {@link Stepper}s.
  *
- * <p>Implementations are immutable and thread-safe. For an own scheme see {@link AbstractStepper}.
+ * <p>Implementations are immutable and thread-safe. For an own scheme see {@link KickedStepper}.
  */
 public interface Integrator {
   /**

@@ -109,33 +109,19 @@ public final class Rk4Ip implements Integrator {
     return step;
   }
 
-  private static final class Worker extends AbstractStepper {
+  private static final class Worker extends KickedStepper {
     private final ModeTable halfFlow;
     private final LawsonRk4 scheme;
-    private final HalfKicks kicks;
 
     Worker(Model model, NoiseGenerator noise, int lanes, double dt) {
       super(model, noise, lanes, dt);
       this.halfFlow = LinearFlow.over(dt / 2, model, lanes);
       this.scheme = new LawsonRk4(model, forces, lanes);
-      this.kicks = new HalfKicks(model, dt);
     }
 
     @Override
-    protected boolean isNoisy() {
-      return kicks.isNoisy();
-    }
-
-    @Override
-    protected void step(boolean fromSymmetricPoint, Amplitudes normals, double time) {
-      kicks.kick(fromSymmetricPoint, normals, state);
+    protected void deterministicStep(double time) {
       scheme.step(time, dt, halfFlow, state);
-    }
-
-    @Override
-    protected void toSymmetricPoint(Amplitudes normals, Amplitudes rest, Amplitudes target) {
-      target.set(state);
-      kicks.halfOfKick(normals, rest, target);
     }
   }
 }

@@ -15,6 +15,7 @@ import spgpe.hamiltonian.Hamiltonian;
 import spgpe.integrate.HeunIp;
 import spgpe.integrate.Integrator;
 import spgpe.integrate.LatticeStrang;
+import spgpe.integrate.OneKick;
 import spgpe.integrate.OuMidpoint;
 import spgpe.integrate.OuRk4;
 import spgpe.integrate.Rk4Ip;

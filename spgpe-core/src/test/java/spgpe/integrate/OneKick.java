@@ -1,18 +1,16 @@
-package spgpe.integrate.bench;
+package spgpe.integrate;
 
-import spgpe.integrate.AbstractStepper;
-import spgpe.integrate.HalfKicks;
-import spgpe.integrate.Integrator;
-import spgpe.integrate.Rk4Ip;
-import spgpe.integrate.SchemeFacts;
-import spgpe.integrate.Stepper;
 import spgpe.model.Model;
 import spgpe.projector.Amplitudes;
 import spgpe.reservoir.NoiseGenerator;
 import spgpe.reservoir.RandomStreams;
 
-/** A bad scheme for the tests: all of the noise in one kick before RK4 in the interaction picture. */
-record OneKick(double step) implements Integrator {
+/**
+ * A bad scheme for the tests: all of the noise in one kick before RK4 in the interaction picture.
+ *
+ * @param step time step
+ */
+public record OneKick(double step) implements Integrator {
   @Override
   public OneKick withStep(double newStep) {
     return new OneKick(newStep);
