@@ -42,7 +42,7 @@ public abstract class AbstractStepper implements Stepper {
    * @throws IllegalArgumentException if a value is out of range
    */
   protected AbstractStepper(Model model, NoiseGenerator noise, int lanes, double dt) {
-    this.forces = model.evaluator(lanes);
+    this.forces = Check.notNull(model, "model").evaluator(lanes);
     this.noise = Check.notNull(noise, "noise");
     this.dt = Check.positive(dt, "time step");
     this.state = new Amplitudes(model.region(), model.components(), lanes);
@@ -53,7 +53,7 @@ public abstract class AbstractStepper implements Stepper {
   @Override
   public final void start(Amplitudes initial, long firstStep) {
     Check.argument(firstStep >= 0, "first step must be >= 0: firstStep=%s", firstStep);
-    state.set(initial);
+    state.set(Check.notNull(initial, "state"));
     step = firstStep;
     started = true;
     atSymmetricPoint = true;
@@ -62,7 +62,9 @@ public abstract class AbstractStepper implements Stepper {
 
   @Override
   public final void advance() {
-    Check.state(started, "start(state, firstStep) must be called before advance()");
+    if (!started) { // allocates nothing in a step
+      throw new IllegalStateException("start(state, firstStep) must be called before advance()");
+    }
     if (isNoisy()) {
       noise.fill(step, atSymmetricPoint ? NoiseUse.START : NoiseUse.WHOLE, normals);
     }
@@ -73,7 +75,10 @@ public abstract class AbstractStepper implements Stepper {
 
   @Override
   public final void observe(Amplitudes target) {
-    Check.state(started, "start(state, firstStep) must be called before observe(target)");
+    if (!started) {
+      throw new IllegalStateException("start(state, firstStep) must be called before observe");
+    }
+    Check.notNull(target, "target");
     if (atSymmetricPoint) {
       target.set(state);
       return;
@@ -103,6 +108,7 @@ public abstract class AbstractStepper implements Stepper {
 
   @Override
   public final void restore(StepperState saved) {
+    Check.notNull(saved, "saved state");
     start(saved.inner(), saved.stepNumber());
     atSymmetricPoint = saved.isAtSymmetricPoint();
     setRefinement(saved.refinement());

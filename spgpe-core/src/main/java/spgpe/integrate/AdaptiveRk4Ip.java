@@ -69,6 +69,8 @@ public final class AdaptiveRk4Ip implements Integrator {
 
   @Override
   public Stepper bind(Model model, NoiseGenerator noise, int lanes) {
+    Check.notNull(model, "model");
+    Check.notNull(noise, "noise");
     Check.argument(
         lanes == 1,
         "AdaptiveRk4Ip advances one lane, since lanes must not share a step: lanes=%s", lanes);
@@ -135,11 +137,12 @@ public final class AdaptiveRk4Ip implements Integrator {
             error *= 16;
           }
         } else {
-          Check.state(
-              refinement < MAX_REFINEMENT && Double.isFinite(error),
-              "adaptive step must not shrink below interval/2^%s: time=%s, interval=%s, relative"
-                  + " error=%s, tolerance=%s; the state may not be finite, or use a larger tolerance",
-              MAX_REFINEMENT, now, dt, error, tolerance);
+          if (refinement == MAX_REFINEMENT || !Double.isFinite(error)) {
+            throw new IllegalStateException(
+                "adaptive step must not shrink below interval/2^" + MAX_REFINEMENT + ": time=" + now
+                    + ", interval=" + dt + ", relative error=" + error + ", tolerance=" + tolerance
+                    + "; the state may not be finite, or use a larger tolerance");
+          }
           state.set(before);
           refinement++;
           position *= 2;

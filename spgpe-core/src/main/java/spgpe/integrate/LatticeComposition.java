@@ -93,11 +93,13 @@ public final class LatticeComposition implements Integrator {
 
   @Override
   public double largestStableStep(Model model) {
-    return StepLimit.ofExponentialScheme(model);
+    return StepLimit.ofExponentialScheme(Check.notNull(model, "model"));
   }
 
   @Override
   public Stepper bind(Model model, NoiseGenerator noise, int lanes) {
+    Check.notNull(model, "model");
+    Check.notNull(noise, "noise");
     LocalFlow.require(model, name + " composition");
     for (int c = 0; c < model.components(); c++) {
       double gamma = model.reservoir().damping(c);

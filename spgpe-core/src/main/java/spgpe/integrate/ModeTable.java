@@ -1,22 +1,22 @@
 package spgpe.integrate;
 
-import org.jspecify.annotations.Nullable;
 import spgpe.internal.linear.ComplexMatrix;
 import spgpe.projector.Amplitudes;
 
 /**
  * A complex matrix over the components for each mode, repeated for each lane, so that applying it is
- * a flat loop. Immutable; elements that vanish for every mode take no time.
+ * a flat loop. Immutable; elements (or imaginary parts) that vanish for every mode are kept as empty
+ * arrays and take no time.
  */
 final class ModeTable {
   private final int components;
-  private final double @Nullable [][] re;
-  private final double @Nullable [][] im;
+  private final double[][] re;
+  private final double[][] im;
 
   private ModeTable(int components) {
     this.components = components;
-    this.re = new double[components * components][];
-    this.im = new double[components * components][];
+    this.re = new double[components * components][0];
+    this.im = new double[components * components][0];
   }
 
   static ModeTable of(ComplexMatrix[] matrices, int lanes) {
@@ -60,9 +60,9 @@ final class ModeTable {
       for (int j = 0; j < components; j++) {
         double[] real = re[i * components + j];
         double[] imaginary = im[i * components + j];
-        if (real != null && imaginary != null) {
+        if (imaginary.length > 0) {
           addComplex(real, imaginary, in.re(j), in.im(j), out.re(i), out.im(i));
-        } else if (real != null) {
+        } else if (real.length > 0) {
           addReal(real, in.re(j), out.re(i));
           addReal(real, in.im(j), out.im(i));
         }

@@ -71,11 +71,13 @@ public final class OuMidpoint implements Integrator {
 
   @Override
   public double largestStableStep(Model model) {
-    return StepLimit.ofExponentialScheme(model);
+    return StepLimit.ofExponentialScheme(Check.notNull(model, "model"));
   }
 
   @Override
   public Stepper bind(Model model, NoiseGenerator noise, int lanes) {
+    Check.notNull(model, "model");
+    Check.notNull(noise, "noise");
     StepLimit.require(this, model);
     return new Worker(model, noise, lanes, step, tolerance);
   }
@@ -146,11 +148,12 @@ public final class OuMidpoint implements Integrator {
     }
 
     private void requireConvergence(boolean condition, double time) {
-      Check.state(
-          condition,
-          "midpoint iteration must converge within %s iterations: time=%s, step=%s,"
-              + " tolerance=%s; use a smaller step (g n dt/2 must stay well below 1)",
-          MAX_ITERATIONS, time, dt, tolerance);
+      if (!condition) {
+        throw new IllegalStateException(
+            "midpoint iteration must converge within " + MAX_ITERATIONS + " iterations: time=" + time
+                + ", step=" + dt + ", tolerance=" + tolerance
+                + "; use a smaller step (g n dt/2 must stay well below 1)");
+      }
     }
 
     private boolean isFinite(int lane) {

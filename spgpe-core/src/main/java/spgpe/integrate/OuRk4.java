@@ -53,11 +53,13 @@ public final class OuRk4 implements Integrator {
 
   @Override
   public double largestStableStep(Model model) {
-    return StepLimit.ofExponentialScheme(model);
+    return StepLimit.ofExponentialScheme(Check.notNull(model, "model"));
   }
 
   @Override
   public Stepper bind(Model model, NoiseGenerator noise, int lanes) {
+    Check.notNull(model, "model");
+    Check.notNull(noise, "noise");
     StepLimit.require(this, model);
     return new Worker(model, noise, lanes, step);
   }

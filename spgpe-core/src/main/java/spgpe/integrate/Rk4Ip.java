@@ -53,11 +53,13 @@ public final class Rk4Ip implements Integrator {
 
   @Override
   public double largestStableStep(Model model) {
-    return StepLimit.ofExponentialScheme(model);
+    return StepLimit.ofExponentialScheme(Check.notNull(model, "model"));
   }
 
   @Override
   public Stepper bind(Model model, NoiseGenerator noise, int lanes) {
+    Check.notNull(model, "model");
+    Check.notNull(noise, "noise");
     StepLimit.require(this, model);
     return new Worker(model, noise, lanes, step);
   }
@@ -83,6 +85,8 @@ public final class Rk4Ip implements Integrator {
    *     or the shape does not fit
    */
   public static double suggestStep(Model model, Amplitudes state, double time, double tolerance) {
+    Check.notNull(model, "model");
+    Check.notNull(state, "state");
     Check.argument(
         tolerance >= 1e-14 && tolerance <= 0.1,
         "tolerance of a step must lie in 1e-14..0.1: tolerance=%s", tolerance);

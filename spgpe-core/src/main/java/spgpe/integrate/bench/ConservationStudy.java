@@ -51,6 +51,9 @@ public final class ConservationStudy {
    * @throws IllegalArgumentException if the model has damping or a value is out of range
    */
   public static Drift measure(Model model, Integrator scheme, Amplitudes initial, int steps) {
+    Check.notNull(model, "model");
+    Check.notNull(scheme, "integrator");
+    Check.notNull(initial, "initial state");
     Check.argument(steps >= 1, "number of steps must be >= 1: steps=%s", steps);
     for (int c = 0; c < model.components(); c++) {
       Check.argument(

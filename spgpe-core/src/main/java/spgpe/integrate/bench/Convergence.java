@@ -20,7 +20,13 @@ public record Convergence(String quantity, String scheme, List<Row> rows) {
    */
   public record Row(double step, double difference, double standardError) {}
 
-  /** Copies the list. */
+  /**
+   * Copies the list.
+   *
+   * @param quantity what was compared
+   * @param scheme the scheme
+   * @param rows longest step first
+   */
   public Convergence {
     rows = List.copyOf(rows);
   }

@@ -39,6 +39,7 @@ public final class EquilibriumBias {
    * @throws IllegalArgumentException if a value is out of range or no energy is given
    */
   public static EquilibriumBias of(double meanField, double damping, double... energies) {
+    Check.notNull(energies, "energies");
     Check.argument(energies.length > 0, "at least one energy must be given");
     Check.positive(damping, "damping gamma");
     for (double energy : energies) {
@@ -77,6 +78,7 @@ public final class EquilibriumBias {
    * @throws IllegalArgumentException if the scheme refuses the step
    */
   public Worst worst(Integrator integrator) {
+    Check.notNull(integrator, "integrator");
     double bias = 0;
     double energy = energies[0];
     for (double e : energies) {
@@ -101,6 +103,7 @@ public final class EquilibriumBias {
    *     good enough
    */
   public double largestStep(Integrator scheme, double tolerance, double upperLimit) {
+    Check.notNull(scheme, "integrator");
     Check.argument(
         tolerance >= 1e-8 && tolerance <= 0.5,
         "tolerance of the occupation bias must lie in 1e-8..0.5: tolerance=%s", tolerance);

@@ -73,6 +73,7 @@ public final class LinearisedMode {
    * @throws IllegalArgumentException if the damping is zero, or if the scheme refuses the step
    */
   public VarianceRatios equilibrium(Integrator integrator) {
+    Check.notNull(integrator, "integrator");
     Check.argument(damping > 0, "without damping there is no stationary law: gamma=%s", damping);
     Probe probe = new Probe(integrator, 1);
     double[][] m = probe.stepMatrix();
@@ -94,7 +95,7 @@ public final class LinearisedMode {
    * @throws IllegalArgumentException if the scheme refuses the step
    */
   public double growthPerStep(Integrator integrator) {
-    return spectralRadius(new Probe(integrator, 0).stepMatrix());
+    return spectralRadius(new Probe(Check.notNull(integrator, "integrator"), 0).stepMatrix());
   }
 
   /** A stepper of the scheme, asked for its responses. */

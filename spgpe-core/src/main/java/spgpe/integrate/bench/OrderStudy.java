@@ -39,7 +39,8 @@ public final class OrderStudy {
    * @throws IllegalArgumentException if the shape does not fit or the time is out of range
    */
   public static OrderStudy of(Model model, Amplitudes initial, double time) {
-    initial.requireShape(model.region(), model.components(), 1);
+    Check.notNull(model, "model");
+    Check.notNull(initial, "initial state").requireShape(model.region(), model.components(), 1);
     return new OrderStudy(model, initial.copy(), Check.positive(time, "time"));
   }
 
@@ -53,6 +54,7 @@ public final class OrderStudy {
    * @throws IllegalArgumentException if a number is out of range or the model has noise
    */
   public Convergence deterministic(Integrator scheme, int fewestSteps, int levels) {
+    Check.notNull(scheme, "integrator");
     checkLevels(fewestSteps, levels);
     Check.argument(!hasNoise(), "the deterministic order needs a model without noise: T=%s",
         model.reservoir().temperature());
@@ -110,6 +112,7 @@ public final class OrderStudy {
   public Convergence weak(
       Integrator scheme, int fewestSteps, int levels, int paths, long seed,
       ToDoubleFunction<Amplitudes> functional) {
+    Check.notNull(functional, "functional");
     List<Convergence.Row> rows = new ArrayList<>();
     Amplitudes one = initial.copy();
     double[][] moments =
@@ -136,6 +139,7 @@ public final class OrderStudy {
   /** Mean and standard error of a comparison for each level. */
   private double[][] compare(
       Integrator scheme, int fewestSteps, int levels, int paths, long seed, Comparison comparison) {
+    Check.notNull(scheme, "integrator");
     checkLevels(fewestSteps, levels);
     Check.argument(paths >= 2, "number of paths must be >= 2: paths=%s", paths);
     Check.argument(

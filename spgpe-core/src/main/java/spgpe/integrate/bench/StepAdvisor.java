@@ -57,7 +57,19 @@ public final class StepAdvisor {
   public record Advice(
       double step, Verdict verdict, double bias, double worstEnergy, double stabilityLimit,
       double rk4CoolingLimit, double evaluationsPerTime, List<String> warnings) {
-    /** Copies the list. */
+    /**
+     * Copies the list.
+     *
+     * @param step time step
+     * @param verdict whether it is fit
+     * @param bias worst relative occupation bias; infinite if unstable
+     * @param worstEnergy kinetic energy of the worst mode
+     * @param stabilityLimit pi/(eps_max + 2 g n)
+     * @param rk4CoolingLimit step at which the numerical damping of RK4 in the interaction picture cools
+     *     the highest modes by the tolerance, [72 gamma tol/((g n)^2 eps_max^3)]^(1/5)
+     * @param evaluationsPerTime force evaluations per unit time
+     * @param warnings what else to mind, in words
+     */
     public Advice {
       warnings = List.copyOf(warnings);
     }
@@ -148,6 +160,7 @@ public final class StepAdvisor {
    *     the message says why
    */
   public Advice advise(Integrator scheme) {
+    Check.notNull(scheme, "integrator");
     requireFit(scheme.withStep(stabilityLimit() * 1e-3));
     double step = Double.POSITIVE_INFINITY;
     for (double gamma : dampings()) {
@@ -168,6 +181,7 @@ public final class StepAdvisor {
    * @throws IllegalArgumentException if the scheme refuses the model for a reason other than the step
    */
   public Advice examine(Integrator scheme) {
+    Check.notNull(scheme, "integrator");
     double step = scheme.step();
     double largest = energies[energies.length - 1];
     double smallestGamma = Double.POSITIVE_INFINITY;

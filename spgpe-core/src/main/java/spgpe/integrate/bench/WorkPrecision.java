@@ -22,7 +22,12 @@ public record WorkPrecision(double tolerance, List<Row> rows) {
    */
   public record Row(String scheme, double step, double evaluationsPerTime) {}
 
-  /** Copies the list. */
+  /**
+   * Copies the list.
+   *
+   * @param tolerance largest |occupation bias| allowed
+   * @param rows one for each scheme
+   */
   public WorkPrecision {
     rows = List.copyOf(rows);
   }
@@ -40,6 +45,7 @@ public record WorkPrecision(double tolerance, List<Row> rows) {
   public static WorkPrecision compare(
       EquilibriumBias modes, double tolerance, double longestStep, List<Integrator> schemes) {
     Check.notNull(modes, "modes");
+    Check.notNull(schemes, "schemes");
     List<Row> rows = new ArrayList<>();
     for (Integrator scheme : schemes) {
       double step = modes.largestStep(scheme, tolerance, longestStep);

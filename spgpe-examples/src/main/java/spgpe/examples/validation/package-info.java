@@ -1,4 +1,4 @@
-/** Programs that reproduce the tables of docs/validation.md. */
+/** Runs that compare the library with reference results; each prints a table of its own. */
 @NullMarked
 package spgpe.examples.validation;
 
