@@ -9,12 +9,17 @@ import spgpe.hamiltonian.CoherentCoupling;
 import spgpe.hamiltonian.Hamiltonian;
 import spgpe.integrate.HeunIp;
 import spgpe.integrate.Integrator;
+import spgpe.integrate.LatticeComposition;
 import spgpe.integrate.LatticeStrang;
 import spgpe.integrate.OuMidpoint;
 import spgpe.integrate.OuRk4;
 import spgpe.integrate.Rk4Ip;
+import spgpe.integrate.bench.ConservationStudy;
+import spgpe.integrate.bench.Convergence;
 import spgpe.integrate.bench.EquilibriumBias;
+import spgpe.integrate.bench.OrderStudy;
 import spgpe.model.Model;
+import spgpe.projector.Amplitudes;
 import spgpe.projector.Projector;
 import spgpe.reservoir.Reservoir;
 import spgpe.run.Ensemble;
@@ -25,9 +30,9 @@ import spgpe.run.TimeSeries;
 import spgpe.run.Trajectory;
 
 /**
- * Equilibrium bias of the integrators, as the tables of docs/validation.md.
+ * Orders and equilibrium bias of the integrators, as the tables of docs/validation.md.
  *
- * <p>Without arguments the exact tables of the linearised mode (a minute). With the arguments
+ * <p>Without arguments the orders and the exact tables of the linearised mode (a minute). With the arguments
  * "ensemble TRAJECTORIES TIME" the runs of the whole interacting field too.
  */
 public final class IntegratorTables {
@@ -43,6 +48,7 @@ public final class IntegratorTables {
    * @param args nothing, or "ensemble", number of trajectories, time of each
    */
   public static void main(String[] args) {
+    printOrderTable();
     printLinearTables();
     if (args.length == 3 && args[0].equals("ensemble")) {
       printEnsembleTable(Integer.parseInt(args[1]), Double.parseDouble(args[2]));
@@ -53,6 +59,31 @@ public final class IntegratorTables {
     return List.of(
         OuRk4.ofStep(1), OuMidpoint.ofStep(1), Rk4Ip.ofStep(1), HeunIp.ofStep(1),
         LatticeStrang.ofStep(1));
+  }
+
+  private static void printOrderTable() {
+    System.out.println("Order and drifts without noise from a thermal state, t = 2, dt = 0.01");
+    System.out.println("| scheme | order | error | dN/N | dP | dK/K | evaluations per step |");
+    System.out.println("|---|---|---|---|---|---|---|");
+    for (Integrator scheme :
+        List.of(
+            Rk4Ip.ofStep(0.01), OuRk4.ofStep(0.01), OuMidpoint.ofStep(0.01), HeunIp.ofStep(0.01),
+            LatticeStrang.ofStep(0.01), LatticeComposition.yoshida(0.01))) {
+      Model quiet = model(scheme, 0).withReservoir(Reservoir.none(1));
+      Amplitudes thermal =
+          Trajectory.of(model(scheme, 0.5)).startingFrom(InitialState.uniform(0.95, 0.95))
+              .integratedBy(
+                  scheme.facts().latticeOnly() ? LatticeStrang.ofStep(0.02) : OuRk4.ofStep(0.02))
+              .seed(5, 0).until(20).run().finalState();
+      Convergence order = OrderStudy.of(quiet, thermal, 2).deterministic(scheme, 200, 2);
+      ConservationStudy.Drift drift = ConservationStudy.measure(quiet, scheme, thermal, 200);
+      System.out.printf(
+          Locale.ROOT, "| %s | %.2f | %.1e | %.0e | %.0e | %.0e | %d |%n",
+          scheme.getClass().getSimpleName(), order.order(), order.rows().get(0).difference(),
+          drift.atoms(), drift.momentum(), drift.energy(),
+          scheme.facts().forceEvaluationsPerStep());
+    }
+    System.out.println();
   }
 
   private static void printLinearTables() {
