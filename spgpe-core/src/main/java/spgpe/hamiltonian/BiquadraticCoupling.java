@@ -13,7 +13,7 @@ import spgpe.projector.PointBlock;
  * sin<sup>2</sup>(phi): it raises the barrier between the phases 0 and pi. Derived in docs/theory.md.
  * Immutable and thread-safe.
  */
-public final class BiquadraticCoupling implements LocalTerm {
+public final class BiquadraticCoupling implements ExactFlow {
   private final double kappa;
 
   private BiquadraticCoupling(double kappa) {
@@ -58,6 +58,31 @@ public final class BiquadraticCoupling implements LocalTerm {
       forceIm1[i] -= strength * re2[i];
       forceRe2[i] -= strength * im1[i];
       forceIm2[i] += strength * re1[i];
+    }
+  }
+
+  @Override
+  public Kind flowKind() {
+    return Kind.MIXING;
+  }
+
+  /** S stays; (psi_1, psi_2) turn as a real vector by kappa S duration/2. */
+  @Override
+  public void flow(double time, double duration, PointBlock block) {
+    double[] re1 = block.psiRe(0);
+    double[] im1 = block.psiIm(0);
+    double[] re2 = block.psiRe(1);
+    double[] im2 = block.psiIm(1);
+    for (int i = block.begin(), end = block.end(); i < end; i++) {
+      double angle = kappa * duration * (re1[i] * im2[i] - im1[i] * re2[i]);
+      double c = Math.cos(angle);
+      double s = Math.sin(angle);
+      double re = c * re1[i] - s * re2[i];
+      double im = c * im1[i] - s * im2[i];
+      re2[i] = s * re1[i] + c * re2[i];
+      im2[i] = s * im1[i] + c * im2[i];
+      re1[i] = re;
+      im1[i] = im;
     }
   }
 

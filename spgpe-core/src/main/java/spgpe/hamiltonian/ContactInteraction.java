@@ -10,7 +10,7 @@ import spgpe.projector.PointBlock;
  * |psi_k|<sup>2</sup>, force f_j = (sum over k of g_jk |psi_k|<sup>2</sup>) psi_j. Immutable and
  * thread-safe.
  */
-public final class ContactInteraction implements LocalTerm {
+public final class ContactInteraction implements ExactFlow {
   private final double[][] couplings;
 
   private ContactInteraction(double[][] couplings) {
@@ -107,6 +107,37 @@ public final class ContactInteraction implements LocalTerm {
       double shift = g * (otherRe[i] * otherRe[i] + otherIm[i] * otherIm[i]);
       forceRe[i] += shift * re[i];
       forceIm[i] += shift * im[i];
+    }
+  }
+
+  @Override
+  public Kind flowKind() {
+    for (double[] row : couplings) {
+      for (double g : row) {
+        if (g != couplings[0][0]) {
+          return Kind.COMPONENT_PHASE;
+        }
+      }
+    }
+    return Kind.COMMON_PHASE;
+  }
+
+  /** Densities stay, component j turns by -duration times the sum over k of g_jk n_k. */
+  @Override
+  public void flow(double time, double duration, PointBlock block) {
+    // turning one component leaves its density, on which the others depend, as it is to rounding
+    for (int j = 0; j < couplings.length; j++) {
+      double[] re = block.psiRe(j);
+      double[] im = block.psiIm(j);
+      for (int i = block.begin(), end = block.end(); i < end; i++) {
+        double angle = 0;
+        for (int k = 0; k < couplings.length; k++) {
+          double otherRe = block.psiRe(k)[i];
+          double otherIm = block.psiIm(k)[i];
+          angle -= couplings[j][k] * (otherRe * otherRe + otherIm * otherIm);
+        }
+        PhaseTurn.turn(re, im, i, duration * angle);
+      }
     }
   }
 

@@ -15,7 +15,7 @@ import spgpe.projector.PointBlock;
  * <p>The potential should repeat with the grid and vary slowly on the spacing: harmonics of V beyond
  * N - 2 n_c fold back. Immutable; thread-safe if the function is.
  */
-public final class ExternalPotential implements LocalTerm {
+public final class ExternalPotential implements ExactFlow {
   private static final int ALL = -1;
 
   private final DoubleBinaryOperator potential;
@@ -108,6 +108,23 @@ public final class ExternalPotential implements LocalTerm {
         double v = values[block.pointOf(i)];
         forceRe[i] += v * re[i];
         forceIm[i] += v * im[i];
+      }
+    }
+  }
+
+  @Override
+  public Kind flowKind() {
+    return component == ALL ? Kind.COMMON_PHASE : Kind.COMPONENT_PHASE;
+  }
+
+  /** Turns by -V duration. */
+  @Override
+  public void flow(double time, double duration, PointBlock block) {
+    double[] values = table(block);
+    for (int c = firstComponent(); c < lastComponent(block); c++) {
+      for (int i = block.begin(), end = block.end(); i < end; i++) {
+        PhaseTurn.turn(
+            block.psiRe(c), block.psiIm(c), i, -duration * values[block.pointOf(i)]);
       }
     }
   }

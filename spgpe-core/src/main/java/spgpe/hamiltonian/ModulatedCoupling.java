@@ -9,7 +9,7 @@ import spgpe.projector.PointBlock;
  * (psi_1<sup>*</sup> psi_2 + c.c.). Add a {@link CoherentCoupling} for the mean. Immutable and
  * thread-safe.
  */
-public final class ModulatedCoupling implements LocalTerm {
+public final class ModulatedCoupling implements ExactFlow {
   private final double amplitude;
   private final double angularFrequency;
   private final double phase;
@@ -78,6 +78,31 @@ public final class ModulatedCoupling implements LocalTerm {
         forceRe[i] -= strength * re[i];
         forceIm[i] -= strength * im[i];
       }
+    }
+  }
+
+  @Override
+  public Kind flowKind() {
+    return Kind.MIXING;
+  }
+
+  /** Rabi rotation: psi_1 cos + i psi_2 sin of strength times duration, and with 1 and 2 swapped. */
+  @Override
+  public void flow(double time, double duration, PointBlock block) {
+    double c = Math.cos(strength(time) * duration);
+    double s = Math.sin(strength(time) * duration);
+    double[] re1 = block.psiRe(0);
+    double[] im1 = block.psiIm(0);
+    double[] re2 = block.psiRe(1);
+    double[] im2 = block.psiIm(1);
+    for (int i = block.begin(), end = block.end(); i < end; i++) {
+      double re = c * re1[i] - s * im2[i];
+      double im = c * im1[i] + s * re2[i];
+      double otherRe = c * re2[i] - s * im1[i];
+      im2[i] = c * im2[i] + s * re1[i];
+      re2[i] = otherRe;
+      re1[i] = re;
+      im1[i] = im;
     }
   }
 

@@ -6,7 +6,7 @@ import spgpe.reservoir.NoiseGenerator;
 /**
  * A numerical scheme with its settings: an immutable recipe that makes {@link Stepper}s.
  *
- * <p>Implementations are immutable and thread-safe.
+ * <p>Implementations are immutable and thread-safe. For an own scheme see {@link KickedStepper}.
  */
 public interface Integrator {
   /**
@@ -17,18 +17,20 @@ public interface Integrator {
   double step();
 
   /**
-   * Order of the global error of a run without noise.
+   * The same scheme with another step.
    *
-   * @return order
+   * @param newStep time step, finite and positive
+   * @return changed copy
+   * @throws IllegalArgumentException if the step is out of range
    */
-  int deterministicOrder();
+  Integrator withStep(double newStep);
 
   /**
-   * Evaluations of the nonlinear force in one step.
+   * Orders, cost and demands.
    *
-   * @return count
+   * @return the facts
    */
-  int forceEvaluationsPerStep();
+  SchemeFacts facts();
 
   /**
    * Largest step at which the scheme is stable for a model.
@@ -46,7 +48,8 @@ public interface Integrator {
    *     first step
    * @param lanes realisations advanced together
    * @return the stepper
-   * @throws IllegalArgumentException if the step exceeds {@link #largestStableStep}
+   * @throws IllegalArgumentException if the step exceeds {@link #largestStableStep}, or if the scheme
+   *     does not fit the model; the message says why
    */
   Stepper bind(Model model, NoiseGenerator noise, int lanes);
 }

@@ -36,13 +36,7 @@ public final class OuRk4 implements Integrator {
     return new OuRk4(Check.positive(step, "time step"));
   }
 
-  /**
-   * A copy with another step.
-   *
-   * @param newStep time step, finite and positive
-   * @return changed copy
-   * @throws IllegalArgumentException if the step is out of range
-   */
+  @Override
   public OuRk4 withStep(double newStep) {
     return ofStep(newStep);
   }
@@ -53,13 +47,8 @@ public final class OuRk4 implements Integrator {
   }
 
   @Override
-  public int deterministicOrder() {
-    return 2;
-  }
-
-  @Override
-  public int forceEvaluationsPerStep() {
-    return 4;
+  public SchemeFacts facts() {
+    return SchemeFacts.noisy(2, 1, 2, 4);
   }
 
   @Override
@@ -80,29 +69,31 @@ public final class OuRk4 implements Integrator {
     return "OuRk4: exact Ornstein-Uhlenbeck half steps around projected RK4, step=" + step;
   }
 
-  private static final class Worker extends BaseStepper {
+  private static final class Worker extends AbstractStepper {
     private final OrnsteinUhlenbeck linear;
     private final StageSum stage;
     private final boolean nonlinear;
     private final Amplitudes start;
     private final Amplitudes probe;
+    private final Amplitudes force;
 
     Worker(Model model, NoiseGenerator noise, int lanes, double dt) {
       super(model, noise, lanes, dt);
       this.linear = new OrnsteinUhlenbeck(model, dt, lanes);
-      this.stage = new StageSum(model, dt);
+      this.stage = new StageSum(model);
       this.nonlinear = !model.localTerms().isEmpty();
       this.start = new Amplitudes(model.region(), model.components(), lanes);
       this.probe = new Amplitudes(model.region(), model.components(), lanes);
+      this.force = new Amplitudes(model.region(), model.components(), lanes);
     }
 
     @Override
-    boolean isNoisy() {
+    protected boolean isNoisy() {
       return linear.isNoisy();
     }
 
     @Override
-    void step(boolean fromSymmetricPoint, Amplitudes normals, double time) {
+    protected void step(boolean fromSymmetricPoint, Amplitudes normals, double time) {
       if (fromSymmetricPoint) {
         linear.half(state, normals, start);
       } else {
@@ -113,20 +104,20 @@ public final class OuRk4 implements Integrator {
         return;
       }
       forces.localForce(time, start, force);
-      stage.add(start, 1.0 / 6, force, state);
-      stage.add(start, 0.5, force, probe);
+      stage.add(start, dt / 6, force, state);
+      stage.add(start, dt / 2, force, probe);
       forces.localForce(time + dt / 2, probe, force);
-      stage.add(state, 1.0 / 3, force, state);
-      stage.add(start, 0.5, force, probe);
+      stage.add(state, dt / 3, force, state);
+      stage.add(start, dt / 2, force, probe);
       forces.localForce(time + dt / 2, probe, force);
-      stage.add(state, 1.0 / 3, force, state);
-      stage.add(start, 1, force, probe);
+      stage.add(state, dt / 3, force, state);
+      stage.add(start, dt, force, probe);
       forces.localForce(time + dt, probe, force);
-      stage.add(state, 1.0 / 6, force, state);
+      stage.add(state, dt / 6, force, state);
     }
 
     @Override
-    void toSymmetricPoint(Amplitudes normals, Amplitudes rest, Amplitudes target) {
+    protected void toSymmetricPoint(Amplitudes normals, Amplitudes rest, Amplitudes target) {
       linear.halfWayThrough(state, normals, rest, target);
     }
   }

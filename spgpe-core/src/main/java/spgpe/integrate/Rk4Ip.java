@@ -1,8 +1,6 @@
 package spgpe.integrate;
 
-import spgpe.hamiltonian.ModeMatrix;
 import spgpe.internal.check.Check;
-import spgpe.internal.linear.ComplexMatrix;
 import spgpe.model.Model;
 import spgpe.projector.Amplitudes;
 import spgpe.reservoir.NoiseGenerator;
@@ -38,13 +36,7 @@ public final class Rk4Ip implements Integrator {
     return new Rk4Ip(Check.positive(step, "time step"));
   }
 
-  /**
-   * A copy with another step.
-   *
-   * @param newStep time step, finite and positive
-   * @return changed copy
-   * @throws IllegalArgumentException if the step is out of range
-   */
+  @Override
   public Rk4Ip withStep(double newStep) {
     return ofStep(newStep);
   }
@@ -55,13 +47,8 @@ public final class Rk4Ip implements Integrator {
   }
 
   @Override
-  public int deterministicOrder() {
-    return 4;
-  }
-
-  @Override
-  public int forceEvaluationsPerStep() {
-    return 4;
+  public SchemeFacts facts() {
+    return SchemeFacts.noisy(4, 1, 2, 4);
   }
 
   @Override
@@ -82,109 +69,63 @@ public final class Rk4Ip implements Integrator {
     return "Rk4Ip: RK4 in the interaction picture with independent half kicks, step=" + step;
   }
 
-  private static final class Worker extends BaseStepper {
+  /**
+   * Proposes a fixed step from the embedded error estimate at a given state: the step, at most half
+   * the stability limit, at which the estimated error of one step relative to the norm of the state
+   * is tolerance. For runs with noise choose the step once, from a typical state, since steps that
+   * follow the state would bias the law; and mind the equilibrium bias too, see {@code
+   * spgpe.integrate.bench.StepAdvisor}. Balac and Mahe, Comput. Phys. Commun. 184, 1211 (2013).
+   *
+   * @param model the model; its noise plays no part
+   * @param state typical state, any number of lanes
+   * @param time time at which to try
+   * @param tolerance relative error of one step, 1e-14 to 0.1
+   * @return dt
+   * @throws IllegalArgumentException if the tolerance is out of range, the state is zero or not finite
+   *     or the shape does not fit
+   */
+  public static double suggestStep(Model model, Amplitudes state, double time, double tolerance) {
+    Check.notNull(model, "model");
+    Check.notNull(state, "state");
+    Check.argument(
+        tolerance >= 1e-14 && tolerance <= 0.1,
+        "tolerance of a step must lie in 1e-14..0.1: tolerance=%s", tolerance);
+    int lanes = state.lanes();
+    LawsonRk4 scheme = new LawsonRk4(model, model.evaluator(lanes), lanes);
+    double largest = StepLimit.ofExponentialScheme(model) / 2;
+    Check.argument(
+        largest < Double.POSITIVE_INFINITY,
+        "a model without local terms is solved exactly at every step: no step to suggest");
+    Amplitudes trial = new Amplitudes(model.region(), model.components(), lanes);
+    double step = largest;
+    for (int attempt = 0; attempt < 60; attempt++) {
+      trial.set(state);
+      scheme.step(time, step, LinearFlow.over(step / 2, model, lanes), trial);
+      double error = scheme.relativeError(time + step, step, trial);
+      Check.argument(
+          Double.isFinite(error), "the state must be finite and not zero: relative error=%s", error);
+      if (error <= tolerance && (error >= 0.9 * tolerance || step == largest)) {
+        break;
+      }
+      double factor = error == 0 ? 2 : Math.pow(0.95 * tolerance / error, 0.25);
+      step = Math.min(largest, step * Math.max(0.1, Math.min(2, factor)));
+    }
+    return step;
+  }
+
+  private static final class Worker extends KickedStepper {
     private final ModeTable halfFlow;
-    private final StageSum stage;
-    private final double[] kick;
-    private final boolean noisy;
-    private final Amplitudes picture;
-    private final Amplitudes sum;
-    private final Amplitudes probe;
+    private final LawsonRk4 scheme;
 
     Worker(Model model, NoiseGenerator noise, int lanes, double dt) {
       super(model, noise, lanes, dt);
-      this.halfFlow = ModeTable.of(halfFlow(model, dt), lanes);
-      this.stage = new StageSum(model, dt);
-      this.kick = new double[model.components()];
-      boolean any = false;
-      for (int c = 0; c < kick.length; c++) {
-        kick[c] = Math.sqrt(model.reservoir().noiseStrength(c) * dt / 2);
-        any |= kick[c] > 0;
-      }
-      this.noisy = any;
-      this.picture = new Amplitudes(model.region(), model.components(), lanes);
-      this.sum = new Amplitudes(model.region(), model.components(), lanes);
-      this.probe = new Amplitudes(model.region(), model.components(), lanes);
-    }
-
-    private static ComplexMatrix[] halfFlow(Model model, double dt) {
-      ModeMatrix h = model.linearPart();
-      int n = model.components();
-      ComplexMatrix[] flows = new ComplexMatrix[model.region().modes()];
-      for (int m = 0; m < flows.length; m++) {
-        ComplexMatrix generator = new ComplexMatrix(n);
-        for (int i = 0; i < n; i++) {
-          double gamma = model.reservoir().damping(i);
-          for (int j = 0; j < n; j++) {
-            generator.set(
-                i, j,
-                -(gamma * h.re(m, i, j) - h.im(m, i, j)) * dt / 2,
-                -(h.re(m, i, j) + gamma * h.im(m, i, j)) * dt / 2);
-          }
-        }
-        flows[m] = generator.exp();
-      }
-      return flows;
+      this.halfFlow = LinearFlow.over(dt / 2, model, lanes);
+      this.scheme = new LawsonRk4(model, forces, lanes);
     }
 
     @Override
-    boolean isNoisy() {
-      return noisy;
-    }
-
-    @Override
-    void step(boolean fromSymmetricPoint, Amplitudes normals, double time) {
-      if (noisy) {
-        add(state, fromSymmetricPoint ? Math.sqrt(0.5) : 1, normals, state);
-      }
-      halfFlow.multiply(state, picture);
-      forces.localForce(time, state, force);
-      stage.increment(force, state);
-      halfFlow.multiply(state, probe); // k1
-      combine(picture, 1.0 / 6, probe, sum);
-      combine(picture, 0.5, probe, probe);
-      forces.localForce(time + dt / 2, probe, force);
-      stage.add(sum, 1.0 / 3, force, sum);
-      stage.add(picture, 0.5, force, probe);
-      forces.localForce(time + dt / 2, probe, force);
-      stage.add(sum, 1.0 / 3, force, sum);
-      stage.add(picture, 1, force, picture);
-      halfFlow.multiply(picture, probe);
-      forces.localForce(time + dt, probe, force);
-      halfFlow.multiply(sum, state);
-      stage.add(state, 1.0 / 6, force, state);
-    }
-
-    @Override
-    void toSymmetricPoint(Amplitudes normals, Amplitudes rest, Amplitudes target) {
-      target.set(state);
-      if (noisy) {
-        // half of the kick that the next step adds: (z + z')/2 has variance 1/2 and covariance 1/2
-        // with z
-        add(target, 0.5, normals, target);
-        add(target, 0.5, rest, target);
-      }
-    }
-
-    private void add(Amplitudes base, double factor, Amplitudes normals, Amplitudes target) {
-      for (int c = 0; c < kick.length; c++) {
-        combine(factor * kick[c], base.re(c), normals.re(c), target.re(c));
-        combine(factor * kick[c], base.im(c), normals.im(c), target.im(c));
-      }
-    }
-
-    private static void combine(
-        Amplitudes base, double factor, Amplitudes other, Amplitudes target) {
-      for (int c = 0; c < base.components(); c++) {
-        combine(factor, base.re(c), other.re(c), target.re(c));
-        combine(factor, base.im(c), other.im(c), target.im(c));
-      }
-    }
-
-    private static void combine(double factor, double[] base, double[] other, double[] target) {
-      for (int e = 0; e < target.length; e++) {
-        target[e] = base[e] + factor * other[e];
-      }
+    protected void deterministicStep(double time) {
+      scheme.step(time, dt, halfFlow, state);
     }
   }
 }

@@ -10,29 +10,27 @@ import spgpe.projector.Amplitudes;
  */
 final class StageSum {
   private final double[] gamma;
-  private final double dt;
 
-  StageSum(Model model, double dt) {
+  StageSum(Model model) {
     this.gamma = new double[model.components()];
     for (int c = 0; c < gamma.length; c++) {
       gamma[c] = model.reservoir().damping(c);
     }
-    this.dt = dt;
   }
 
-  /** target = base + weight k. */
-  void add(Amplitudes base, double weight, Amplitudes force, Amplitudes target) {
+  /** target = base + k, with dt = h. */
+  void add(Amplitudes base, double h, Amplitudes force, Amplitudes target) {
     for (int c = 0; c < gamma.length; c++) {
       add(
-          gamma[c], weight * dt, base.re(c), base.im(c), force.re(c), force.im(c), target.re(c),
+          gamma[c], h, base.re(c), base.im(c), force.re(c), force.im(c), target.re(c),
           target.im(c));
     }
   }
 
-  /** target = k. */
-  void increment(Amplitudes force, Amplitudes target) {
+  /** target = k, with dt = h. */
+  void increment(double h, Amplitudes force, Amplitudes target) {
     for (int c = 0; c < gamma.length; c++) {
-      increment(gamma[c], dt, force.re(c), force.im(c), target.re(c), target.im(c));
+      increment(gamma[c], h, force.re(c), force.im(c), target.re(c), target.im(c));
     }
   }
 

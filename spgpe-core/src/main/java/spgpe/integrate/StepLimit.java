@@ -12,12 +12,14 @@ import spgpe.model.Model;
 final class StepLimit {
   private StepLimit() {}
 
+  /** Infinite without local terms, where these schemes are exact but for the noise. */
   static double ofExponentialScheme(Model model) {
+    if (model.localTerms().isEmpty()) {
+      return Double.POSITIVE_INFINITY;
+    }
     double mu = 0;
-    if (model.chemicalPotentialActsLocally()) {
-      for (int c = 0; c < model.components(); c++) {
-        mu = Math.max(mu, Math.abs(model.reservoir().chemicalPotential(c)));
-      }
+    for (int c = 0; c < model.components(); c++) {
+      mu = Math.max(mu, Math.abs(model.reservoir().chemicalPotential(c)));
     }
     return Math.PI / (model.linearPart().spectralBound() + 2 * mu);
   }

@@ -49,4 +49,20 @@ public interface Stepper {
    * @return stepNumber times dt
    */
   double time();
+
+  /**
+   * Saves what the stepper carries from step to step.
+   *
+   * @return the state, independent of this stepper
+   * @throws IllegalStateException if not started
+   */
+  StepperState save();
+
+  /**
+   * Goes on from a saved state, exactly: nothing tells the run from one without interruption.
+   *
+   * @param saved state saved by a stepper of the same scheme, model and lanes
+   * @throws IllegalArgumentException if the shape does not fit
+   */
+  void restore(StepperState saved);
 }
