@@ -16,6 +16,8 @@ public record Axis(int points, double length) {
   /**
    * Checks the values.
    *
+   * @param points number of points N
+   * @param length ring length L
    * @throws IllegalArgumentException if a value is out of range
    */
   public Axis {
@@ -23,9 +25,11 @@ public record Axis(int points, double length) {
     Check.positive(length, "length");
     double largest = Math.PI * points / length;
     Check.argument(
-        length / points > 0 && largest * largest < Double.POSITIVE_INFINITY,
-        "spacing length/points and the square of the largest wave number must be representable:"
-            + " length=%s, points=%s", length, points);
+        length / points > 0
+            && points * length < Double.POSITIVE_INFINITY
+            && largest * largest < Double.POSITIVE_INFINITY,
+        "spacing length/points, points*length and the square of the largest wave number must be"
+            + " representable: length=%s, points=%s", length, points);
   }
 
   /**

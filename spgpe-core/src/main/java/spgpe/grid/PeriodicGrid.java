@@ -24,8 +24,9 @@ public final class PeriodicGrid {
     Check.argument(
         count <= 1 << 24, "grid must have at most 2^24 points: points=%s", count);
     Check.argument(
-        product > 0 && product < Double.POSITIVE_INFINITY,
-        "grid volume must be representable: volume=%s", product);
+        product / count > 0 && product < Double.POSITIVE_INFINITY,
+        "volume of the grid and of one cell must be representable: volume=%s, points=%s",
+        product, count);
     this.points = (int) count;
     this.volume = product;
   }
@@ -105,8 +106,10 @@ public final class PeriodicGrid {
    * @param axisIndex 0 for x, 1 for y
    * @param point point index
    * @return position along that axis
+   * @throws IllegalArgumentException if there is no such axis or point
    */
   public double coordinate(int axisIndex, int point) {
+    Check.inRange(point, 0, points - 1, "point index");
     int nx = axes[0].points();
     return axis(axisIndex).position(axisIndex == 0 ? point % nx : point / nx);
   }

@@ -68,10 +68,11 @@ public final class EnergyMeter {
    * @param amplitudes state with one lane
    * @return energies in the order of {@link #names}
    * @throws TermFailedException if a term throws
-   * @throws IllegalArgumentException if the shape does not fit
+   * @throws IllegalArgumentException if the time is not finite or the shape does not fit
    */
   public double[] byTerm(double time, Amplitudes amplitudes) {
-    amplitudes.requireShape(model.region(), model.components(), 1);
+    Check.finite(time, "time");
+    Check.notNull(amplitudes, "amplitudes").requireShape(model.region(), model.components(), 1);
     double[] energies = new double[names.size()];
     int next = 0;
     for (ModeMatrix matrix : matrices) {
@@ -102,7 +103,7 @@ public final class EnergyMeter {
    * @param amplitudes state with one lane
    * @return E
    * @throws TermFailedException if a term throws
-   * @throws IllegalArgumentException if the shape does not fit
+   * @throws IllegalArgumentException if the time is not finite or the shape does not fit
    */
   public double energy(double time, Amplitudes amplitudes) {
     double sum = 0;
@@ -119,7 +120,7 @@ public final class EnergyMeter {
    * @param amplitudes state with one lane
    * @return K
    * @throws TermFailedException if a term throws
-   * @throws IllegalArgumentException if the shape does not fit
+   * @throws IllegalArgumentException if the time is not finite or the shape does not fit
    */
   public double grandCanonical(double time, Amplitudes amplitudes) {
     double k = energy(time, amplitudes);

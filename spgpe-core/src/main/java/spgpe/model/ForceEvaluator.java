@@ -40,10 +40,14 @@ public final class ForceEvaluator {
    * @param amplitudes state, not changed
    * @param force overwritten
    * @throws TermFailedException if a term throws
-   * @throws IllegalArgumentException if a shape does not fit
+   * @throws IllegalArgumentException if the time is not finite or a shape does not fit
    */
   public void localForce(double atTime, Amplitudes amplitudes, Amplitudes force) {
+    Check.finite(atTime, "time");
+    Check.notNull(amplitudes, "amplitudes");
+    Check.notNull(force, "force");
     if (terms.isEmpty()) {
+      amplitudes.requireShape(model.region(), model.components(), lanes);
       force.requireShape(model.region(), model.components(), lanes);
       force.clear();
       return;
@@ -64,7 +68,7 @@ public final class ForceEvaluator {
    * @param amplitudes state, not changed
    * @param force overwritten
    * @throws TermFailedException if a term throws
-   * @throws IllegalArgumentException if a shape does not fit
+   * @throws IllegalArgumentException if the time is not finite or a shape does not fit
    */
   public void force(double atTime, Amplitudes amplitudes, Amplitudes force) {
     localForce(atTime, amplitudes, force);
@@ -96,7 +100,6 @@ public final class ForceEvaluator {
   }
 
   private static void subtract(double factor, double[] from, double[] target) {
-    Check.state(from.length == target.length, "array lengths must agree");
     for (int i = 0; i < target.length; i++) {
       target[i] -= factor * from[i];
     }

@@ -49,7 +49,10 @@ public final class Model {
       term.check(components, region);
       if (term instanceof LocalTerm localTerm) {
         checkAliasing(localTerm);
-        local.add(localTerm.preparedFor(region.grid()));
+        local.add(
+            Check.notNull(
+                localTerm.preparedFor(region.grid()),
+                "result of preparedFor of term " + term.description()));
       }
     }
     this.localTerms = List.copyOf(local);

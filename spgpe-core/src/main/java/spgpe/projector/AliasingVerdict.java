@@ -1,6 +1,7 @@
 package spgpe.projector;
 
 import java.util.Arrays;
+import spgpe.internal.check.Check;
 
 /**
  * Whether a polynomial force stays free of aliasing on a coherent region.
@@ -52,8 +53,10 @@ public final class AliasingVerdict {
    *
    * @param axis 0 for x, 1 for y
    * @return the smallest number of points without aliasing
+   * @throws IllegalArgumentException if there is no such axis
    */
   public int pointsNeeded(int axis) {
+    Check.inRange(axis, 0, needed.length - 1, "axis index");
     return needed[axis];
   }
 

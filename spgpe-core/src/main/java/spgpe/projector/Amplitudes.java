@@ -12,6 +12,8 @@ import spgpe.internal.check.Check;
  * thread-safe.
  */
 public final class Amplitudes {
+  private static final int MAX_NUMBERS = 1 << 28;
+
   private final CoherentRegion region;
   private final int lanes;
   private final double[][] re;
@@ -30,6 +32,10 @@ public final class Amplitudes {
     Check.inRange(components, 1, 255, "components");
     Check.inRange(lanes, 1, 4096, "lanes");
     this.lanes = lanes;
+    Check.argument(
+        (long) region.modes() * lanes <= MAX_NUMBERS,
+        "modes times lanes must not exceed %s: modes=%s, lanes=%s",
+        MAX_NUMBERS, region.modes(), lanes);
     this.re = new double[components][region.modes() * lanes];
     this.im = new double[components][region.modes() * lanes];
   }
@@ -66,8 +72,10 @@ public final class Amplitudes {
    *
    * @param component component index from 0
    * @return array of modes x lanes numbers
+   * @throws IllegalArgumentException if there is no such component
    */
   public double[] re(int component) {
+    Check.inRange(component, 0, re.length - 1, "component index");
     return re[component];
   }
 
@@ -76,8 +84,10 @@ public final class Amplitudes {
    *
    * @param component component index from 0
    * @return array of modes x lanes numbers
+   * @throws IllegalArgumentException if there is no such component
    */
   public double[] im(int component) {
+    Check.inRange(component, 0, im.length - 1, "component index");
     return im[component];
   }
 
@@ -96,6 +106,7 @@ public final class Amplitudes {
    * @throws IllegalArgumentException if the shapes differ
    */
   public void set(Amplitudes source) {
+    Check.notNull(source, "source");
     requireShape(source.region, source.components(), source.lanes);
     for (int c = 0; c < re.length; c++) {
       System.arraycopy(source.re[c], 0, re[c], 0, re[c].length);
@@ -111,6 +122,7 @@ public final class Amplitudes {
    * @throws IllegalArgumentException if the shapes do not fit
    */
   public void setLane(int lane, Amplitudes source) {
+    Check.notNull(source, "source");
     Check.inRange(lane, 0, lanes - 1, "lane");
     source.requireShape(region, re.length, 1);
     for (int c = 0; c < re.length; c++) {
@@ -129,6 +141,7 @@ public final class Amplitudes {
    * @throws IllegalArgumentException if the shapes do not fit
    */
   public void copyLane(int lane, Amplitudes target) {
+    Check.notNull(target, "target");
     Check.inRange(lane, 0, lanes - 1, "lane");
     target.requireShape(region, re.length, 1);
     for (int c = 0; c < re.length; c++) {
@@ -156,8 +169,11 @@ public final class Amplitudes {
    * @param component component index
    * @param lane lane index
    * @return atom number; NaN or infinite if an amplitude is
+   * @throws IllegalArgumentException if there is no such component or lane
    */
   public double atomNumber(int component, int lane) {
+    Check.inRange(component, 0, re.length - 1, "component index");
+    Check.inRange(lane, 0, lanes - 1, "lane");
     double sum = 0;
     for (int i = lane; i < re[component].length; i += lanes) {
       sum += re[component][i] * re[component][i] + im[component][i] * im[component][i];
@@ -174,11 +190,15 @@ public final class Amplitudes {
    * @throws IllegalArgumentException if the shape differs; the message gives both
    */
   public void requireShape(CoherentRegion expectedRegion, int components, int expectedLanes) {
-    Check.argument(
+    boolean fits =
         (region == expectedRegion || region.equals(expectedRegion))
-            && re.length == components && lanes == expectedLanes,
-        "shapes must agree: expected %s components, %s lanes on [%s]; found %s components, %s lanes"
-            + " on [%s]",
-        components, expectedLanes, expectedRegion, re.length, lanes, region);
+            && re.length == components && lanes == expectedLanes;
+    if (!fits) { // written so that the check of a time step allocates nothing
+      Check.argument(
+          false,
+          "shapes must agree: expected %s components, %s lanes on [%s]; found %s components, %s"
+              + " lanes on [%s]",
+          components, expectedLanes, expectedRegion, re.length, lanes, region);
+    }
   }
 }

@@ -88,10 +88,11 @@ public final class CoherentRegion {
    * @param axis 0 for x, 1 for y
    * @param mode index of the kept mode, 0 to M-1
    * @return n
-   * @throws IllegalArgumentException if there is no such axis
+   * @throws IllegalArgumentException if there is no such axis or mode
    */
   public int modeNumber(int axis, int mode) {
     Check.inRange(axis, 0, grid.dimension() - 1, "axis index");
+    Check.inRange(mode, 0, nx.length - 1, "mode index");
     return axis == 0 ? nx[mode] : ny[mode];
   }
 
@@ -101,7 +102,7 @@ public final class CoherentRegion {
    * @param axis 0 for x, 1 for y
    * @param mode index of the kept mode
    * @return k along that axis
-   * @throws IllegalArgumentException if there is no such axis
+   * @throws IllegalArgumentException if there is no such axis or mode
    */
   public double waveNumber(int axis, int mode) {
     return grid.axis(axis).waveNumber(modeNumber(axis, mode));
@@ -112,8 +113,10 @@ public final class CoherentRegion {
    *
    * @param mode index of the kept mode
    * @return |k|<sup>2</sup>
+   * @throws IllegalArgumentException if there is no such mode
    */
   public double kSquared(int mode) {
+    Check.inRange(mode, 0, nx.length - 1, "mode index");
     return kSquared[mode];
   }
 
@@ -138,7 +141,8 @@ public final class CoherentRegion {
     int pointsX = grid.axis(0).points();
     int pointsY = grid.dimension() == 1 ? 1 : grid.axis(1).points();
     boolean representable =
-        2 * modeX >= -pointsX && 2 * modeX < pointsX && 2 * modeY >= -pointsY && 2 * modeY < pointsY;
+        2L * modeX >= -pointsX && 2L * modeX < pointsX
+            && 2L * modeY >= -pointsY && 2L * modeY < pointsY;
     return representable
         ? indexOfGridMode[
             Math.floorMod(modeY, pointsY) * pointsX + Math.floorMod(modeX, pointsX)]
@@ -150,8 +154,10 @@ public final class CoherentRegion {
    *
    * @param axis 0 for x, 1 for y
    * @return the cutoff mode number
+   * @throws IllegalArgumentException if there is no such axis
    */
   public int largestMode(int axis) {
+    Check.inRange(axis, 0, grid.dimension() - 1, "axis index");
     int largest = 0;
     for (int m = 0; m < modes(); m++) {
       largest = Math.max(largest, Math.abs(modeNumber(axis, m)));

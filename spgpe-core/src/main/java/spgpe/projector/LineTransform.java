@@ -24,7 +24,7 @@ final class LineTransform implements ModeTransform {
     this.region = region;
     this.components = components;
     this.lanes = lanes;
-    this.fourier = provider.transform(points);
+    this.fourier = Check.notNull(provider.transform(points), "transform of the provider");
     Check.argument(
         fourier.size() == points,
         "transform of provider \"%s\" has the wrong size: size=%s, points=%s",
@@ -43,6 +43,8 @@ final class LineTransform implements ModeTransform {
 
   @Override
   public void toPosition(Amplitudes amplitudes, Field field) {
+    Check.notNull(amplitudes, "amplitudes");
+    Check.notNull(field, "field");
     amplitudes.requireShape(region, components, lanes);
     field.requireShape(region.grid(), components, lanes);
     for (int c = 0; c < components; c++) {
@@ -56,6 +58,8 @@ final class LineTransform implements ModeTransform {
 
   @Override
   public void toModes(Field field, Amplitudes amplitudes) {
+    Check.notNull(field, "field");
+    Check.notNull(amplitudes, "amplitudes");
     amplitudes.requireShape(region, components, lanes);
     field.requireShape(region.grid(), components, lanes);
     for (int c = 0; c < components; c++) {
@@ -69,6 +73,8 @@ final class LineTransform implements ModeTransform {
 
   @Override
   public void applyLocal(Amplitudes amplitudes, LocalOperation operation, Amplitudes target) {
+    Check.notNull(operation, "operation");
+    Check.notNull(target, "result");
     toPosition(amplitudes, psi);
     for (int c = 0; c < components; c++) {
       Arrays.fill(result.re(c), 0);

@@ -1,6 +1,7 @@
 package spgpe.projector;
 
 import spgpe.grid.PeriodicGrid;
+import spgpe.internal.check.Check;
 
 /**
  * A block of positions handed to a {@link LocalOperation}: psi and the result arrays.
@@ -51,6 +52,8 @@ public final class PointBlock {
    * @throws IllegalArgumentException if the shapes differ
    */
   public static PointBlock ofAll(Field psi, Field result) {
+    Check.notNull(psi, "psi");
+    Check.notNull(result, "result");
     result.requireShape(psi.grid(), psi.components(), psi.lanes());
     return new PointBlock(psi, result, 0, psi.grid().points() * psi.lanes(), 0, 1);
   }

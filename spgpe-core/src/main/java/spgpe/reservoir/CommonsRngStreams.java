@@ -34,12 +34,26 @@ final class CommonsRngStreams implements RandomStreams {
   }
 
   static void checkStep(long step) {
-    Check.argument(
-        step >= 0 && step < 1L << 48, "step number must lie in 0..2^48-1: step=%s", step);
+    if (step < 0 || step >= 1L << 48) { // allocates nothing in a time step
+      Check.argument(false, "step number must lie in 0..2^48-1: step=%s", step);
+    }
+  }
+
+  static void checkAssigned(int lane, long trajectory) {
+    if (trajectory < 0) { // allocates nothing in a time step
+      Check.state(false, "lane has no trajectory assigned: lane=%s", lane);
+    }
+  }
+
+  static void checkShape(CoherentRegion region, int components, int lanes) {
+    Check.notNull(region, "region");
+    Check.inRange(components, 1, 255, "components");
+    Check.inRange(lanes, 1, 4096, "lanes");
   }
 
   @Override
   public NoiseGenerator generator(CoherentRegion region, int components, int lanes) {
+    checkShape(region, components, lanes);
     long[] trajectories = new long[lanes];
     java.util.Arrays.fill(trajectories, -1);
     return new NoiseGenerator() {
@@ -53,9 +67,9 @@ final class CommonsRngStreams implements RandomStreams {
       @Override
       public void fill(long step, int use, Amplitudes normals) {
         Check.inRange(use, 0, LARGEST_USE, "use");
-        normals.requireShape(region, components, lanes);
+        Check.notNull(normals, "normals").requireShape(region, components, lanes);
         for (int lane = 0; lane < lanes; lane++) {
-          Check.state(trajectories[lane] >= 0, "lane has no trajectory assigned: lane=%s", lane);
+          checkAssigned(lane, trajectories[lane]);
           ZigguratSampler.NormalizedGaussian gaussian =
               ZigguratSampler.NormalizedGaussian.of(
                   provider(seed, trajectories[lane], step, use));

@@ -26,6 +26,7 @@ final class CounterBasedStreams implements RandomStreams {
 
   @Override
   public NoiseGenerator generator(CoherentRegion region, int components, int lanes) {
+    CommonsRngStreams.checkShape(region, components, lanes);
     return new Generator(seed, region, components, lanes);
   }
 
@@ -84,9 +85,9 @@ final class CounterBasedStreams implements RandomStreams {
     public void fill(long step, int use, Amplitudes normals) {
       CommonsRngStreams.checkStep(step);
       Check.inRange(use, 0, LARGEST_USE, "use");
-      normals.requireShape(region, components, trajectories.length);
+      Check.notNull(normals, "normals").requireShape(region, components, trajectories.length);
       for (int lane = 0; lane < trajectories.length; lane++) {
-        Check.state(trajectories[lane] >= 0, "lane has no trajectory assigned: lane=%s", lane);
+        CommonsRngStreams.checkAssigned(lane, trajectories[lane]);
         for (int c = 0; c < components; c++) {
           long word3 = ((long) use << 24) | ((long) c << 16) | (step >>> 32);
           for (int m = 0; m < modeWords.length; m++) {

@@ -26,7 +26,8 @@ public interface NoiseGenerator {
    * @param use what the numbers are for, 0 to {@value #LARGEST_USE}: different uses in one step are
    *     independent
    * @param normals overwritten
-   * @throws IllegalArgumentException if a value is out of range
+   * @throws IllegalArgumentException if a value is out of range or the shape does not fit
+   * @throws IllegalStateException if a lane has no trajectory
    */
   void fill(long step, int use, Amplitudes normals);
 }

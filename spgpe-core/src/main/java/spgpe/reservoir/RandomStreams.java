@@ -40,6 +40,7 @@ public interface RandomStreams {
    * @param components number of components
    * @param lanes number of lanes
    * @return the generator; every lane must be assigned before use
+   * @throws IllegalArgumentException if a number is out of range
    */
   NoiseGenerator generator(CoherentRegion region, int components, int lanes);
 
@@ -48,6 +49,7 @@ public interface RandomStreams {
    *
    * @param trajectory index of the trajectory, 0 to 2<sup>32</sup>-1
    * @return a fresh generator
+   * @throws IllegalArgumentException if the index is out of range
    */
   UniformRandomProvider initialState(long trajectory);
 

@@ -78,7 +78,8 @@ public final class Reservoir {
    * @throws IllegalArgumentException if a value is not finite or none is given
    */
   public Reservoir withChemicalPotentials(double... values) {
-    return new Reservoir(temperature, values.clone(), dampings);
+    return new Reservoir(
+        temperature, Check.notNull(values, "chemical potentials").clone(), dampings);
   }
 
   /**
@@ -89,7 +90,8 @@ public final class Reservoir {
    * @throws IllegalArgumentException if a value is out of range or none is given
    */
   public Reservoir withDampings(double... values) {
-    return new Reservoir(temperature, chemicalPotentials, values.clone());
+    return new Reservoir(
+        temperature, chemicalPotentials, Check.notNull(values, "dampings").clone());
   }
 
   /**
@@ -106,9 +108,10 @@ public final class Reservoir {
    *
    * @param component component index
    * @return mu_j
+   * @throws IllegalArgumentException if there is no such component
    */
   public double chemicalPotential(int component) {
-    return chemicalPotentials[chemicalPotentials.length == 1 ? 0 : component];
+    return valueFor(chemicalPotentials, component);
   }
 
   /**
@@ -116,9 +119,16 @@ public final class Reservoir {
    *
    * @param component component index
    * @return gamma_j
+   * @throws IllegalArgumentException if there is no such component
    */
   public double damping(int component) {
-    return dampings[dampings.length == 1 ? 0 : component];
+    return valueFor(dampings, component);
+  }
+
+  private static double valueFor(double[] values, int component) {
+    int last = values.length == 1 ? 254 : values.length - 1;
+    Check.inRange(component, 0, last, "component index");
+    return values[values.length == 1 ? 0 : component];
   }
 
   /**
@@ -126,6 +136,7 @@ public final class Reservoir {
    *
    * @param component component index
    * @return 2 gamma_j T
+   * @throws IllegalArgumentException if there is no such component
    */
   public double noiseStrength(int component) {
     return 2 * damping(component) * temperature;

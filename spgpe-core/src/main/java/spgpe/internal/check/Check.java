@@ -5,7 +5,8 @@ import org.jspecify.annotations.Nullable;
 
 /**
  * Argument checks whose messages state the rule, then {@code name=value}. Every comparison is
- * written so that NaN fails it.
+ * written so that NaN fails it. The checks of single numbers allocate nothing when they hold, so
+ * that time steps may use them; {@link #argument} boxes its values in any case.
  */
 public final class Check {
   private Check() {}
@@ -39,6 +40,19 @@ public final class Check {
   }
 
   /**
+   * Throws unless the condition holds, without making an array for values: for time steps.
+   *
+   * @param condition what must be true
+   * @param message message
+   * @throws IllegalStateException if the condition is false
+   */
+  public static void state(boolean condition, String message) {
+    if (!condition) {
+      throw new IllegalStateException(message);
+    }
+  }
+
+  /**
    * Refuses null with the parameter's name.
    *
    * @param value value to test
@@ -62,7 +76,9 @@ public final class Check {
    * @return the value
    */
   public static double finite(double value, String name) {
-    argument(Double.isFinite(value), "%s must be finite: %s=%s", name, name, value);
+    if (!Double.isFinite(value)) {
+      argument(false, "%s must be finite: %s=%s", name, name, value);
+    }
     return value;
   }
 
@@ -74,9 +90,9 @@ public final class Check {
    * @return the value
    */
   public static double positive(double value, String name) {
-    argument(
-        value > 0 && value < Double.POSITIVE_INFINITY,
-        "%s must be finite and > 0: %s=%s", name, name, value);
+    if (!(value > 0 && value < Double.POSITIVE_INFINITY)) {
+      argument(false, "%s must be finite and > 0: %s=%s", name, name, value);
+    }
     return value;
   }
 
@@ -88,9 +104,9 @@ public final class Check {
    * @return the value
    */
   public static double notNegative(double value, String name) {
-    argument(
-        value >= 0 && value < Double.POSITIVE_INFINITY,
-        "%s must be finite and >= 0: %s=%s", name, name, value);
+    if (!(value >= 0 && value < Double.POSITIVE_INFINITY)) {
+      argument(false, "%s must be finite and >= 0: %s=%s", name, name, value);
+    }
     return value;
   }
 
@@ -104,9 +120,9 @@ public final class Check {
    * @return the value
    */
   public static int inRange(int value, int low, int high, String name) {
-    argument(
-        value >= low && value <= high,
-        "%s must lie in %s..%s: %s=%s", name, low, high, name, value);
+    if (value < low || value > high) {
+      argument(false, "%s must lie in %s..%s: %s=%s", name, low, high, name, value);
+    }
     return value;
   }
 }
