@@ -15,6 +15,7 @@ import spgpe.hamiltonian.Hamiltonian;
 import spgpe.hamiltonian.HamiltonianTerm;
 import spgpe.hamiltonian.LocalTerm;
 import spgpe.hamiltonian.ModulatedCoupling;
+import spgpe.internal.check.AllocationMeter;
 import spgpe.model.Model;
 import spgpe.projector.Amplitudes;
 import spgpe.projector.PointBlock;
@@ -36,7 +37,7 @@ class StepperStateTest {
         ? Model.ofAliasing(
             Projector.allModes().on(PeriodicGrid.of(Axis.of(16, 8))), hamiltonian, reservoir)
         : Model.of(
-            Projector.modesUpTo(5).on(PeriodicGrid.of(Axis.of(21, 8))), hamiltonian, reservoir);
+            Projector.modesUpTo(5).on(PeriodicGrid.of(Axis.of(32, 8))), hamiltonian, reservoir);
   }
 
   private static Model fit(Integrator scheme) {
@@ -107,6 +108,20 @@ class StepperStateTest {
       second.observe(found);
       requireSame(expected, found, scheme.toString());
       assertEquals(whole.time(), second.time(), 0);
+    }
+  }
+
+  @Test
+  void aStepAndALookAllocateNothing() {
+    for (Integrator scheme : schemes()) {
+      Model model = fit(scheme);
+      Stepper stepper = scheme.bind(model, noise(model, 1), 1);
+      Amplitudes target = start(model, 1);
+      stepper.start(target, 0);
+      double step = AllocationMeter.bytesPerCall(stepper::advance);
+      double look = AllocationMeter.bytesPerCall(() -> stepper.observe(target));
+      assertTrue(step < 1, scheme + ": bytes for each step: " + step);
+      assertTrue(look < 1, scheme + ": bytes for each look: " + look);
     }
   }
 

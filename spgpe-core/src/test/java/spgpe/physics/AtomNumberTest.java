@@ -31,7 +31,7 @@ class AtomNumberTest {
 
   /**
    * Density at T = 0.1, mu = g = 1 on a ring of length 32 with modes |n| &lt;= 31: 0.946820 from the
-   * transfer operator of the uncut field plus 0.01092 for the cutoff, derived in docs/theory.md: 0.9577.
+   * transfer operator of the uncut field plus 0.01092 for the cutoff, derived in docs/validation.md: 0.9577.
    * Tolerance 0.002 for the leading-order cutoff correction; standard error about 0.0004, so no false
    * alarm to speak of (4.5 sigma below the tolerance). A temperature off by 10 % moves it by 0.006.
    */

@@ -179,7 +179,7 @@ class ClosedFormTest {
   /**
    * Josephson plasma frequency of a uniform pair about phase 0: w^2 = (2J + 2 kappa n)(2J + 2 (g -
    * g_12) n) (for kappa = 0 Whitlock and Bouchoule, Phys. Rev. A 68, 053609 (2003), from memory; the
-   * biquadratic part is derived in docs/theory.md).
+   * biquadratic part is derived in docs/validation.md).
    */
   @ParameterizedTest
   @ValueSource(doubles = {0, 0.15})

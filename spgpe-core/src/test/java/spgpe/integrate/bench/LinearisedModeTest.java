@@ -28,7 +28,7 @@ import spgpe.reservoir.Reservoir;
 
 /** Exact stationary variances of the linearised mode; no sampling, so no false alarms. */
 class LinearisedModeTest {
-  /** Stationary variances derived from the 2x2 step matrices by hand, see docs/theory.md. */
+  /** Stationary variances derived from the 2x2 step matrices by hand, see docs/validation.md. */
   @Test
   void checkValuesOfOneMode() {
     LinearisedMode mode = LinearisedMode.of(5, 1, 0.05);
@@ -44,7 +44,7 @@ class LinearisedModeTest {
 
   /**
    * Without interaction: OU schemes are exact; independent half kicks give x coth x, x = gamma eps dt
-   * (derived, docs/theory.md).
+   * (derived, docs/integrators.md).
    */
   @ParameterizedTest
   @CsvSource({"0.1, 0.1, 18", "1, 0.05, 5", "0.001, 0.1, 10"})
