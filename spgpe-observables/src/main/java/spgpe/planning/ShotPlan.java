@@ -15,6 +15,7 @@ import spgpe.projector.Projector;
 import spgpe.reservoir.Reservoir;
 import spgpe.units.RingExperiment;
 import spgpe.units.ScaledRing;
+import spgpe.units.Temperature;
 import spgpe.units.TimeSpan;
 import spgpe.units.Verdict;
 
@@ -92,6 +93,17 @@ public final class ShotPlan {
   public ShotPlan withCutoffModes(int modes) {
     Check.inRange(modes, 1, 100_000, "modes");
     return new ShotPlan(experiment, damping, shot, modes, null);
+  }
+
+  /**
+   * The same plan at another temperature, with the same modes and damping, so that rates compare.
+   *
+   * @param temperature temperature, 1 pK to 1 mK
+   * @return changed copy
+   * @throws IllegalArgumentException if the value is out of range
+   */
+  public ShotPlan withTemperature(Temperature temperature) {
+    return with(experiment.withTemperature(temperature), theory);
   }
 
   /**

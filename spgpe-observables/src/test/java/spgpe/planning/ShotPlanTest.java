@@ -189,6 +189,21 @@ class ShotPlanTest {
   }
 
   @Test
+  void anotherTemperatureKeepsModesAndTheory() {
+    ShotPlan plan = Rings.referencePlan();
+    Temperature warm = Temperature.ofKelvin(1.2 * plan.experiment().temperature().kelvin());
+    ShotPlan moved = plan.withTemperature(warm);
+    ShotPlan fresh =
+        ShotPlan.of(Rings.reference().withTemperature(warm), 0.1, SHOT).withCutoffModes(24);
+    assertEquals(24, moved.settings().cutoffModes());
+    assertEquals(rate(fresh), rate(moved), 1e-12 * rate(fresh));
+    assertEquals(fresh.verdicts(), moved.verdicts());
+    assertEquals(
+        fresh.ring().temperature(), moved.model().reservoir().temperature(), 1e-15);
+    assertTrue(plan.withTemperature(Temperature.ofKelvin(1e-6)).rate().isEmpty());
+  }
+
+  @Test
   void wrongValuesAreRefused() {
     RingExperiment lab = Rings.reference();
     for (double gamma : new double[] {0, -1, Double.NaN, Double.POSITIVE_INFINITY}) {
