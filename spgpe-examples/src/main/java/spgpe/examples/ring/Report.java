@@ -19,7 +19,8 @@ import spgpe.units.Verdict;
 final class Report {
   private Report() {}
 
-  static String setUp(RingScenario scenario, ShotPlan hottest) {
+  static String setUp(RingScenario scenario, List<ShotPlan> plans) {
+    ShotPlan hottest = plans.get(plans.size() - 1);
     ScaledRing ring = hottest.ring();
     ScaledUnits units = ring.units();
     RunSettings settings = hottest.settings();
@@ -37,6 +38,14 @@ final class Report {
     line(text, "truncation time %.0f t0 (%.1f ms): relaxation of the cold start and growth of the"
         + " first bubble", settings.truncation(),
         units.time(settings.truncation()).milliseconds());
+    StringBuilder lifetimes = new StringBuilder("expected mean lifetimes:");
+    for (ShotPlan plan : plans) {
+      lifetimes.append(number("  %.1f nK ", plan.experiment().temperature().nanokelvin()));
+      lifetimes.append(
+          plan.statistics().map(s -> number("%.4g ms", s.meanLifetime().milliseconds()))
+              .orElse("none"));
+    }
+    line(text, "%s", lifetimes);
     text.append("\nHow good the reduction is, at the highest temperature\n");
     int fine = 0;
     for (Verdict verdict : hottest.verdicts()) {

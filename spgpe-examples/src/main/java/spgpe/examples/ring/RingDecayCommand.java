@@ -135,7 +135,7 @@ public final class RingDecayCommand implements Callable<Integer> {
         temperatures.stream().sorted().map(Temperature::ofNanokelvin).toList();
     List<ShotPlan> plans = plans(sorted);
     ShotPlan hottest = plans.get(plans.size() - 1);
-    text.println(Report.setUp(RingScenario.invented(), hottest));
+    text.println(Report.setUp(RingScenario.invented(), plans));
     text.flush();
     double scaledUntil = hottest.ring().units().toScaled(TimeSpan.ofMilliseconds(until));
     RingDecay simulation = new RingDecay(seed, trajectories, Math.ceil(scaledUntil));
