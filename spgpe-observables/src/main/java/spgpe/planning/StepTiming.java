@@ -15,7 +15,8 @@ import spgpe.run.InitialState;
 public record StepTiming(double secondsPerStep) {
   private static final int STEPS = 500;
   private static final int TRAJECTORIES = 4;
-  private static final int REPEATS = 6;
+  private static final long ENOUGH_NANOSECONDS = 3_000_000_000L;
+  private static final int MOST_REPEATS = 2000;
 
   /**
    * Checks the value.
@@ -28,8 +29,9 @@ public record StepTiming(double secondsPerStep) {
   }
 
   /**
-   * Runs 4 short trajectories of the plan in the calling thread seven times, the first time for
-   * warming up, and takes the fastest. Takes a fraction of a second for rings of about 100 points.
+   * Runs 4 short trajectories of the plan in the calling thread again and again for three seconds,
+   * in which the virtual machine warms up, and takes the fastest. Other load on the machine makes the
+   * result too long.
    *
    * @param plan the plan
    * @return the timing
@@ -48,12 +50,14 @@ public record StepTiming(double secondsPerStep) {
             .trajectories(TRAJECTORIES)
             .seed(1)
             .until(until);
-    ensemble.run();
     long best = Long.MAX_VALUE;
-    for (int i = 0; i < REPEATS; i++) {
+    long spent = 0;
+    for (int i = 0; i < MOST_REPEATS && spent < ENOUGH_NANOSECONDS; i++) {
       long begin = nanoseconds.getAsLong();
       ensemble.run();
-      best = Math.min(best, nanoseconds.getAsLong() - begin);
+      long taken = nanoseconds.getAsLong() - begin;
+      best = Math.min(best, taken);
+      spent += taken;
     }
     return new StepTiming(1e-9 * best / STEPS / TRAJECTORIES);
   }

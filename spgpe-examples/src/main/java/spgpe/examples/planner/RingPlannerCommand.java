@@ -86,7 +86,7 @@ public final class RingPlannerCommand implements Callable<Integer> {
       paramLabel = "MS",
       description =
           "time before atom loss ends a shot, in ms, 1 to 10000000 (default: ${DEFAULT-VALUE})",
-      defaultValue = "600")
+      defaultValue = "1000")
   private double shot;
 
   @Option(
@@ -147,7 +147,7 @@ public final class RingPlannerCommand implements Callable<Integer> {
 
   @Option(
       names = "--calibrate",
-      description = "time a few steps on this machine (about a second) to estimate the computing time")
+      description = "time steps on this machine for three seconds to estimate the computing time")
   private boolean calibrate;
 
   @Option(names = "--json", description = "print the plan as JSON")

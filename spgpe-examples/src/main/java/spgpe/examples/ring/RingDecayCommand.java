@@ -42,7 +42,7 @@ public final class RingDecayCommand implements Callable<Integer> {
       split = ",",
       paramLabel = "NK",
       description = "temperatures in nK, comma-separated, 10 to 60 (default: ${DEFAULT-VALUE})",
-      defaultValue = "27,30,33")
+      defaultValue = "24,27,30")
   private List<Double> temperatures = new ArrayList<>();
 
   @Option(
@@ -58,7 +58,7 @@ public final class RingDecayCommand implements Callable<Integer> {
       description =
           "time after which a trajectory is censored, in ms, 50 to 100000 (default:"
               + " ${DEFAULT-VALUE})",
-      defaultValue = "600")
+      defaultValue = "1000")
   private double until;
 
   @Option(

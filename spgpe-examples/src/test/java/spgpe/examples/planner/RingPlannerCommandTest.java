@@ -101,11 +101,11 @@ class RingPlannerCommandTest {
 
   @Test
   void jsonHoldsThePlan() {
-    Map<String, Object> plan = json("--temperature=27", "--error=5");
+    Map<String, Object> plan = json("--temperature=27", "--shot=1000", "--error=5");
     double rate = number(plan, "rate", "per_second");
     assertEquals(1000 / rate, number(plan, "shots", "mean_lifetime_ms"), 1e-9 * 1000 / rate);
     double fraction = number(plan, "shots", "decayed_fraction");
-    assertEquals(1 - Math.exp(-rate * 0.6), fraction, 1e-12);
+    assertEquals(1 - Math.exp(-rate), fraction, 1e-12);
     assertEquals(400, number(plan, "shots", "decays_needed"));
     assertEquals(Math.ceil(400 / fraction), number(plan, "shots", "shots_needed"));
     assertTrue(number(plan, "simulation", "step") > 0);
