@@ -104,9 +104,22 @@ public final class RingExperiment {
         1e-6,
         1e5,
         "scattering length in a0 (repulsive)");
-    range(Check.notNull(temperature, "temperature").kelvin(), 1e-12, 1e-3, "temperature in K");
+    requireTemperature(temperature);
     return new RingExperiment(
         species, ring, transverse, atomsPerComponent, scatteringLength, temperature, new Options());
+  }
+
+  /**
+   * This recipe at another temperature.
+   *
+   * @param newTemperature temperature, 1 pK to 1 mK
+   * @return the new recipe
+   * @throws IllegalArgumentException if the value lies outside its range
+   */
+  public RingExperiment withTemperature(Temperature newTemperature) {
+    requireTemperature(newTemperature);
+    return new RingExperiment(
+        species, ring, transverse, atomsPerComponent, intra, newTemperature, options);
   }
 
   /**
@@ -255,7 +268,12 @@ public final class RingExperiment {
     return intra;
   }
 
-  Temperature temperature() {
+  /**
+   * The temperature of the recipe.
+   *
+   * @return temperature
+   */
+  public Temperature temperature() {
     return temperature;
   }
 
@@ -275,7 +293,12 @@ public final class RingExperiment {
     return options.biquadratic;
   }
 
-  Optional<Modulation> modulation() {
+  /**
+   * The modulation of the coherent coupling.
+   *
+   * @return modulation, empty if the coupling is constant
+   */
+  public Optional<Modulation> modulation() {
     return options.modulation;
   }
 
@@ -302,6 +325,10 @@ public final class RingExperiment {
     change.accept(changed);
     return new RingExperiment(
         species, ring, transverse, atomsPerComponent, intra, temperature, changed);
+  }
+
+  private static void requireTemperature(Temperature temperature) {
+    range(Check.notNull(temperature, "temperature").kelvin(), 1e-12, 1e-3, "temperature in K");
   }
 
   private static void range(double value, double low, double high, String name) {

@@ -64,6 +64,22 @@ class RingExperimentTest {
   }
 
   @Test
+  void anotherTemperatureKeepsTheRest() {
+    RingExperiment lab =
+        potassiumRing().withCoherentCoupling(Energy.ofHertz(8)).withCutoffOccupation(2);
+    RingExperiment warm = lab.withTemperature(Temperature.ofNanokelvin(45));
+    assertEquals(Temperature.ofNanokelvin(45), warm.temperature());
+    assertEquals(Temperature.ofNanokelvin(30), lab.temperature());
+    assertClose(1.5 * lab.scaled().temperature(), warm.scaled().temperature(), 1e-12);
+    assertEquals(
+        lab.scaled().describe(),
+        warm.withTemperature(Temperature.ofNanokelvin(30)).scaled().describe());
+    assertTrue(lab.modulation().isEmpty());
+    assertThrows(
+        IllegalArgumentException.class, () -> lab.withTemperature(Temperature.ofKelvin(1)));
+  }
+
+  @Test
   void potassiumRingIsMarginallyOneDimensional() {
     Map<String, Verdict> verdicts = ValidityTest.byName(potassiumRing().scaled().verdicts());
     assertEquals(0.529, verdicts.get("mu/(hbar w_perp)").value(), 5e-4);

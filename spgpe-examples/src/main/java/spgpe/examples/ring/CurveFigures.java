@@ -95,7 +95,7 @@ final class CurveFigures {
   static void rates(Path file, List<DecayAtTemperature> points) {
     XYIntervalSeries measured = new XYIntervalSeries("simulation, 95 % intervals");
     for (DecayAtTemperature point : points) {
-      Optional<RateEstimate> found = point.rate().filter(rate -> rate.events() > 0);
+      Optional<RateEstimate> found = point.countedRate();
       if (found.isPresent()) {
         Interval interval = DecayAtTemperature.interval(found.get());
         double x = inverse(point);
@@ -115,29 +115,34 @@ final class CurveFigures {
     Report.fit(points).ifPresent(fit -> addLines(lines, points, fit));
     XYLineAndShapeRenderer lineLook = new XYLineAndShapeRenderer(true, false);
     for (int i = 0; i < lines.getSeriesCount(); i++) {
-      lineLook.setSeriesPaint(i, i == 0 ? Charts.colour(0) : Color.GRAY);
-      lineLook.setSeriesStroke(i, Charts.stroke(i));
+      lineLook.setSeriesPaint(i, i == 0 ? Charts.colour(0) : i == 1 ? Charts.colour(1) : Color.GRAY);
+      lineLook.setSeriesStroke(i, Charts.stroke(Math.min(i, 1)));
     }
     plot.setDataset(1, lines);
     plot.setRenderer(1, lineLook);
     write(file, "Decay rate against 1/T", plot);
   }
 
-  /** The fitted line, and one with the slope of the closed form through the middle point. */
+  /** The fitted line, the expected rates, and the slope of the closed form through the middle. */
   private static void addLines(
       XYSeriesCollection lines, List<DecayAtTemperature> points, ArrheniusFit fit) {
     XYSeries fitted = new XYSeries("fit of ln(rate) = ln A - B/T");
+    XYSeries expected = new XYSeries("theory, full saddle");
     XYSeries closed = new XYSeries("slope of the closed-form barrier");
     DecayAtTemperature middle = points.get(points.size() / 2);
-    double barrier = middle.barrierOverTemperature() * middle.ring().temperature();
+    double barrier = middle.closedBarrierOverTemperature() * middle.ring().temperature();
     double anchor = fit.logRateAt(middle.ring().temperature()).value();
     for (DecayAtTemperature point : points) {
       double t = point.ring().temperature();
       fitted.add(inverse(point), perSecond(point, Math.exp(fit.logRateAt(t).value())));
+      if (!Double.isNaN(point.expectedRate())) {
+        expected.add(inverse(point), perSecond(point, point.expectedRate()));
+      }
       double change = -barrier * (1 / t - 1 / middle.ring().temperature());
       closed.add(inverse(point), perSecond(point, Math.exp(anchor + change)));
     }
     lines.addSeries(fitted);
+    lines.addSeries(expected);
     lines.addSeries(closed);
   }
 

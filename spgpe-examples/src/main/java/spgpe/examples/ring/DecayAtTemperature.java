@@ -2,6 +2,8 @@ package spgpe.examples.ring;
 
 import java.util.List;
 import java.util.Optional;
+import spgpe.planning.ExpectedRate;
+import spgpe.planning.ShotPlan;
 import spgpe.run.TimeMoments;
 import spgpe.run.TrajectoryEnd;
 import spgpe.statistics.Censoring;
@@ -16,21 +18,27 @@ import spgpe.units.Temperature;
 /**
  * Outcome of the ensemble at one temperature. Times are scaled.
  *
- * @param temperature laboratory temperature
- * @param ring the experiment at that temperature
+ * @param plan the plan it followed
  * @param ends how the trajectories ended
  * @param until end time of the run
- * @param truncation times before this are left out of the rate
  * @param meanCosine mean of cos(relative phase) over the ring, against time
  */
 record DecayAtTemperature(
-    Temperature temperature,
-    ScaledRing ring,
-    List<TrajectoryEnd> ends,
-    double until,
-    double truncation,
-    TimeMoments meanCosine) {
+    ShotPlan plan, List<TrajectoryEnd> ends, double until, TimeMoments meanCosine) {
   static final double LEVEL = 0.95;
+
+  Temperature temperature() {
+    return plan.experiment().temperature();
+  }
+
+  ScaledRing ring() {
+    return plan.ring();
+  }
+
+  /** Times before this are left out of the rate. */
+  double truncation() {
+    return plan.settings().truncation();
+  }
 
   /** First-passage times, censored at the end of the run. */
   SurvivalData firstPassages() {
@@ -47,14 +55,19 @@ record DecayAtTemperature(
   }
 
   long earlyDecays() {
-    return ends.stream().filter(end -> end.isStopped() && end.time() <= truncation).count();
+    return ends.stream().filter(end -> end.isStopped() && end.time() <= truncation()).count();
   }
 
   /** Rate per unit of scaled time of the whole ring; empty if no trajectory outlived the cut. */
   Optional<RateEstimate> rate() {
-    return ends.stream().anyMatch(end -> end.time() > truncation)
-        ? Optional.of(RateEstimate.of(firstPassages().truncatedBefore(truncation)))
+    return ends.stream().anyMatch(end -> end.time() > truncation())
+        ? Optional.of(RateEstimate.of(firstPassages().truncatedBefore(truncation())))
         : Optional.empty();
+  }
+
+  /** The rate, if it rests on a decay at least. */
+  Optional<RateEstimate> countedRate() {
+    return rate().filter(rate -> rate.events() > 0);
   }
 
   /** Interval of the rate per unit of scaled time. */
@@ -68,8 +81,8 @@ record DecayAtTemperature(
 
   /** The rate for several truncation times about the chosen one. */
   Optional<TruncationScan> truncationScan() {
-    double[] times = {0.6 * truncation, 0.8 * truncation, truncation, 1.25 * truncation,
-        1.5 * truncation};
+    double cut = truncation();
+    double[] times = {0.6 * cut, 0.8 * cut, cut, 1.25 * cut, 1.5 * cut};
     double longest = ends.stream().mapToDouble(TrajectoryEnd::time).max().orElse(0);
     return longest > times[times.length - 1]
         ? Optional.of(TruncationScan.of(firstPassages(), times))
@@ -77,12 +90,22 @@ record DecayAtTemperature(
   }
 
   /** Barrier over temperature from the closed form at fixed density. */
-  double barrierOverTemperature() {
-    return ring.pair().flatMap(pair -> pair.bubbleEnergy()).map(
-        energy -> energy.asTemperature().kelvin() / temperature.kelvin()).orElse(Double.NaN);
+  double closedBarrierOverTemperature() {
+    return ring().pair().flatMap(pair -> pair.bubbleEnergy()).map(
+        energy -> energy.asTemperature().kelvin() / temperature().kelvin()).orElse(Double.NaN);
   }
 
-  /** Index of the trajectory with the median decay time among those that decayed, if any did. */
+  /** Barrier over temperature of the full saddle, NaN if the plan expects no rate. */
+  double barrierOverTemperature() {
+    return plan.rate().map(ExpectedRate::barrierOverTemperature).orElse(Double.NaN);
+  }
+
+  /** Expected rate of the ring in scaled time, NaN if the plan expects none. */
+  double expectedRate() {
+    return plan.rate().map(rate -> ring().units().toScaled(rate.rate())).orElse(Double.NaN);
+  }
+
+  /** Trajectory with the median decay time among those that decayed, if any did. */
   Optional<TrajectoryEnd> typicalDecay() {
     List<TrajectoryEnd> late =
         ends.stream().filter(TrajectoryEnd::isStopped)

@@ -4,6 +4,9 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import spgpe.examples.scenario.RingScenario;
+import spgpe.planning.RunSettings;
+import spgpe.planning.ShotPlan;
 import spgpe.statistics.ArrheniusFit;
 import spgpe.statistics.Interval;
 import spgpe.statistics.RateEstimate;
@@ -16,15 +19,33 @@ import spgpe.units.Verdict;
 final class Report {
   private Report() {}
 
-  static String setUp(RingScenario scenario, ScaledRing hottest, int cutoffModes) {
-    ScaledUnits units = hottest.units();
-    StringBuilder text = new StringBuilder("Invented experiment\n").append(RingScenario.describe());
+  static String setUp(RingScenario scenario, List<ShotPlan> plans) {
+    ShotPlan hottest = plans.get(plans.size() - 1);
+    ScaledRing ring = hottest.ring();
+    ScaledUnits units = ring.units();
+    RunSettings settings = hottest.settings();
+    StringBuilder text = new StringBuilder("Invented experiment\n").append(scenario.describe());
     text.append("\nScaled parameters (energies in g n, lengths in x0, times in t0)\n");
     line(text, "x0 = %.4f um, t0 = %.4f ms, g n/h = %.1f Hz",
         units.lengthUnit().micrometres(), units.timeUnit().milliseconds(),
         units.energyUnit().hertz());
-    line(text, "L = %.2f, J = %.4f, kappa = %.4f, mu = %.4f, kept modes |n| <= %d",
-        hottest.length(), hottest.coherent(), hottest.biquadratic(), hottest.mu(), cutoffModes);
+    line(text, "L = %.2f, J = %.4f, kappa = %.4f, mu = %.4f",
+        ring.length(), ring.coherent(), ring.biquadratic(), ring.mu());
+    text.append("\nPlan of the simulation, from the highest temperature\n");
+    line(text, "kept modes |n| <= %d, %d grid points, step dt = %.4f t0 (stable below %.3f t0)",
+        settings.cutoffModes(), settings.gridPoints(), settings.step(),
+        settings.largestStableStep());
+    line(text, "truncation time %.0f t0 (%.1f ms): relaxation of the cold start and growth of the"
+        + " first bubble", settings.truncation(),
+        units.time(settings.truncation()).milliseconds());
+    StringBuilder lifetimes = new StringBuilder("expected mean lifetimes:");
+    for (ShotPlan plan : plans) {
+      lifetimes.append(number("  %.1f nK ", plan.experiment().temperature().nanokelvin()));
+      lifetimes.append(
+          plan.statistics().map(s -> number("%.4g ms", s.meanLifetime().milliseconds()))
+              .orElse("none"));
+    }
+    line(text, "%s", lifetimes);
     text.append("\nHow good the reduction is, at the highest temperature\n");
     int fine = 0;
     for (Verdict verdict : hottest.verdicts()) {
@@ -36,11 +57,12 @@ final class Report {
     }
     line(text, "FINE     %d more checks", fine);
     text.append("\nChosen for speed\n");
-    line(text, "damping gamma = %.3g; kinetic theory of the thermal cloud gives %.1g. Rates at such"
-        + " small damping are lower,", scenario.damping(), hottest.bath().growthRate());
+    line(text, "damping gamma = %.3g; kinetic theory of the thermal cloud gives %.1g, hence the two"
+        + " damping verdicts OUTSIDE: the", hottest.damping(), ring.bath().growthRate());
+    line(text, "simulated bath is thousands of times faster than the real cloud. Rates at such small"
+        + " damping are lower,");
     line(text, "because the field thermalises slowly; read the rates below as those of a well"
         + " thermalised gas.");
-    line(text, "step dt = %.2g in units of t0, where the occupation bias is below 0.1 %%", RingDecay.STEP);
     return text.toString();
   }
 
@@ -48,24 +70,76 @@ final class Report {
     StringBuilder text = new StringBuilder();
     text.append("\nDecay of relative phase pi: first passage of the mean cosine through ")
         .append(RingDecay.THRESHOLD).append("\n\n");
-    line(text, "%6s %9s %6s  %16s %7s  %-27s %-27s",
-        "T/nK", "T/(g n x0 n)", "E_b/T", "decayed/censored", "early", "rate per second [95 %]",
+    line(text, "%6s %12s  %16s %7s  %-27s %-27s",
+        "T/nK", "T/(g n x0 n)", "decayed/censored", "early", "rate per second [95 %]",
         "rate per second and metre");
     for (DecayAtTemperature point : points) {
-      line(text, "%6.1f %12.5f %6.2f  %10d/%-6d %6d  %-27s %-27s",
-          point.temperature().kelvin() * 1e9, point.ring().temperature(),
-          point.barrierOverTemperature(), point.decays(), point.ends().size() - point.decays(),
-          point.earlyDecays(), point.rate().map(r -> perSecond(point, r, 1)).orElse("-"),
+      line(text, "%6.1f %12.5f  %9d/%-6d %7d  %-27s %-27s",
+          point.temperature().nanokelvin(), point.ring().temperature(), point.decays(),
+          point.ends().size() - point.decays(), point.earlyDecays(),
+          point.rate().map(r -> perSecond(point, r, 1)).orElse("-"),
           point.rate().map(r -> perSecond(point, r, circumference(point))).orElse("-"));
     }
     text.append('\n');
-    line(text, "E_b: closed form of the critical bubble at fixed density. The density responds and"
-        + " lowers the barrier (here by about a tenth).");
-    line(text, "early: decayed before the truncation time %.0f t0 (%.1f ms), left out of the rate (relaxation of the"
-        + " cold start and growth of the first bubble).",
-        points.get(0).truncation(),
-        points.get(0).ring().units().time(points.get(0).truncation()).milliseconds());
+    line(text, "early: decayed before the truncation time, left out of the rate.");
+    text.append("\nTheory and simulation\n\n");
+    line(text, "%6s %19s  %-28s %-27s %s", "T/nK", "E_b/T saddle closed",
+        "mean lifetime/ms, predicted", "simulated [95 %]", "rate simulated/predicted");
+    for (DecayAtTemperature point : points) {
+      line(text, "%6.1f %12s %6.2f  %-28s %-27s %s",
+          point.temperature().nanokelvin(),
+          point.plan().rate().map(r -> number("%.2f", r.barrierOverTemperature())).orElse("-"),
+          point.closedBarrierOverTemperature(), predicted(point),
+          point.countedRate().map(r -> lifetime(point, r)).orElse("-"),
+          ratio(point));
+    }
+    text.append('\n');
+    line(text, "E_b: the critical bubble of the full two-component field (saddle), and its closed"
+        + " form at fixed density, which is too high.");
+    line(text, "predicted: one-loop rate of the full saddle with the cutoff of this run; in brackets"
+        + " where a simulation is expected.");
+    points.get(0).plan().rate().ifPresent(
+        rate -> rate.remarks().forEach(remark -> line(text, "remark: %s", remark)));
     return text.append(slope(points)).append(plateau(points)).toString();
+  }
+
+  private static String predicted(DecayAtTemperature point) {
+    return point.plan().rate()
+        .map(
+            rate -> {
+              double milliseconds = 1e3 / rate.rate().perSecondPerMetreToD();
+              return number("%.4g", milliseconds) + " ["
+                  + number("%.4g", milliseconds / rate.highRatio()) + ", "
+                  + number("%.4g", milliseconds / rate.lowRatio()) + "]";
+            })
+        .or(() -> point.plan().refusal().map(refusal -> refusal.reason().toString()))
+        .orElse("-");
+  }
+
+  private static String lifetime(DecayAtTemperature point, RateEstimate rate) {
+    double unit = point.ring().units().time(1).milliseconds();
+    Interval interval = DecayAtTemperature.interval(rate);
+    return String.format(
+        Locale.ROOT, "%.4g [%.4g, %.4g]",
+        unit / rate.rate(), unit / interval.upper(), unit / interval.lower());
+  }
+
+  private static String ratio(DecayAtTemperature point) {
+    double expected = point.expectedRate();
+    return point.countedRate().filter(rate -> !Double.isNaN(expected))
+        .map(
+            rate -> {
+              Interval interval = DecayAtTemperature.interval(rate);
+              return String.format(
+                  Locale.ROOT, "%.2f [%.2f, %.2f]",
+                  rate.rate() / expected, interval.lower() / expected,
+                  interval.upper() / expected);
+            })
+        .orElse("-");
+  }
+
+  private static String number(String format, double value) {
+    return String.format(Locale.ROOT, format, value);
   }
 
   private static double circumference(DecayAtTemperature point) {
@@ -84,7 +158,7 @@ final class Report {
   static Optional<ArrheniusFit> fit(List<DecayAtTemperature> points) {
     List<ArrheniusFit.CountedRate> rates = new ArrayList<>();
     for (DecayAtTemperature point : points) {
-      point.rate().filter(rate -> rate.events() > 0).ifPresent(
+      point.countedRate().ifPresent(
           rate -> rates.add(
               new ArrheniusFit.CountedRate(point.ring().temperature(), rate)));
     }
@@ -93,17 +167,25 @@ final class Report {
 
   private static String slope(List<DecayAtTemperature> points) {
     DecayAtTemperature first = points.get(0);
-    double closed = first.barrierOverTemperature() * first.ring().temperature();
+    double t = first.ring().temperature();
+    double closed = first.closedBarrierOverTemperature() * t;
+    double saddle = first.barrierOverTemperature() * t;
     return fit(points)
         .map(
             fit -> {
+              double slope = fit.barrier().value();
               Interval interval = fit.barrierInterval(DecayAtTemperature.LEVEL);
+              String against =
+                  Double.isNaN(saddle)
+                      ? ""
+                      : String.format(
+                          Locale.ROOT, "; full saddle E_b = %.3f, ratio %.2f [%.2f, %.2f]", saddle,
+                          slope / saddle, interval.lower() / saddle, interval.upper() / saddle);
               return String.format(
                   Locale.ROOT,
-                  "%n  slope of ln(rate) against 1/T: B = %.3f [%.3f, %.3f] scaled; closed form E_b"
-                      + " = %.3f, ratio %.2f%n",
-                  fit.barrier().value(), interval.lower(), interval.upper(), closed,
-                  fit.barrier().value() / closed);
+                  "%n  slope of ln(rate) against 1/T: B = %.3f [%.3f, %.3f] scaled%s; closed form"
+                      + " E_b = %.3f, ratio %.2f%n",
+                  slope, interval.lower(), interval.upper(), against, closed, slope / closed);
             })
         .orElse("\n  slope of ln(rate) against 1/T: needs decays at two temperatures or more\n");
   }
@@ -120,7 +202,7 @@ final class Report {
                   String.format(
                       Locale.ROOT, "  %.0f: %.3e(%.0e)",
                       r.truncationTime(), r.rate().rate(), r.rate().standardError()))));
-      line(text, "%5.1f nK%s", point.temperature().kelvin() * 1e9,
+      line(text, "%5.1f nK%s", point.temperature().nanokelvin(),
           scan.isPresent() ? row : "  no trajectory outlived the largest truncation time");
     }
     return text.toString();

@@ -21,8 +21,9 @@ final class ResultFiles {
     List<CsvColumn> columns =
         List.of(
             CsvColumn.of("temperature", "nK"), CsvColumn.of("temperature_scaled", "g n n x0"),
-            CsvColumn.of("barrier_over_temperature"), CsvColumn.of("decays"),
-            CsvColumn.of("exposure", "t0"), CsvColumn.of("rate", "1/s"),
+            CsvColumn.of("barrier_over_temperature"),
+            CsvColumn.of("closed_barrier_over_temperature"), CsvColumn.of("expected_rate", "1/s"),
+            CsvColumn.of("decays"), CsvColumn.of("exposure", "t0"), CsvColumn.of("rate", "1/s"),
             CsvColumn.of("rate_low", "1/s"), CsvColumn.of("rate_high", "1/s"));
     try (CsvWriter csv = CsvWriter.create(folder.resolve("rates.csv"), columns)) {
       for (DecayAtTemperature point : points) {
@@ -31,8 +32,9 @@ final class ResultFiles {
           Interval interval = DecayAtTemperature.interval(rate);
           double perSecond = 1 / point.ring().units().time(1).seconds();
           csv.row(
-              point.temperature().kelvin() * 1e9, point.ring().temperature(),
-              point.barrierOverTemperature(), rate.events(), rate.exposure(),
+              point.temperature().nanokelvin(), point.ring().temperature(),
+              point.barrierOverTemperature(), point.closedBarrierOverTemperature(),
+              point.expectedRate() * perSecond, rate.events(), rate.exposure(),
               rate.rate() * perSecond, interval.lower() * perSecond,
               interval.upper() * perSecond);
         }
@@ -98,7 +100,7 @@ final class ResultFiles {
   }
 
   static String label(DecayAtTemperature point) {
-    return String.format(Locale.ROOT, "%.1fnK", point.temperature().kelvin() * 1e9)
+    return String.format(Locale.ROOT, "%.1fnK", point.temperature().nanokelvin())
         .replace('.', 'p');
   }
 }

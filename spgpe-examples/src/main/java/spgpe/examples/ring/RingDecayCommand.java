@@ -18,6 +18,8 @@ import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
 import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Spec;
+import spgpe.examples.scenario.RingScenario;
+import spgpe.planning.ShotPlan;
 import spgpe.run.TimeSeries;
 import spgpe.units.Temperature;
 import spgpe.units.TimeSpan;
@@ -40,7 +42,7 @@ public final class RingDecayCommand implements Callable<Integer> {
       split = ",",
       paramLabel = "NK",
       description = "temperatures in nK, comma-separated, 10 to 60 (default: ${DEFAULT-VALUE})",
-      defaultValue = "27,30,33")
+      defaultValue = "24,27,30")
   private List<Double> temperatures = new ArrayList<>();
 
   @Option(
@@ -56,7 +58,7 @@ public final class RingDecayCommand implements Callable<Integer> {
       description =
           "time after which a trajectory is censored, in ms, 50 to 100000 (default:"
               + " ${DEFAULT-VALUE})",
-      defaultValue = "600")
+      defaultValue = "1000")
   private double until;
 
   @Option(
@@ -131,15 +133,13 @@ public final class RingDecayCommand implements Callable<Integer> {
     PrintWriter text = spec.commandLine().getOut();
     List<Temperature> sorted =
         temperatures.stream().sorted().map(Temperature::ofNanokelvin).toList();
-    RingScenario scenario = new RingScenario(damping, TimeSpan.ofMilliseconds(until));
-    int cutoff = RingDecay.cutoffModes(scenario, sorted);
-    Temperature hottest = sorted.get(sorted.size() - 1);
-    text.println(Report.setUp(scenario, scenario.at(hottest), cutoff));
+    List<ShotPlan> plans = plans(sorted);
+    ShotPlan hottest = plans.get(plans.size() - 1);
+    text.println(Report.setUp(RingScenario.invented(), plans));
     text.flush();
-    double scaledUntil = scenario.at(hottest).units().toScaled(TimeSpan.ofMilliseconds(until));
-    RingDecay simulation =
-        new RingDecay(scenario, seed, trajectories, Math.ceil(scaledUntil), cutoff);
-    List<DecayAtTemperature> points = runAll(simulation, sorted);
+    double scaledUntil = hottest.ring().units().toScaled(TimeSpan.ofMilliseconds(until));
+    RingDecay simulation = new RingDecay(seed, trajectories, Math.ceil(scaledUntil));
+    List<DecayAtTemperature> points = runAll(simulation, plans);
     text.println(Report.table(points));
     text.flush();
     write(simulation, points);
@@ -150,17 +150,26 @@ public final class RingDecayCommand implements Callable<Integer> {
     return 0;
   }
 
-  private List<DecayAtTemperature> runAll(RingDecay simulation, List<Temperature> sorted) {
+  /** One plan for each temperature, all with the modes of the hottest, so that rates compare. */
+  private List<ShotPlan> plans(List<Temperature> sorted) {
+    Temperature hottest = sorted.get(sorted.size() - 1);
+    ShotPlan plan =
+        ShotPlan.of(
+            RingScenario.invented().at(hottest), damping, TimeSpan.ofMilliseconds(until));
+    return sorted.stream().map(plan::withTemperature).toList();
+  }
+
+  private List<DecayAtTemperature> runAll(RingDecay simulation, List<ShotPlan> plans) {
     int count = threads == 0 ? Runtime.getRuntime().availableProcessors() : threads;
     ExecutorService executor = Executors.newFixedThreadPool(count);
     try {
       List<DecayAtTemperature> points = new ArrayList<>();
-      for (int i = 0; i < sorted.size(); i++) {
-        Temperature temperature = sorted.get(i);
-        String label = String.format(Locale.ROOT, "%.1f nK", temperature.kelvin() * 1e9);
+      for (int i = 0; i < plans.size(); i++) {
+        double nanokelvin = plans.get(i).experiment().temperature().nanokelvin();
+        String label = String.format(Locale.ROOT, "%.1f nK", nanokelvin);
         points.add(
             simulation.run(
-                i, temperature, executor,
+                i, plans.get(i), executor,
                 new ConsoleProgress(System.err, label, System.console() != null)));
       }
       return points;

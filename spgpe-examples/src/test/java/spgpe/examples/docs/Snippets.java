@@ -12,6 +12,9 @@ import spgpe.integrate.OuRk4;
 import spgpe.model.Model;
 import spgpe.observables.FirstPassage;
 import spgpe.observables.phase.RelativePhase;
+import spgpe.planning.ExpectedRate;
+import spgpe.planning.ShotPlan;
+import spgpe.planning.ShotStatistics;
 import spgpe.projector.Amplitudes;
 import spgpe.projector.CoherentRegion;
 import spgpe.projector.PointBlock;
@@ -78,6 +81,30 @@ final class Snippets {
     EventRate rate = ring.units().ratePerVolume(3.2e-5); // bubbles per second and metre
     // snippet-end
     return new double[] {verdicts.size(), lab.seconds(), rate.perSecondPerMetreToD()};
+  }
+
+  static double[] shotPlan() {
+    // snippet-begin shot-plan
+    Energy j = Energy.ofHertz(40);
+    Density n = Density.perMetre(2500 / 62.83185e-6);
+    RingExperiment lab =
+        RingExperiment.of(
+                Species.K_41, Geometry.ring(Length.ofMicrometres(10)), Frequency.ofKilohertz(1.5),
+                2500, Length.ofBohrRadii(65.42), Temperature.ofNanokelvin(27))
+            .withCoherentCoupling(j)
+            .withBiquadratic(CoupledPair.biquadraticFor(2.2, j, n));
+    ShotPlan plan = ShotPlan.of(lab, 0.1, TimeSpan.ofMilliseconds(600)); // damping, atom loss
+    ExpectedRate rate = plan.rate().orElseThrow(); // or plan.refusal() says why there is none
+    ShotStatistics shots = plan.statistics().orElseThrow();
+    double fraction = shots.decayedFraction(); // 0.775 of the shots decay
+    double needed = shots.shotsFor(0.1); // 130 shots give the rate to 10 percent
+    ShotPlan slower = plan.forLifetimeByTemperature(TimeSpan.ofSeconds(2)); // 23.5 nK
+    Model model = plan.model(); // ready to be run with plan.settings()
+    // snippet-end
+    return new double[] {
+      fraction, needed, slower.experiment().temperature().nanokelvin(),
+      rate.barrierOverTemperature(), model.components()
+    };
   }
 
   static double[] ownEnsemble(Executor executor) {

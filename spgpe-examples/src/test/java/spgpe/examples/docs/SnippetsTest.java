@@ -51,6 +51,16 @@ class SnippetsTest {
   }
 
   @Test
+  void shotPlanGivesTheNumbersOfThePage() {
+    double[] numbers = Snippets.shotPlan();
+    assertEquals(0.775, numbers[0], 5e-4, "fraction");
+    assertEquals(130, numbers[1], "shots");
+    assertEquals(23.45, numbers[2], 0.05, "temperature in nK");
+    assertEquals(11.06, numbers[3], 0.005, "E_b/T");
+    assertEquals(2, numbers[4], "components");
+  }
+
+  @Test
   void documentsShowTheCodeOfTheSources() throws IOException {
     Map<String, String> regions = new HashMap<>();
     for (Path source : files(SOURCES, ".java")) {

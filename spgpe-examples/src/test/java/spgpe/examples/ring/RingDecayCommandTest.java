@@ -70,6 +70,9 @@ class RingDecayCommandTest {
     assertEquals(0, outcome.code(), outcome.err());
     assertTrue(outcome.out().contains("rate per second"), outcome.out());
     assertTrue(outcome.out().contains("Chosen for speed"), outcome.out());
+    assertTrue(outcome.out().contains("mean lifetime/ms, predicted"), outcome.out());
+    // at 40 nK the barrier is 7.5 T in the full saddle and 8.7 T in closed form
+    assertTrue(outcome.out().contains("7.47   8.67"), outcome.out());
     for (String name :
         List.of("space-time.png", "survival.png", "rates.png", "rates.csv", "curves.npz")) {
       assertTrue(Files.size(folder.resolve("a").resolve(name)) > 0, name);

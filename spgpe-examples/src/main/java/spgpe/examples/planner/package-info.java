@@ -1,0 +1,5 @@
+/** The shot planner as a command. */
+@NullMarked
+package spgpe.examples.planner;
+
+import org.jspecify.annotations.NullMarked;
