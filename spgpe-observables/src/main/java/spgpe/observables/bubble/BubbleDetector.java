@@ -6,8 +6,8 @@ import spgpe.run.TimeSeries;
 
 /**
  * Finds and follows bubbles of the stable state on a ring, in frames of an order parameter such as
- * the profile of cos phi. Bubbles are counted by births in single frames, not as connected pieces of
- * space-time, in which bubbles that merge later would be one.
+ * the profile of cos phi. Bubbles are counted by births in single frames, not as connected pieces
+ * of space-time, in which bubbles that merge later would be one.
  *
  * <p>Frames should follow each other so closely that a bubble overlaps itself: interval times speed
  * below the width. Immutable and thread-safe.

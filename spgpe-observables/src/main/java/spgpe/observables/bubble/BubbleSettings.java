@@ -31,8 +31,8 @@ public record BubbleSettings(
   /**
    * Checks the numbers.
    *
-   * @throws IllegalArgumentException if a number is not finite, a length or time is negative, or the
-   *     grow level exceeds another level
+   * @throws IllegalArgumentException if a number is not finite, a length or time is negative, or
+   *     the grow level exceeds another level
    */
   public BubbleSettings {
     Check.notNegative(smoothing, "smoothing (length)");
@@ -60,9 +60,9 @@ public record BubbleSettings(
   }
 
   /**
-   * Settings for cos phi derived from the metastable state. With the phase length xi, the mean c and
-   * the deviation s of the smoothed cos phi: smoothing 0.75 xi, grow level c + 5 s, seed and wall
-   * level half way to the stable state, (c + 1)/2, minimum width 2 xi, no minimum duration.
+   * Settings for cos phi derived from the metastable state. With the phase length xi, the mean c
+   * and the deviation s of the smoothed cos phi: smoothing 0.75 xi, grow level c + 5 s, seed and
+   * wall level half way to the stable state, (c + 1)/2, minimum width 2 xi, no minimum duration.
    *
    * @param fluctuations fluctuations before the decay
    * @return the settings

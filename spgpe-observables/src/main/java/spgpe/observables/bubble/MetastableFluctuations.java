@@ -81,7 +81,8 @@ public final class MetastableFluctuations {
         average.size(), 2 * half);
     Check.argument(
         average.samples() > 0,
-        "no sample lies in the metastable state: %s; start earlier or use a shorter margin", average);
+        "no sample lies in the metastable state: %s; start earlier or use a shorter margin",
+        average);
     double mean = average.mean(half - 1);
     double[] covariance = new double[points / 2 + 1];
     for (int r = 0; r < covariance.length; r++) {

@@ -3,9 +3,9 @@ package spgpe.observables.bubble;
 import spgpe.internal.check.Check;
 
 /**
- * Positions of the two walls of a bubble in time, on the unrolled ring: left &lt; right, and positions
- * leave [0, L) when a wall crosses the seam. Frames in which the bubble does not reach the wall level
- * are missing. Immutable and thread-safe.
+ * Positions of the two walls of a bubble in time, on the unrolled ring: left &lt; right, and
+ * positions leave [0, L) when a wall crosses the seam. Frames in which the bubble does not reach
+ * the wall level are missing. Immutable and thread-safe.
  */
 public final class WallTrack {
   private final double[] times;

@@ -103,8 +103,9 @@ public final class CorrelationFunction {
   }
 
   /**
-   * Distance over which a field of the kept modes can change, L/(2 n_max + 1). Points of a finer grid
-   * are interpolations of each other: their covariance is nearly singular, and fits leave them out.
+   * Distance over which a field of the kept modes can change, L/(2 n_max + 1). Points of a finer
+   * grid are interpolations of each other: their covariance is nearly singular, and fits leave them
+   * out.
    *
    * @return resolution; 0 if every distance counts
    */

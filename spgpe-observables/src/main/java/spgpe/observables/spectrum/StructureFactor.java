@@ -13,14 +13,16 @@ import spgpe.run.Snapshot;
 /**
  * Static structure factor of a density-like profile A,
  *
- * <pre>S(k) = ( &lt;|A_k|^2&gt; - |&lt;A_k&gt;|^2 delta_k0 ) / &lt;N&gt;,   A_k = integral of A exp(-ikx),</pre>
+ * <pre>S(k) = ( &lt;|A_k|^2&gt; - |&lt;A_k&gt;|^2 delta_k0 ) / &lt;N&gt;,
+ * A_k = integral of A exp(-ikx),</pre>
  *
- * <p>at k = 2 pi n/L, n = 0..floor(N/2). In a uniform system &lt;A_k&gt; = 0 for k not 0; S(0) is the
- * variance of the number over its mean. A_k of a density contains all pairs of modes: it is free of
- * aliasing for |n| &le; N - 1 - 2 n_max. Measures |A_k|<sup>2</sup>, then A_0 and N. Immutable and
- * thread-safe. Line grids only.
+ * <p>at k = 2 pi n/L, n = 0..floor(N/2). In a uniform system &lt;A_k&gt; = 0 for k not 0; S(0) is
+ * the variance of the number over its mean. A_k of a density contains all pairs of modes: it is
+ * free of aliasing for |n| &le; N - 1 - 2 n_max. Measures |A_k|<sup>2</sup>, then A_0 and N.
+ * Immutable and thread-safe. Line grids only.
  */
 public final class StructureFactor implements Observable {
+  @SuppressWarnings("ArrayRecordComponent") // compared by nobody
   private record Scratch(RingCorrelator ring, double[] number) {}
 
   private final Observable profile;
