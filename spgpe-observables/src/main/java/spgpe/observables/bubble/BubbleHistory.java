@@ -21,7 +21,16 @@ public record BubbleHistory(
     int frames,
     List<Bubble> bubbles,
     List<BubbleEvent> events) {
-  /** Takes copies of the lists. */
+  /**
+   * Takes copies of the lists.
+   *
+   * @param trajectory index of the trajectory
+   * @param endTime time at which it ended
+   * @param settings settings of the detector, derived or given
+   * @param frames number of frames looked at
+   * @param bubbles all bubbles in the order of birth, accepted or not
+   * @param events all events in the order of time
+   */
   public BubbleHistory {
     bubbles = List.copyOf(bubbles);
     events = List.copyOf(events);

@@ -31,6 +31,13 @@ public record BubbleSettings(
   /**
    * Checks the numbers.
    *
+   * @param smoothing standard deviation of the Gaussian that smooths each frame, a length
+   * @param seedLevel a region must exceed this somewhere to become a bubble
+   * @param growLevel a bubble is the whole region above this level
+   * @param wallLevel level at which the positions of the walls are read
+   * @param minimumWidth width a bubble must reach to be accepted, a length
+   * @param minimumDuration time a bubble must live to be accepted
+   * @param origin where the numbers come from
    * @throws IllegalArgumentException if a number is not finite, a length or time is negative, or
    *     the grow level exceeds another level
    */
