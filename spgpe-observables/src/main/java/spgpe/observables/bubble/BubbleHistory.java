@@ -32,8 +32,8 @@ public record BubbleHistory(
    * @param events all events in the order of time
    */
   public BubbleHistory {
-    bubbles = List.copyOf(bubbles);
-    events = List.copyOf(events);
+    bubbles = List.copyOf(Check.notNull(bubbles, "bubbles"));
+    events = List.copyOf(Check.notNull(events, "events"));
   }
 
   /**
@@ -63,6 +63,7 @@ public record BubbleHistory(
    * @return number of births at each of the times
    */
   public int[] birthsAt(double[] times) {
+    Check.notNull(times, "times");
     int[] births = new int[times.length];
     for (Bubble bubble : bubbles) {
       int frame = java.util.Arrays.binarySearch(times, bubble.birthTime());

@@ -73,6 +73,8 @@ public final class MetastableFluctuations {
    * @throws IllegalArgumentException if the average is of something else or holds no sample
    */
   public static MetastableFluctuations of(TimeAverage average, Model model) {
+    Check.notNull(average, "average");
+    Check.notNull(model, "model");
     int points = model.region().grid().points();
     int half = points / 2 + 3;
     Check.argument(

@@ -29,6 +29,9 @@ public final class WallTrack {
    *     not increase
    */
   public static WallTrack of(double[] times, double[] left, double[] right) {
+    Check.notNull(times, "times");
+    Check.notNull(left, "left");
+    Check.notNull(right, "right");
     Check.argument(
         times.length == left.length && times.length == right.length,
         "times and positions must be as many: times=%s, left=%s, right=%s",

@@ -31,6 +31,7 @@ public final class CorrelationFunction {
    * @throws IllegalArgumentException if lengths differ or the distances do not increase
    */
   public static CorrelationFunction of(double[] distances, Estimates estimates, double period) {
+    Check.notNull(distances, "distances");
     Check.notNull(estimates, "estimates");
     Check.argument(
         distances.length == estimates.size(),

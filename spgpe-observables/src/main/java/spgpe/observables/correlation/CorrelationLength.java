@@ -111,7 +111,7 @@ public record CorrelationLength(
   }
 
   private static CurveFit.Curve ringCurve(CorrelationFunction correlation) {
-    double period = correlation.period();
+    double period = Check.notNull(correlation, "correlation").period();
     Check.argument(
         Double.isFinite(period), "a hyperbolic cosine needs a ring: period=%s", period);
     return (x, p, gradient) -> ringCurve(x, p, gradient, period);

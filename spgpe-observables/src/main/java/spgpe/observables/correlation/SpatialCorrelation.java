@@ -224,7 +224,7 @@ public final class SpatialCorrelation implements Observable {
    * @return new array 0, dx, ..., floor(N/2) dx
    */
   public double[] distances(Model model) {
-    double[] r = new double[distanceCount(model)];
+    double[] r = new double[distanceCount(Check.notNull(model, "model"))];
     for (int i = 0; i < r.length; i++) {
       r[i] = model.region().grid().axis(0).position(i);
     }
@@ -245,7 +245,7 @@ public final class SpatialCorrelation implements Observable {
    * @throws IllegalStateException with fewer than two trajectories
    */
   public CorrelationFunction raw(TimeAverage average, Model model) {
-    int count = distanceCount(model);
+    int count = distanceCount(Check.notNull(model, "model"));
     return derived(average, model, v -> java.util.Arrays.copyOf(v, count));
   }
 
@@ -261,7 +261,7 @@ public final class SpatialCorrelation implements Observable {
    */
   public CorrelationFunction connected(TimeAverage average, Model model) {
     requireReal();
-    int count = distanceCount(model);
+    int count = distanceCount(Check.notNull(model, "model"));
     return derived(
         average, model,
         v -> {
@@ -283,7 +283,7 @@ public final class SpatialCorrelation implements Observable {
    * @throws IllegalStateException with fewer than two trajectories
    */
   public CorrelationFunction relativeToZero(TimeAverage average, Model model) {
-    int count = distanceCount(model);
+    int count = distanceCount(Check.notNull(model, "model"));
     return derived(average, model, v -> quotients(v, count, v[0]));
   }
 
@@ -299,7 +299,7 @@ public final class SpatialCorrelation implements Observable {
    */
   public CorrelationFunction relativeToMeans(TimeAverage average, Model model) {
     requireReal();
-    int count = distanceCount(model);
+    int count = distanceCount(Check.notNull(model, "model"));
     return derived(average, model, v -> quotients(v, count, v[count] * v[count + 1]));
   }
 
@@ -320,6 +320,7 @@ public final class SpatialCorrelation implements Observable {
 
   private CorrelationFunction derived(
       TimeAverage average, Model model, UnaryOperator<double[]> function) {
+    Check.notNull(average, "average");
     Check.argument(
         average.size() == size(model),
         "the average must be of this correlation: correlation=\"%s\", numbers=%s, numbers of the"

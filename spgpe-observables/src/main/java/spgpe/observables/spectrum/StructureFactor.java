@@ -118,6 +118,7 @@ public final class StructureFactor implements Observable {
    * @return new array 0, 2 pi/L, ...
    */
   public double[] waveNumbers(Model model) {
+    Check.notNull(model, "model");
     double[] k = new double[model.region().grid().points() / 2 + 1];
     for (int n = 0; n < k.length; n++) {
       k[n] = model.region().grid().axis(0).waveNumber(n);
@@ -133,7 +134,7 @@ public final class StructureFactor implements Observable {
    * @throws IllegalStateException with fewer than two trajectories
    */
   public Estimates values(TimeAverage average) {
-    int count = average.size() - 2;
+    int count = Check.notNull(average, "average").size() - 2;
     Check.argument(
         count >= 2, "the average must be of a structure factor: numbers=%s", average.size());
     return average.derivedVector(

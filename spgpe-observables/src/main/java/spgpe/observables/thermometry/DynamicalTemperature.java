@@ -92,6 +92,7 @@ public final class DynamicalTemperature {
    * @throws IllegalStateException with fewer than two trajectories
    */
   public static Measured temperature(TimeAverage average) {
+    Check.notNull(average, "average");
     Check.argument(
         average.size() == 1 || average.size() == 2,
         "the average must be of inverse temperatures: numbers=%s", average.size());
@@ -125,6 +126,7 @@ public final class DynamicalTemperature {
   }
 
   private static void requireTwo(TimeAverage average) {
+    Check.notNull(average, "average");
     Check.argument(
         average.size() == 2, "the average must have two numbers: numbers=%s", average.size());
   }

@@ -63,6 +63,7 @@ public final class Equipartition implements Observable {
    *     holds no mode
    */
   public static Equipartition inBands(double... edges) {
+    Check.notNull(edges, "edges");
     Check.argument(edges.length >= 2, "bands need at least two edges: edges=%s", edges.length);
     for (int i = 0; i < edges.length; i++) {
       Check.notNegative(edges[i], "band edge (wave number)");
@@ -233,6 +234,7 @@ public final class Equipartition implements Observable {
   }
 
   private void require(TimeAverage average) {
+    Check.notNull(average, "average");
     Check.argument(
         average.size() == 3 * bands(),
         "the average must be of this equipartition: numbers=%s, numbers of the average=%s",

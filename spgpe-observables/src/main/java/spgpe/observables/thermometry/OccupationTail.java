@@ -49,7 +49,8 @@ public record OccupationTail(
    */
   public static OccupationTail fit(
       Model model, int component, TimeAverage occupations, double from, double to) {
-    CoherentRegion region = model.region();
+    Check.notNull(occupations, "occupations");
+    CoherentRegion region = Check.notNull(model, "model").region();
     Check.inRange(component, 0, model.components() - 1, "component");
     Check.argument(
         occupations.size() == region.modes(),
