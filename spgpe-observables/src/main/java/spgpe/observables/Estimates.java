@@ -33,6 +33,7 @@ public final class Estimates {
         covariance.length, values.length);
     double[][] copy = new double[values.length][];
     for (int i = 0; i < values.length; i++) {
+      Check.notNull(covariance[i], "row of the covariance");
       Check.finite(values[i], "value");
       Check.argument(
           covariance[i].length == values.length,

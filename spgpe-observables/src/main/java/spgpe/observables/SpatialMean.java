@@ -6,8 +6,8 @@ import spgpe.run.Observable;
 import spgpe.run.Snapshot;
 
 /**
- * Spatial mean of profiles: (1/V) integral of f(r), the plain mean over the grid points. Exact for a
- * polynomial in the fields as long as its products do not alias.
+ * Spatial mean of profiles: (1/V) integral of f(r), the plain mean over the grid points. Exact for
+ * a polynomial in the fields as long as its products do not alias.
  *
  * <p>Immutable and thread-safe.
  */

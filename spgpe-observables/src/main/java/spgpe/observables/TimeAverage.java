@@ -189,8 +189,8 @@ public final class TimeAverage implements Accumulator<TimeAverage> {
   }
 
   /**
-   * Variance of single samples about the average, pooled over time and trajectories: the size of the
-   * fluctuations, not of the error.
+   * Variance of single samples about the average, pooled over time and trajectories: the size of
+   * the fluctuations, not of the error.
    *
    * @param i index of the number
    * @return variance (divisor n-1); NaN with fewer than two samples

@@ -142,7 +142,8 @@ class TimeAverageTest {
     assertEquals(0, ratio.standardError(), 1e-6); // derivatives are differences
     Measured product = sum.derived(v -> v[0] * v[1]);
     // d(2 x^2) = 4 x dx
-    assertEquals(12 * sum.standardError(0), product.standardError(), 1e-3 * product.standardError());
+    double expected = 12 * sum.standardError(0);
+    assertEquals(expected, product.standardError(), 1e-3 * expected);
   }
 
   @Test

@@ -3,12 +3,13 @@ package spgpe.internal.measure;
 import org.jspecify.annotations.Nullable;
 
 /**
- * Mean of a vector over samples that come in independent clusters (trajectories) of different sizes,
- * with the covariance of that mean across the clusters.
+ * Mean of a vector over samples that come in independent clusters (trajectories) of different
+ * sizes, with the covariance of that mean across the clusters.
  *
  * <p>With n_i samples of mean x_i in cluster i: m = sum n_i x_i / sum n_i, and (ratio estimator,
- * linearised) Cov m = N/(N-1) sum n_i^2 (x_i - m)(x_i - m)^T / (sum n_i)^2. The sums are kept centred
- * on the current mean and shifted when two sets are merged, so nothing large cancels. Immutable.
+ * linearised) Cov m = N/(N-1) sum n_i^2 (x_i - m)(x_i - m)^T / (sum n_i)^2. The sums are kept
+ * centred on the current mean and shifted when two sets are merged, so nothing large cancels.
+ * Immutable.
  */
 public final class ClusterMoments {
   private final long clusters;

@@ -11,12 +11,12 @@ import spgpe.projector.ModeTransform;
 import spgpe.projector.PointBlock;
 
 /**
- * First and second derivatives of K at a state. Vectors of real phase space (q, p), a = (q + ip)/sqrt
- * 2, are represented by complex amplitudes; the gradient of K is then F = dK/da^*, that of N is a,
- * and the inner product is 2 Re sum u^* v. Owns scratch memory: one thread at a time.
+ * First and second derivatives of K at a state. Vectors of real phase space (q, p), a = (q +
+ * ip)/sqrt 2, are represented by complex amplitudes; the gradient of K is then F = dK/da^*, that of
+ * N is a, and the inner product is 2 Re sum u^* v. Owns scratch memory: one thread at a time.
  *
- * <p>Second derivatives are differences with one Richardson step: exact to rounding for forces up to
- * third degree, and to 1e-11 for the fifth.
+ * <p>Second derivatives are differences with one Richardson step: exact to rounding for forces up
+ * to third degree, and to 1e-11 for the fifth.
  */
 public final class CurvatureMeter {
   private static final double STEP = 1e-3;
@@ -144,8 +144,8 @@ public final class CurvatureMeter {
   }
 
   /**
-   * Trace of the Hessian in (q, p): 2 sum over modes and components of d^2K/da da^*. A local force f
-   * contributes (modes/V) integral of df_j/dpsi_j for each component.
+   * Trace of the Hessian in (q, p): 2 sum over modes and components of d^2K/da da^*. A local force
+   * f contributes (modes/V) integral of df_j/dpsi_j for each component.
    *
    * @return the trace
    */
@@ -176,10 +176,13 @@ public final class CurvatureMeter {
 
   /** Spatial mean of the derivative of f_c with respect to one quadrature of psi_c. */
   private double meanSlope(double[] quadrature, int component, boolean real, double h) {
-    double near = forceSum(quadrature, component, real, h) - forceSum(quadrature, component, real, -h);
-    double far =
-        forceSum(quadrature, component, real, 2 * h) - forceSum(quadrature, component, real, -2 * h);
+    double near = forceDifference(quadrature, component, real, h);
+    double far = forceDifference(quadrature, component, real, 2 * h);
     return (4 * near / (2 * h) - far / (4 * h)) / 3 / quadrature.length;
+  }
+
+  private double forceDifference(double[] quadrature, int component, boolean real, double h) {
+    return forceSum(quadrature, component, real, h) - forceSum(quadrature, component, real, -h);
   }
 
   private double forceSum(double[] quadrature, int component, boolean real, double shift) {

@@ -77,8 +77,9 @@ public final class CurveFit {
   }
 
   /**
-   * Least squares with the inverse variances as weights; the errors of the parameters take the whole
-   * covariance into account: H J^T C J H with H = (J^T J)^-1, all in units of the single errors.
+   * Least squares with the inverse variances as weights; the errors of the parameters take the
+   * whole covariance into account: H J^T C J H with H = (J^T J)^-1, all in units of the single
+   * errors.
    *
    * @param x positions
    * @param y values

@@ -4,8 +4,8 @@ import java.util.ArrayDeque;
 import java.util.Deque;
 
 /**
- * Passes on the samples of a trajectory that lie in a window of time: not before the start, and more
- * than a margin before the end of the trajectory. Samples wait until the margin is over.
+ * Passes on the samples of a trajectory that lie in a window of time: not before the start, and
+ * more than a margin before the end of the trajectory. Samples wait until the margin is over.
  */
 public final class SampleWindow {
   /** Receives the samples that count, in time order. */
@@ -22,6 +22,7 @@ public final class SampleWindow {
 
   private static final double TIME_TOLERANCE = 1e-9;
 
+  @SuppressWarnings("ArrayRecordComponent") // compared by nobody
   private record Waiting(int sample, double[] values) {}
 
   private final double[] times;

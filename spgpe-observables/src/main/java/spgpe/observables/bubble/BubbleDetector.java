@@ -6,8 +6,8 @@ import spgpe.run.TimeSeries;
 
 /**
  * Finds and follows bubbles of the stable state on a ring, in frames of an order parameter such as
- * the profile of cos phi. Bubbles are counted by births in single frames, not as connected pieces of
- * space-time, in which bubbles that merge later would be one.
+ * the profile of cos phi. Bubbles are counted by births in single frames, not as connected pieces
+ * of space-time, in which bubbles that merge later would be one.
  *
  * <p>Frames should follow each other so closely that a bubble overlaps itself: interval times speed
  * below the width. Immutable and thread-safe.
@@ -49,6 +49,8 @@ public final class BubbleDetector {
    *     hold a number that is not finite, or the times do not increase
    */
   public BubbleHistory find(double[] times, double[][] frames, double length) {
+    Check.notNull(times, "times");
+    Check.notNull(frames, "frames");
     return track(times, frames, length, 0, times.length == 0 ? 0 : times[times.length - 1]);
   }
 
@@ -61,6 +63,7 @@ public final class BubbleDetector {
    * @throws IllegalArgumentException if the series is empty or not of finite profiles
    */
   public BubbleHistory find(TimeSeries.Series series, double length) {
+    Check.notNull(series, "series");
     return track(
         series.times(), series.values(), length, series.end().trajectory(), series.end().time());
   }
@@ -72,11 +75,13 @@ public final class BubbleDetector {
         times.length == frames.length && times.length > 0,
         "there must be a frame for each time, and at least one: times=%s, frames=%s",
         times.length, frames.length);
+    Check.notNull(frames[0], "frames[0]");
     BubbleTracker tracker = new BubbleTracker(settings, frames[0].length, length);
     for (int s = 0; s < times.length; s++) {
       Check.argument(
           Double.isFinite(times[s]) && (s == 0 || times[s] > times[s - 1]),
           "times must be finite and increase: times[%s]=%s", s, times[s]);
+      Check.notNull(frames[s], "frames[" + s + "]");
       Check.argument(
           frames[s].length == frames[0].length,
           "frames must be as long: frames[0]=%s points, frames[%s]=%s points",

@@ -21,10 +21,19 @@ public record BubbleHistory(
     int frames,
     List<Bubble> bubbles,
     List<BubbleEvent> events) {
-  /** Takes copies of the lists. */
+  /**
+   * Takes copies of the lists.
+   *
+   * @param trajectory index of the trajectory
+   * @param endTime time at which it ended
+   * @param settings settings of the detector, derived or given
+   * @param frames number of frames looked at
+   * @param bubbles all bubbles in the order of birth, accepted or not
+   * @param events all events in the order of time
+   */
   public BubbleHistory {
-    bubbles = List.copyOf(bubbles);
-    events = List.copyOf(events);
+    bubbles = List.copyOf(Check.notNull(bubbles, "bubbles"));
+    events = List.copyOf(Check.notNull(events, "events"));
   }
 
   /**
@@ -54,6 +63,7 @@ public record BubbleHistory(
    * @return number of births at each of the times
    */
   public int[] birthsAt(double[] times) {
+    Check.notNull(times, "times");
     int[] births = new int[times.length];
     for (Bubble bubble : bubbles) {
       int frame = java.util.Arrays.binarySearch(times, bubble.birthTime());

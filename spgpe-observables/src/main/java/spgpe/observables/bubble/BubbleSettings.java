@@ -31,8 +31,15 @@ public record BubbleSettings(
   /**
    * Checks the numbers.
    *
-   * @throws IllegalArgumentException if a number is not finite, a length or time is negative, or the
-   *     grow level exceeds another level
+   * @param smoothing standard deviation of the Gaussian that smooths each frame, a length
+   * @param seedLevel a region must exceed this somewhere to become a bubble
+   * @param growLevel a bubble is the whole region above this level
+   * @param wallLevel level at which the positions of the walls are read
+   * @param minimumWidth width a bubble must reach to be accepted, a length
+   * @param minimumDuration time a bubble must live to be accepted
+   * @param origin where the numbers come from
+   * @throws IllegalArgumentException if a number is not finite, a length or time is negative, or
+   *     the grow level exceeds another level
    */
   public BubbleSettings {
     Check.notNegative(smoothing, "smoothing (length)");
@@ -60,9 +67,9 @@ public record BubbleSettings(
   }
 
   /**
-   * Settings for cos phi derived from the metastable state. With the phase length xi, the mean c and
-   * the deviation s of the smoothed cos phi: smoothing 0.75 xi, grow level c + 5 s, seed and wall
-   * level half way to the stable state, (c + 1)/2, minimum width 2 xi, no minimum duration.
+   * Settings for cos phi derived from the metastable state. With the phase length xi, the mean c
+   * and the deviation s of the smoothed cos phi: smoothing 0.75 xi, grow level c + 5 s, seed and
+   * wall level half way to the stable state, (c + 1)/2, minimum width 2 xi, no minimum duration.
    *
    * @param fluctuations fluctuations before the decay
    * @return the settings

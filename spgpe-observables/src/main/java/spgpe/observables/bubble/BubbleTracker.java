@@ -3,6 +3,7 @@ package spgpe.observables.bubble;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.SortedSet;
 import java.util.TreeSet;
 import org.jspecify.annotations.Nullable;
 
@@ -42,7 +43,7 @@ final class BubbleTracker {
   void add(double time, double[] profile) {
     smoothing.apply(profile, smooth);
     List<Region> regions = Region.above(smooth, settings.growLevel());
-    List<TreeSet<Integer>> parents = new ArrayList<>();
+    List<SortedSet<Integer>> parents = new ArrayList<>();
     for (Region region : regions) {
       parents.add(ownersIn(region));
     }
@@ -66,8 +67,8 @@ final class BubbleTracker {
     frames++;
   }
 
-  private TreeSet<Integer> ownersIn(Region region) {
-    TreeSet<Integer> found = new TreeSet<>();
+  private SortedSet<Integer> ownersIn(Region region) {
+    SortedSet<Integer> found = new TreeSet<>();
     for (int i = 0; i < region.length(); i++) {
       int b = owner[region.point(i, points)];
       if (b >= 0) {
@@ -78,9 +79,9 @@ final class BubbleTracker {
   }
 
   /**
-   * For each bubble the region that shares most points with it (of equals that with the higher peak,
-   * a rule that does not depend on where the ring is cut), GONE if none does, NOT_THERE if it was not
-   * in the frame before.
+   * For each bubble the region that shares most points with it (of equals that with the higher
+   * peak, a rule that does not depend on where the ring is cut), GONE if none does, NOT_THERE if it
+   * was not in the frame before.
    */
   private int[] heirs(List<Region> regions) {
     int[] heir = new int[bubbles.size()];
@@ -117,7 +118,7 @@ final class BubbleTracker {
 
   /** The bubble that a region is, with the mergers and splits this means; null for none. */
   private @Nullable OpenBubble identify(
-      double time, int index, Region region, TreeSet<Integer> parents, int[] heir) {
+      double time, int index, Region region, SortedSet<Integer> parents, int[] heir) {
     if (parents.isEmpty()) {
       if (!isSeeded(region)) {
         return null;

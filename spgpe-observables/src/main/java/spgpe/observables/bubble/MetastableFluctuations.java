@@ -73,6 +73,8 @@ public final class MetastableFluctuations {
    * @throws IllegalArgumentException if the average is of something else or holds no sample
    */
   public static MetastableFluctuations of(TimeAverage average, Model model) {
+    Check.notNull(average, "average");
+    Check.notNull(model, "model");
     int points = model.region().grid().points();
     int half = points / 2 + 3;
     Check.argument(
@@ -81,7 +83,8 @@ public final class MetastableFluctuations {
         average.size(), 2 * half);
     Check.argument(
         average.samples() > 0,
-        "no sample lies in the metastable state: %s; start earlier or use a shorter margin", average);
+        "no sample lies in the metastable state: %s; start earlier or use a shorter margin",
+        average);
     double mean = average.mean(half - 1);
     double[] covariance = new double[points / 2 + 1];
     for (int r = 0; r < covariance.length; r++) {

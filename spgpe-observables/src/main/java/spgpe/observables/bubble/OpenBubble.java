@@ -71,7 +71,8 @@ final class OpenBubble {
       right[i] = walls.get(i)[2];
     }
     boolean accepted =
-        largestWidth >= settings.minimumWidth() && endTime - birthTime >= settings.minimumDuration();
+        largestWidth >= settings.minimumWidth()
+            && endTime - birthTime >= settings.minimumDuration();
     return new Bubble(
         trajectory, index, origin, birthTime, birthSite, endTime, fate, mergedInto, largestWidth,
         accepted, WallTrack.of(times, left, right));

@@ -9,9 +9,9 @@ import spgpe.observables.Measured;
  * Speed of bubble walls, outwards, by least squares. Errors come from the scatter about the fit and
  * take the frames as independent; the spread between bubbles is the better error.
  *
- * <p>Linear: position = a + v t over a range of times; the mean speed there. Hyperbola: with the half
- * distance r of the walls, r<sup>2</sup> = R0<sup>2</sup> + v<sup>2</sup>(t - t0)<sup>2</sup>, the
- * motion of a wall under constant tension and pressure with limiting speed v. Immutable and
+ * <p>Linear: position = a + v t over a range of times; the mean speed there. Hyperbola: with the
+ * half distance r of the walls, r<sup>2</sup> = R0<sup>2</sup> + v<sup>2</sup>(t - t0)<sup>2</sup>,
+ * the motion of a wall under constant tension and pressure with limiting speed v. Immutable and
  * thread-safe.
  *
  * @param speed v with its error

@@ -3,9 +3,9 @@ package spgpe.observables.bubble;
 import spgpe.internal.check.Check;
 
 /**
- * Positions of the two walls of a bubble in time, on the unrolled ring: left &lt; right, and positions
- * leave [0, L) when a wall crosses the seam. Frames in which the bubble does not reach the wall level
- * are missing. Immutable and thread-safe.
+ * Positions of the two walls of a bubble in time, on the unrolled ring: left &lt; right, and
+ * positions leave [0, L) when a wall crosses the seam. Frames in which the bubble does not reach
+ * the wall level are missing. Immutable and thread-safe.
  */
 public final class WallTrack {
   private final double[] times;
@@ -29,6 +29,9 @@ public final class WallTrack {
    *     not increase
    */
   public static WallTrack of(double[] times, double[] left, double[] right) {
+    Check.notNull(times, "times");
+    Check.notNull(left, "left");
+    Check.notNull(right, "right");
     Check.argument(
         times.length == left.length && times.length == right.length,
         "times and positions must be as many: times=%s, left=%s, right=%s",

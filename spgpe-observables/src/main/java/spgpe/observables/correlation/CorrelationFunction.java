@@ -31,6 +31,7 @@ public final class CorrelationFunction {
    * @throws IllegalArgumentException if lengths differ or the distances do not increase
    */
   public static CorrelationFunction of(double[] distances, Estimates estimates, double period) {
+    Check.notNull(distances, "distances");
     Check.notNull(estimates, "estimates");
     Check.argument(
         distances.length == estimates.size(),
@@ -103,8 +104,9 @@ public final class CorrelationFunction {
   }
 
   /**
-   * Distance over which a field of the kept modes can change, L/(2 n_max + 1). Points of a finer grid
-   * are interpolations of each other: their covariance is nearly singular, and fits leave them out.
+   * Distance over which a field of the kept modes can change, L/(2 n_max + 1). Points of a finer
+   * grid are interpolations of each other: their covariance is nearly singular, and fits leave them
+   * out.
    *
    * @return resolution; 0 if every distance counts
    */

@@ -10,7 +10,7 @@ import spgpe.observables.Measured;
  *
  * <pre>
  *   exponential:        f(r) = exp(-r/xi)
- *   hyperbolic cosine:  f(r) = cosh((L/2 - r)/xi) / cosh(L/(2 xi)),   the same on a ring of length L.
+ *   hyperbolic cosine:  f(r) = cosh((L/2 - r)/xi) / cosh(L/(2 xi)),  on a ring of length L.
  * </pre>
  *
  * <p>Neighbouring distances are strongly correlated. Either {@link Weighting}, ERRORS (the default)
@@ -55,7 +55,8 @@ public record CorrelationLength(
    * @param from smallest distance used
    * @param to largest distance used
    * @return the fit
-   * @throws IllegalArgumentException if there are fewer than three points in the range, or no minimum
+   * @throws IllegalArgumentException if there are fewer than three points in the range, or no
+   *     minimum
    */
   public static CorrelationLength exponential(
       CorrelationFunction correlation, double from, double to) {
@@ -110,7 +111,7 @@ public record CorrelationLength(
   }
 
   private static CurveFit.Curve ringCurve(CorrelationFunction correlation) {
-    double period = correlation.period();
+    double period = Check.notNull(correlation, "correlation").period();
     Check.argument(
         Double.isFinite(period), "a hyperbolic cosine needs a ring: period=%s", period);
     return (x, p, gradient) -> ringCurve(x, p, gradient, period);

@@ -6,8 +6,8 @@ import spgpe.run.Accumulator;
 import spgpe.run.TrajectoryEnd;
 
 /**
- * One-body density matrix in the kept modes, rho_ij = &lt;a_i a_j<sup>*</sup>&gt;, averaged over time
- * and trajectories. Record it with an observable of amplitudes as pairs (re, im), {@code
+ * One-body density matrix in the kept modes, rho_ij = &lt;a_i a_j<sup>*</sup>&gt;, averaged over
+ * time and trajectories. Record it with an observable of amplitudes as pairs (re, im), {@code
  * ModeAmplitude.ofComponent} or {@code ModeAmplitude.all}. The matrix needs n<sup>2</sup> complex
  * numbers for n modes; n is limited to {@value #MAX_MODES}.
  *
@@ -169,7 +169,8 @@ public final class OneBodyMatrix implements Accumulator<OneBodyMatrix> {
    * @throws IllegalStateException without samples
    */
   public NaturalModes naturalModes() {
-    Check.state(samples > 0, "the one-body matrix has no samples: start=%s, margin=%s", start, margin);
+    Check.state(
+        samples > 0, "the one-body matrix has no samples: start=%s, margin=%s", start, margin);
     return NaturalModes.of(this);
   }
 }

@@ -19,10 +19,10 @@ import spgpe.run.Snapshot;
  *
  * <pre>C(r) = (1/L) integral over y of A(y) B(y + r),   mean of r and -r,</pre>
  *
- * <p>at the distances r = 0, dx, ..., floor(N/2) dx, followed for real profiles by the spatial means
- * of A and B. Sum the samples up with {@link TimeAverage} and ask this observable for {@link #raw},
- * {@link #connected}, {@link #relativeToZero} or {@link #relativeToMeans}, with errors across
- * trajectories. Immutable and thread-safe. Line grids only.
+ * <p>at the distances r = 0, dx, ..., floor(N/2) dx, followed for real profiles by the spatial
+ * means of A and B. Sum the samples up with {@link TimeAverage} and ask this observable for {@link
+ * #raw}, {@link #connected}, {@link #relativeToZero} or {@link #relativeToMeans}, with errors
+ * across trajectories. Immutable and thread-safe. Line grids only.
  */
 public final class SpatialCorrelation implements Observable {
   @FunctionalInterface
@@ -71,8 +71,8 @@ public final class SpatialCorrelation implements Observable {
   }
 
   /**
-   * First-order correlation of a component, G1(r) = &lt;Re psi<sup>*</sup>(y + r) psi(y)&gt;; {@link
-   * #relativeToZero} makes it g1.
+   * First-order correlation of a component, G1(r) = &lt;Re psi<sup>*</sup>(y + r) psi(y)&gt;;
+   * {@link #relativeToZero} makes it g1.
    *
    * @param component component index from 0
    * @return the observable
@@ -90,7 +90,8 @@ public final class SpatialCorrelation implements Observable {
   }
 
   /**
-   * Density correlation of a component, &lt;n(y) n(y + r)&gt;; {@link #relativeToMeans} makes it g2.
+   * Density correlation of a component, &lt;n(y) n(y + r)&gt;; {@link #relativeToMeans} makes it
+   * g2.
    *
    * @param component component index from 0
    * @return the observable
@@ -119,8 +120,9 @@ public final class SpatialCorrelation implements Observable {
   }
 
   /**
-   * &lt;dphi(y) dphi(y + r)&gt; with dphi = phi - reference in (-pi, pi]. Meaningful while dphi stays
-   * away from the branch cut at distance pi from the reference; see also {@link #phaseDifference}.
+   * &lt;dphi(y) dphi(y + r)&gt; with dphi = phi - reference in (-pi, pi]. Meaningful while dphi
+   * stays away from the branch cut at distance pi from the reference; see also {@link
+   * #phaseDifference}.
    *
    * @param reference reference angle, radians, finite; pi for the metastable state
    * @return the observable
@@ -140,8 +142,8 @@ public final class SpatialCorrelation implements Observable {
   }
 
   /**
-   * Correlation of the coherence X = psi_1 psi_2<sup>*</sup>: Re &lt;X(y) X<sup>*</sup>(y + r)&gt;, a
-   * quarter of that of the transverse spin S_x S_x + S_y S_y.
+   * Correlation of the coherence X = psi_1 psi_2<sup>*</sup>: Re &lt;X(y) X<sup>*</sup>(y + r)&gt;,
+   * a quarter of that of the transverse spin S_x S_x + S_y S_y.
    *
    * @return the observable
    */
@@ -222,7 +224,7 @@ public final class SpatialCorrelation implements Observable {
    * @return new array 0, dx, ..., floor(N/2) dx
    */
   public double[] distances(Model model) {
-    double[] r = new double[distanceCount(model)];
+    double[] r = new double[distanceCount(Check.notNull(model, "model"))];
     for (int i = 0; i < r.length; i++) {
       r[i] = model.region().grid().axis(0).position(i);
     }
@@ -243,7 +245,7 @@ public final class SpatialCorrelation implements Observable {
    * @throws IllegalStateException with fewer than two trajectories
    */
   public CorrelationFunction raw(TimeAverage average, Model model) {
-    int count = distanceCount(model);
+    int count = distanceCount(Check.notNull(model, "model"));
     return derived(average, model, v -> java.util.Arrays.copyOf(v, count));
   }
 
@@ -259,7 +261,7 @@ public final class SpatialCorrelation implements Observable {
    */
   public CorrelationFunction connected(TimeAverage average, Model model) {
     requireReal();
-    int count = distanceCount(model);
+    int count = distanceCount(Check.notNull(model, "model"));
     return derived(
         average, model,
         v -> {
@@ -281,7 +283,7 @@ public final class SpatialCorrelation implements Observable {
    * @throws IllegalStateException with fewer than two trajectories
    */
   public CorrelationFunction relativeToZero(TimeAverage average, Model model) {
-    int count = distanceCount(model);
+    int count = distanceCount(Check.notNull(model, "model"));
     return derived(average, model, v -> quotients(v, count, v[0]));
   }
 
@@ -297,7 +299,7 @@ public final class SpatialCorrelation implements Observable {
    */
   public CorrelationFunction relativeToMeans(TimeAverage average, Model model) {
     requireReal();
-    int count = distanceCount(model);
+    int count = distanceCount(Check.notNull(model, "model"));
     return derived(average, model, v -> quotients(v, count, v[count] * v[count + 1]));
   }
 
@@ -318,6 +320,7 @@ public final class SpatialCorrelation implements Observable {
 
   private CorrelationFunction derived(
       TimeAverage average, Model model, UnaryOperator<double[]> function) {
+    Check.notNull(average, "average");
     Check.argument(
         average.size() == size(model),
         "the average must be of this correlation: correlation=\"%s\", numbers=%s, numbers of the"

@@ -84,7 +84,7 @@ public final class NumberFluctuation implements Observable {
 
   private static void require(TimeAverage average) {
     Check.argument(
-        average.size() == 2,
+        Check.notNull(average, "average").size() == 2,
         "the average must be of a fluctuation, two numbers: numbers=%s", average.size());
   }
 }

@@ -9,27 +9,42 @@ import spgpe.run.Snapshot;
 /**
  * Spatial means of local products of the components 0 and 1, measured together by {@link #all}: the
  * numbers that an exact equilibrium theory of two coupled fields gives. The number of a moment is
- * its {@link #ordinal()}.
+ * its {@link #index()}.
  */
 public enum PairMoment {
   /** n_1 = |psi_1|<sup>2</sup>. */
-  DENSITY_1,
+  DENSITY_1(0),
   /** n_2 = |psi_2|<sup>2</sup>. */
-  DENSITY_2,
+  DENSITY_2(1),
   /** Re psi_1<sup>*</sup> psi_2 = sqrt(n_1 n_2) cos phi. */
-  COHERENCE,
+  COHERENCE(2),
   /** Im psi_1<sup>*</sup> psi_2 = S_y/2. */
-  COHERENCE_IMAGINARY,
+  COHERENCE_IMAGINARY(3),
   /** S_y<sup>2</sup> = 4 n_1 n_2 sin<sup>2</sup> phi. */
-  SPIN_Y_SQUARED,
+  SPIN_Y_SQUARED(4),
   /** n_1<sup>2</sup>. */
-  DENSITY_1_SQUARED,
+  DENSITY_1_SQUARED(5),
   /** n_2<sup>2</sup>. */
-  DENSITY_2_SQUARED,
+  DENSITY_2_SQUARED(6),
   /** n_1 n_2. */
-  DENSITY_PRODUCT,
+  DENSITY_PRODUCT(7),
   /** (n_1 - n_2)<sup>2</sup>. */
-  SPIN_Z_SQUARED;
+  SPIN_Z_SQUARED(8);
+
+  private final int index;
+
+  PairMoment(int index) {
+    this.index = index;
+  }
+
+  /**
+   * Place of the moment among the numbers of {@link #all}.
+   *
+   * @return index from 0
+   */
+  public int index() {
+    return index;
+  }
 
   /**
    * All moments.
@@ -68,15 +83,15 @@ public enum PairMoment {
       double n2 = re2 * re2 + im2 * im2;
       double re = re1 * re2 + im1 * im2;
       double im = re1 * im2 - im1 * re2;
-      result[DENSITY_1.ordinal()] += n1;
-      result[DENSITY_2.ordinal()] += n2;
-      result[COHERENCE.ordinal()] += re;
-      result[COHERENCE_IMAGINARY.ordinal()] += im;
-      result[SPIN_Y_SQUARED.ordinal()] += 4 * im * im;
-      result[DENSITY_1_SQUARED.ordinal()] += n1 * n1;
-      result[DENSITY_2_SQUARED.ordinal()] += n2 * n2;
-      result[DENSITY_PRODUCT.ordinal()] += n1 * n2;
-      result[SPIN_Z_SQUARED.ordinal()] += (n1 - n2) * (n1 - n2);
+      result[DENSITY_1.index] += n1;
+      result[DENSITY_2.index] += n2;
+      result[COHERENCE.index] += re;
+      result[COHERENCE_IMAGINARY.index] += im;
+      result[SPIN_Y_SQUARED.index] += 4 * im * im;
+      result[DENSITY_1_SQUARED.index] += n1 * n1;
+      result[DENSITY_2_SQUARED.index] += n2 * n2;
+      result[DENSITY_PRODUCT.index] += n1 * n2;
+      result[SPIN_Z_SQUARED.index] += (n1 - n2) * (n1 - n2);
     }
     for (int i = 0; i < result.length; i++) {
       result[i] /= points;

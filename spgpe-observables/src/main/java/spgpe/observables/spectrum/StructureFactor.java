@@ -13,14 +13,16 @@ import spgpe.run.Snapshot;
 /**
  * Static structure factor of a density-like profile A,
  *
- * <pre>S(k) = ( &lt;|A_k|^2&gt; - |&lt;A_k&gt;|^2 delta_k0 ) / &lt;N&gt;,   A_k = integral of A exp(-ikx),</pre>
+ * <pre>S(k) = ( &lt;|A_k|^2&gt; - |&lt;A_k&gt;|^2 delta_k0 ) / &lt;N&gt;,
+ * A_k = integral of A exp(-ikx),</pre>
  *
- * <p>at k = 2 pi n/L, n = 0..floor(N/2). In a uniform system &lt;A_k&gt; = 0 for k not 0; S(0) is the
- * variance of the number over its mean. A_k of a density contains all pairs of modes: it is free of
- * aliasing for |n| &le; N - 1 - 2 n_max. Measures |A_k|<sup>2</sup>, then A_0 and N. Immutable and
- * thread-safe. Line grids only.
+ * <p>at k = 2 pi n/L, n = 0..floor(N/2). In a uniform system &lt;A_k&gt; = 0 for k not 0; S(0) is
+ * the variance of the number over its mean. A_k of a density contains all pairs of modes: it is
+ * free of aliasing for |n| &le; N - 1 - 2 n_max. Measures |A_k|<sup>2</sup>, then A_0 and N.
+ * Immutable and thread-safe. Line grids only.
  */
 public final class StructureFactor implements Observable {
+  @SuppressWarnings("ArrayRecordComponent") // compared by nobody
   private record Scratch(RingCorrelator ring, double[] number) {}
 
   private final Observable profile;
@@ -116,6 +118,7 @@ public final class StructureFactor implements Observable {
    * @return new array 0, 2 pi/L, ...
    */
   public double[] waveNumbers(Model model) {
+    Check.notNull(model, "model");
     double[] k = new double[model.region().grid().points() / 2 + 1];
     for (int n = 0; n < k.length; n++) {
       k[n] = model.region().grid().axis(0).waveNumber(n);
@@ -131,7 +134,7 @@ public final class StructureFactor implements Observable {
    * @throws IllegalStateException with fewer than two trajectories
    */
   public Estimates values(TimeAverage average) {
-    int count = average.size() - 2;
+    int count = Check.notNull(average, "average").size() - 2;
     Check.argument(
         count >= 2, "the average must be of a structure factor: numbers=%s", average.size());
     return average.derivedVector(

@@ -19,13 +19,13 @@ import spgpe.run.Snapshot;
  * <p>{@link #inverse}: X = grad K/|grad K|<sup>2</sup>. {@link #inverseAtFixedNumber}: with E and
  * the total atom number N conserved,
  *
- * <pre>X_T = P/|P|^2,  P = grad E - (grad E . grad N/|grad N|^2) grad N,        1/T  =  &lt;div X_T&gt;
- * X_N = Q/|Q|^2,  Q = grad N - (grad E . grad N/|grad E|^2) grad E,        mu/T = -&lt;div X_N&gt;.</pre>
+ * <pre>X_T = P/|P|^2,  P = grad E - (grad E . grad N/|grad N|^2) grad N,  1/T  =  &lt;div X_T&gt;
+ * X_N = Q/|Q|^2,  Q = grad N - (grad E . grad N/|grad E|^2) grad E,  mu/T = -&lt;div X_N&gt;.</pre>
  *
- * <p>If each component conserves its own number, the second form treats only their sum as conserved;
- * that is right in the grand-canonical ensemble and for equal chemical potentials. {@link
- * #gradientAndCurvature} is the ratio of two averages, T = &lt;|grad K|<sup>2</sup>&gt;/&lt;div grad
- * K&gt;, with the smallest variance, for the canonical ensemble.
+ * <p>If each component conserves its own number, the second form treats only their sum as
+ * conserved; that is right in the grand-canonical ensemble and for equal chemical potentials.
+ * {@link #gradientAndCurvature} is the ratio of two averages, T = &lt;|grad
+ * K|<sup>2</sup>&gt;/&lt;div grad K&gt;, with the smallest variance, for the canonical ensemble.
  */
 public final class DynamicalTemperature {
   private static final class Scratch {
@@ -92,6 +92,7 @@ public final class DynamicalTemperature {
    * @throws IllegalStateException with fewer than two trajectories
    */
   public static Measured temperature(TimeAverage average) {
+    Check.notNull(average, "average");
     Check.argument(
         average.size() == 1 || average.size() == 2,
         "the average must be of inverse temperatures: numbers=%s", average.size());
@@ -125,6 +126,7 @@ public final class DynamicalTemperature {
   }
 
   private static void requireTwo(TimeAverage average) {
+    Check.notNull(average, "average");
     Check.argument(
         average.size() == 2, "the average must have two numbers: numbers=%s", average.size());
   }

@@ -15,7 +15,8 @@ import spgpe.run.Snapshot;
 /**
  * Equipartition in bands of |k|: for every mode and any interaction, in the ensemble exp(-K/T),
  *
- * <pre>&lt; Re a_k^* dK/da_k^* &gt; = T,    that is    &lt; Re a_k^* dE/da_k^* &gt; = T + mu &lt;|a_k|^2&gt;.</pre>
+ * <pre>&lt; Re a_k^* dK/da_k^* &gt; = T,
+ * that is   &lt; Re a_k^* dE/da_k^* &gt; = T + mu &lt; |a_k|^2 &gt;.</pre>
  *
  * <p>The first form, {@link #temperatures}, takes mu from the model's reservoir and gives one
  * temperature for each band: bands that disagree are not in equilibrium, or the time step heats
@@ -62,6 +63,7 @@ public final class Equipartition implements Observable {
    *     holds no mode
    */
   public static Equipartition inBands(double... edges) {
+    Check.notNull(edges, "edges");
     Check.argument(edges.length >= 2, "bands need at least two edges: edges=%s", edges.length);
     for (int i = 0; i < edges.length; i++) {
       Check.notNegative(edges[i], "band edge (wave number)");
@@ -193,14 +195,14 @@ public final class Equipartition implements Observable {
     }
     double mu = (work[most] - work[least]) / (occupation[most] - occupation[least]);
     double scale = (average.trajectories() - bands - 2.0) / (average.trajectories() - 1.0);
-    CurveFit.Result result = null;
-    for (int i = 0; i < ITERATIONS; i++) {
-      result = fitOnce(average, occupation, work, mu, scale);
-      mu = result.parameters()[1];
+    CurveFit.Result result = fitOnce(average, occupation, work, mu, scale);
+    for (int i = 1; i < ITERATIONS; i++) {
+      result = fitOnce(average, occupation, work, result.parameters()[1], scale);
     }
     return new EquipartitionFit(
         new Measured(result.parameters()[0], result.error(0)),
-        new Measured(mu, result.error(1)), result.chiSquare(), result.degreesOfFreedom());
+        new Measured(result.parameters()[1], result.error(1)),
+        result.chiSquare(), result.degreesOfFreedom());
   }
 
   /** Weights are the covariance of work - mu n, in which the common fluctuation cancels. */
@@ -232,6 +234,7 @@ public final class Equipartition implements Observable {
   }
 
   private void require(TimeAverage average) {
+    Check.notNull(average, "average");
     Check.argument(
         average.size() == 3 * bands(),
         "the average must be of this equipartition: numbers=%s, numbers of the average=%s",

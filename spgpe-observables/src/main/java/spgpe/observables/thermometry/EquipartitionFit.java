@@ -7,8 +7,8 @@ import spgpe.observables.Measured;
  *
  * @param temperature T
  * @param chemicalPotential mu
- * @param chiSquare weighted sum of squares; far above the degrees of freedom if the bands are not in
- *     equilibrium with each other
+ * @param chiSquare weighted sum of squares; far above the degrees of freedom if the bands are not
+ *     in equilibrium with each other
  * @param degreesOfFreedom bands less two
  */
 public record EquipartitionFit(

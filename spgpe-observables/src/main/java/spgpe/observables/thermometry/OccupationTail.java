@@ -21,9 +21,9 @@ import spgpe.projector.CoherentRegion;
  * component). The fit is linear in 1/n_k over modes of a range of wave numbers; modes of equal |k|
  * are averaged and shells taken as independent. The line is a limit: pairing of k and -k bends it,
  * T/n_k = (e + a) - b<sup>2</sup>/(e + a) in Bogoliubov theory (e = k<sup>2</sup>/(2m); a = b = g n
- * for one component at mu = g n), so that a fit from e_1 to e_2 finds T too low by about the factor 1
- * + b<sup>2</sup>/((e_1 + a)(e_2 + a)). A time step that is too long shows first at the upper end.
- * Immutable and thread-safe.
+ * for one component at mu = g n), so that a fit from e_1 to e_2 finds T too low by about the factor
+ * 1 + b<sup>2</sup>/((e_1 + a)(e_2 + a)). A time step that is too long shows first at the upper
+ * end. Immutable and thread-safe.
  *
  * @param temperature T
  * @param offset energy offset
@@ -49,7 +49,8 @@ public record OccupationTail(
    */
   public static OccupationTail fit(
       Model model, int component, TimeAverage occupations, double from, double to) {
-    CoherentRegion region = model.region();
+    Check.notNull(occupations, "occupations");
+    CoherentRegion region = Check.notNull(model, "model").region();
     Check.inRange(component, 0, model.components() - 1, "component");
     Check.argument(
         occupations.size() == region.modes(),

@@ -27,6 +27,7 @@ public final class DomainWalls {
    * @throws IllegalArgumentException if a value is not finite or the levels are in the wrong order
    */
   public static List<Defect> find(double[] profile, double low, double high, double length) {
+    Check.notNull(profile, "profile");
     Check.positive(length, "length (of the ring)");
     requireLevels(low, high);
     for (int i = 0; i < profile.length; i++) {

@@ -11,10 +11,10 @@ import spgpe.run.Snapshot;
 
 /**
  * Kinks of a phase on a ring: steps of 2 pi between neighbouring valleys phi = 2 pi k. A new valley
- * counts when the phase has come within pi/2 of its bottom, where cos phi &gt; 0; excursions that fall
- * back make no kink. The signs of all kinks add up to the winding number. In the relative phase of
- * coupled condensates these are the walls left over when bubbles that decayed to different sides
- * meet.
+ * counts when the phase has come within pi/2 of its bottom, where cos phi &gt; 0; excursions that
+ * fall back make no kink. The signs of all kinks add up to the winding number. In the relative
+ * phase of coupled condensates these are the walls left over when bubbles that decayed to different
+ * sides meet.
  */
 public final class Kinks {
   private static final double TURN = 2 * Math.PI;

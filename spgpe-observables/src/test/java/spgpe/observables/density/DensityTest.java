@@ -54,15 +54,15 @@ class DensityTest {
         1.25 * 1.25 + 0.5,
         Fields.measure(SpatialMean.ofSquare(Density.ofComponent(0)), snapshot)[0], 1e-13);
     double[] m = Fields.measure(PairMoment.all(), snapshot);
-    assertEquals(1.25, m[PairMoment.DENSITY_1.ordinal()], 1e-13);
-    assertEquals(0.09, m[PairMoment.DENSITY_2.ordinal()], 1e-13);
-    assertEquals(0, m[PairMoment.COHERENCE.ordinal()], 1e-13);
-    assertEquals(0, m[PairMoment.COHERENCE_IMAGINARY.ordinal()], 1e-13);
-    assertEquals(2 * (0.09 + 0.0225), m[PairMoment.SPIN_Y_SQUARED.ordinal()], 1e-13);
-    assertEquals(2.0625, m[PairMoment.DENSITY_1_SQUARED.ordinal()], 1e-13);
-    assertEquals(0.0081, m[PairMoment.DENSITY_2_SQUARED.ordinal()], 1e-13);
-    assertEquals(0.1125, m[PairMoment.DENSITY_PRODUCT.ordinal()], 1e-13);
-    assertEquals(1.16 * 1.16 + 0.5, m[PairMoment.SPIN_Z_SQUARED.ordinal()], 1e-13);
+    assertEquals(1.25, m[PairMoment.DENSITY_1.index()], 1e-13);
+    assertEquals(0.09, m[PairMoment.DENSITY_2.index()], 1e-13);
+    assertEquals(0, m[PairMoment.COHERENCE.index()], 1e-13);
+    assertEquals(0, m[PairMoment.COHERENCE_IMAGINARY.index()], 1e-13);
+    assertEquals(2 * (0.09 + 0.0225), m[PairMoment.SPIN_Y_SQUARED.index()], 1e-13);
+    assertEquals(2.0625, m[PairMoment.DENSITY_1_SQUARED.index()], 1e-13);
+    assertEquals(0.0081, m[PairMoment.DENSITY_2_SQUARED.index()], 1e-13);
+    assertEquals(0.1125, m[PairMoment.DENSITY_PRODUCT.index()], 1e-13);
+    assertEquals(1.16 * 1.16 + 0.5, m[PairMoment.SPIN_Z_SQUARED.index()], 1e-13);
   }
 
   @Test

@@ -60,7 +60,8 @@ class RelativePhaseTest {
   @Test
   void tinyAndHugeFieldsKeepTheirPhase() {
     for (double size : new double[] {1e-150, 1e-90, 1e90}) {
-      Snapshot s = Fields.snapshot(model, 0, (c, x, v) -> v[c] = size); // psi_1 real, psi_2 imaginary
+      // psi_1 real, psi_2 imaginary
+      Snapshot s = Fields.snapshot(model, 0, (c, x, v) -> v[c] = size);
       assertEquals(0, Fields.measure(RelativePhase.meanCosine(), s)[0], 1e-12);
       assertEquals(-1, Fields.measure(RelativePhase.sine(), s)[0], 1e-12);
       Snapshot t = Fields.snapshot(model, 0, (c, x, v) -> v[0] = c == 0 ? size : -size);

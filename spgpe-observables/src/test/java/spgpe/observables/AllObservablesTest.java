@@ -1,0 +1,180 @@
+package spgpe.observables;
+
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.util.List;
+import java.util.Map;
+import java.util.TreeMap;
+import org.junit.jupiter.api.Test;
+import spgpe.model.Model;
+import spgpe.observables.bubble.BubbleDetector;
+import spgpe.observables.bubble.BubbleSettings;
+import spgpe.observables.bubble.MetastableFluctuations;
+import spgpe.observables.bubble.WallSpeed;
+import spgpe.observables.bubble.WallTrack;
+import spgpe.observables.correlation.CorrelationFunction;
+import spgpe.observables.correlation.CorrelationLength;
+import spgpe.observables.correlation.SpatialCorrelation;
+import spgpe.observables.density.AtomNumber;
+import spgpe.observables.density.Current;
+import spgpe.observables.density.Density;
+import spgpe.observables.density.Energy;
+import spgpe.observables.density.Momentum;
+import spgpe.observables.density.NumberFluctuation;
+import spgpe.observables.density.PairMoment;
+import spgpe.observables.phase.ComponentPhase;
+import spgpe.observables.phase.PhaseUnwrapping;
+import spgpe.observables.phase.RelativePhase;
+import spgpe.observables.spectrum.ModeAmplitude;
+import spgpe.observables.spectrum.ModeOccupation;
+import spgpe.observables.spectrum.StructureFactor;
+import spgpe.observables.thermometry.DynamicalTemperature;
+import spgpe.observables.thermometry.Equipartition;
+import spgpe.observables.thermometry.OccupationTail;
+import spgpe.observables.topology.DomainWalls;
+import spgpe.observables.topology.Kinks;
+import spgpe.projector.Amplitudes;
+import spgpe.run.Observable;
+import spgpe.run.Schedule;
+import spgpe.run.Snapshot;
+
+/** What every observable must keep: it changes nothing, has no memory, and can be shared. */
+class AllObservablesTest {
+  private static List<Observable> all() {
+    return List.of(
+        Density.ofComponent(1), Density.total(), Density.spin(Density.SpinAxis.X),
+        Density.spin(Density.SpinAxis.Y), Density.spin(Density.SpinAxis.Z), AtomNumber.total(),
+        AtomNumber.ofComponent(0), AtomNumber.difference(), Energy.byTerm(), Energy.total(),
+        Energy.grandCanonical(), Momentum.total(), Momentum.ofComponent(1), Current.total(0),
+        Current.ofComponent(1, 0), Current.spin(0), PairMoment.all(),
+        NumberFluctuation.of(AtomNumber.total(), 20), SpatialMean.of(Density.total()),
+        SpatialMean.ofSquare(Density.total()), RelativePhase.meanCosine(), RelativePhase.cosine(),
+        RelativePhase.sine(), RelativePhase.wrapped(), RelativePhase.wrappedAbout(Math.PI),
+        RelativePhase.unwrapped(), RelativePhase.winding(), ComponentPhase.wrapped(1),
+        ComponentPhase.winding(0), ModeOccupation.ofComponent(1), ModeOccupation.inPhase(),
+        ModeOccupation.outOfPhase(), ModeAmplitude.of(0, 2), ModeAmplitude.ofComponent(1),
+        ModeAmplitude.all(), StructureFactor.ofDensity(), StructureFactor.ofComponent(0),
+        StructureFactor.ofSpin(Density.SpinAxis.Z), SpatialCorrelation.firstOrder(1),
+        SpatialCorrelation.secondOrder(0), SpatialCorrelation.phaseDifference(),
+        SpatialCorrelation.phaseDeviation(Math.PI), SpatialCorrelation.cosine(),
+        SpatialCorrelation.coherence(), MetastableFluctuations.observable(),
+        DynamicalTemperature.inverse(), DynamicalTemperature.inverseAtFixedNumber(),
+        DynamicalTemperature.gradientAndCurvature(), Equipartition.overall(),
+        Equipartition.inBands(0, 1, 2), DomainWalls.count(Density.total(), 0.5, 1.5),
+        Kinks.count());
+  }
+
+  @Test
+  void measuringChangesNothingAndHasNoMemory() {
+    Model small = Fields.pair(6, 10);
+    Model large = Fields.pair(9, 14);
+    Amplitudes a =
+        Samples.complexGaussian(small, k -> 1 / (1 + k * k), 1).get().amplitudes().copy();
+    Amplitudes b =
+        Samples.complexGaussian(large, k -> 1 / (1 + k * k), 2).get().amplitudes().copy();
+    Amplitudes other =
+        Samples.complexGaussian(small, k -> 2 / (1 + k * k), 3).get().amplitudes().copy();
+    Amplitudes before = a.copy();
+    for (Observable observable : all()) {
+      Snapshot s = Snapshot.of(small, a, 1.5);
+      double[] first = Fields.measure(observable, s);
+      double[] onLarge = Fields.measure(observable, Snapshot.of(large, b, 0));
+      double[] again = Fields.measure(observable, s);
+      assertArrayEquals(first, again, 0, observable.name());
+      // the snapshot goes to another trajectory and comes back
+      a.set(other);
+      double[] elsewhere = Fields.measure(observable, Snapshot.of(small, a, 1.5));
+      a.set(before);
+      assertArrayEquals(
+          first, Fields.measure(observable, Snapshot.of(small, a, 1.5)), 0, observable.name());
+      assertEquals(first.length, elsewhere.length);
+      for (double[] values : List.of(first, onLarge, elsewhere)) {
+        for (double value : values) {
+          assertTrue(Double.isFinite(value), observable.name());
+        }
+      }
+      assertArrayEquals(before.re(0), a.re(0), 0, observable.name());
+      assertArrayEquals(before.im(1), a.im(1), 0, observable.name());
+      assertFalse(observable.name().isBlank());
+    }
+  }
+
+  @Test
+  void namesAreDistinct() {
+    Map<String, Observable> names = new TreeMap<>();
+    for (Observable observable : all()) {
+      if (!(observable instanceof Equipartition)) {
+        assertEquals(null, names.put(observable.name(), observable), observable.name());
+      }
+    }
+  }
+
+  /** Null where a reference is needed: refused by name, never a NullPointerException. */
+  @Test
+  @SuppressWarnings("NullAway") // the point of this test
+  void nullIsRefusedByName() {
+    Model model = Fields.pair(4, 10);
+    TimeAverage average = new TimeAverage(new double[] {0}, 1);
+    Observable observable = RelativePhase.meanCosine();
+    Schedule schedule = Schedule.every(1);
+    double[] none = nothing(double[].class);
+    Model noModel = nothing(Model.class);
+    TimeAverage noAverage = nothing(TimeAverage.class);
+    Observable noObservable = nothing(Observable.class);
+    CorrelationFunction noCorrelation = nothing(CorrelationFunction.class);
+    List<Runnable> calls =
+        List.of(
+            () -> FirstPassage.upward(noObservable, 0, schedule),
+            () -> FirstPassage.downward(observable, 0, nothing(Schedule.class)),
+            () -> SpatialMean.of(noObservable),
+            () -> Estimates.of(none, new double[0][], 2),
+            () -> Estimates.of(new double[1], new double[1][], 2),
+            () -> Density.spin(nothing(Density.SpinAxis.class)),
+            () -> NumberFluctuation.of(noObservable, 0),
+            () -> NumberFluctuation.of(observable, 0).mean(noAverage),
+            () -> Energy.termNames(noModel),
+            () -> PhaseUnwrapping.unwrap(none),
+            () -> PhaseUnwrapping.winding(none),
+            () -> SpatialCorrelation.of(noObservable),
+            () -> SpatialCorrelation.cosine().raw(noAverage, model),
+            () -> SpatialCorrelation.cosine().connected(average, noModel),
+            () -> SpatialCorrelation.cosine().distances(noModel),
+            () -> CorrelationFunction.of(none, nothing(Estimates.class), 1),
+            () -> CorrelationLength.exponential(noCorrelation, 0, 1),
+            () -> CorrelationLength.hyperbolicCosine(noCorrelation, 0, 1),
+            () -> StructureFactor.of(noObservable, observable),
+            () -> StructureFactor.ofDensity().values(noAverage),
+            () -> StructureFactor.ofDensity().waveNumbers(noModel),
+            () -> DynamicalTemperature.temperature(noAverage),
+            () -> DynamicalTemperature.chemicalPotential(noAverage),
+            () -> Equipartition.inBands(none),
+            () -> Equipartition.overall().temperatures(noAverage),
+            () -> OccupationTail.fit(noModel, 0, average, 0, 1),
+            () -> OccupationTail.fit(model, 0, noAverage, 0, 1),
+            () -> DomainWalls.find(none, 0, 1, 1),
+            () -> DomainWalls.count(noObservable, 0, 1),
+            () -> Kinks.find(none, 1),
+            () -> BubbleDetector.of(nothing(BubbleSettings.class)),
+            () -> BubbleSettings.from(nothing(MetastableFluctuations.class)),
+            () -> BubbleDetector.of(BubbleSettings.atLevel(0)).find(none, new double[1][], 1),
+            () ->
+                BubbleDetector.of(BubbleSettings.atLevel(0))
+                    .find(new double[1], new double[1][], 1),
+            () -> MetastableFluctuations.of(noAverage, model),
+            () -> MetastableFluctuations.of(average, noModel),
+            () -> WallTrack.of(none, none, none),
+            () -> WallSpeed.hyperbola(nothing(WallTrack.class)));
+    for (int i = 0; i < calls.size(); i++) {
+      String message = Fields.refusal(calls.get(i));
+      assertTrue(message.contains("must not be null"), "call " + i + ": " + message);
+    }
+  }
+
+  @SuppressWarnings({"NullAway", "TypeParameterUnusedInFormals"})
+  private static <T> T nothing(Class<T> type) {
+    return type.cast(null);
+  }
+}
