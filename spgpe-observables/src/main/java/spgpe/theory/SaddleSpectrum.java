@@ -4,7 +4,7 @@ import spgpe.internal.check.Check;
 
 /** Hessian spectrum of a critical bubble in its symmetry blocks and the unstable mode. */
 final class SaddleSpectrum {
-  private static final int ITERATIONS = 60;
+  private static final int BISECTIONS = 200;
 
   private final SaddleFields fields;
   private final double zeroTolerance;
@@ -83,34 +83,52 @@ final class SaddleSpectrum {
   /**
    * With {@code c = 2 lambda/(1 + gamma^2)} the unstable mode (a, b) obeys {@code (H_A + c gamma) a
    * + c b = 0}, {@code (H_B + c gamma) b = c a}, hence {@code F(c) a = 0} with the symmetric {@code
-   * F(c) = H_A + c gamma + c^2 (H_B + c gamma)^{-1}}, which grows with c. Solved by Rayleigh
-   * iteration in the eigenbasis of H_B.
+   * F(c) = H_A + c gamma + c^2 (H_B + c gamma)^{-1}}, which grows with c and becomes positive
+   * definite at the root. Bisection on that, in the eigenbasis of H_B: safe for every damping, also
+   * where the zero mode of H_B gets an entry {@code c/gamma} that is large against all others.
    */
   double growthRate(double damping) {
     double[][] transformed = transformedBlock();
-    int n = transformed.length;
-    SymmetricEigen start = SymmetricEigen.of(transformed);
-    double[] a = start.vector(0).clone();
-    double c = rayleigh(transformed, a, damping);
-    for (int i = 0; i < ITERATIONS; i++) {
-      double[][] f = copy(transformed);
-      double[] right = new double[n];
-      for (int k = 0; k < n; k++) {
-        f[k][k] += shift(k, c, damping);
-        right[k] = slope(k, c, damping) * a[k];
-      }
-      double[] next = SaddleFields.solve(f, right);
-      VectorMath.scale(next, 1 / VectorMath.norm(next));
-      a = next;
-      double improved = rayleigh(transformed, a, damping);
-      boolean done = Math.abs(improved - c) <= 1e-13 * improved;
-      c = improved;
-      if (done) {
-        return 0.5 * c * (1 + damping * damping);
+    double low = 0;
+    double high = 1e-6;
+    while (!isPositive(transformed, high, damping)) {
+      low = high;
+      high *= 2;
+      if (!(high < 1e12)) {
+        throw new UnconvergedException("no growth rate was found at damping=" + damping);
       }
     }
-    throw new UnconvergedException(
-        "the iteration for the growth rate did not converge at damping=" + damping);
+    for (int i = 0; i < BISECTIONS && high - low > 1e-14 * high; i++) {
+      double middle = 0.5 * (low + high);
+      if (isPositive(transformed, middle, damping)) {
+        high = middle;
+      } else {
+        low = middle;
+      }
+    }
+    return 0.25 * (low + high) * (1 + damping * damping);
+  }
+
+  /** Whether F(c) has a Cholesky factor. */
+  private boolean isPositive(double[][] transformed, double c, double damping) {
+    double[][] f = copy(transformed);
+    for (int i = 0; i < f.length; i++) {
+      f[i][i] += shift(i, c, damping);
+      for (int j = 0; j <= i; j++) {
+        double sum = f[i][j];
+        for (int k = 0; k < j; k++) {
+          sum -= f[i][k] * f[j][k];
+        }
+        if (j < i) {
+          f[i][j] = sum / f[j][j];
+        } else if (sum > 0) {
+          f[i][i] = Math.sqrt(sum);
+        } else {
+          return false;
+        }
+      }
+    }
+    return true;
   }
 
   private double[][] transformedBlock() {
@@ -141,41 +159,7 @@ final class SaddleSpectrum {
     return c * damping + c * c / (stiffness(k) + c * damping);
   }
 
-  private double slope(int k, double c, double damping) {
-    double h = stiffness(k);
-    double d = h + c * damping;
-    return damping + c * (2 * h + c * damping) / (d * d);
-  }
-
   private double stiffness(int k) {
     return Math.max(0, symmetricBroken.value(k));
-  }
-
-  /** Root c of a^T F(c) a = 0 by bisection and Newton steps; the left side grows with c. */
-  private double rayleigh(double[][] transformed, double[] a, double damping) {
-    double base = VectorMath.dot(a, VectorMath.times(transformed, a));
-    double low = 0;
-    double high = 1e-6;
-    while (quotient(base, a, high, damping) < 0) {
-      low = high;
-      high *= 2;
-    }
-    for (int i = 0; i < 200 && high - low > 1e-16 * high; i++) {
-      double middle = 0.5 * (low + high);
-      if (quotient(base, a, middle, damping) < 0) {
-        low = middle;
-      } else {
-        high = middle;
-      }
-    }
-    return 0.5 * (low + high);
-  }
-
-  private double quotient(double base, double[] a, double c, double damping) {
-    double sum = base;
-    for (int k = 0; k < a.length; k++) {
-      sum += a[k] * a[k] * shift(k, c, damping);
-    }
-    return sum;
   }
 }

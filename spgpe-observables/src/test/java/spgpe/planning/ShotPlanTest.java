@@ -61,6 +61,17 @@ class ShotPlanTest {
     assertEquals(2, hot.rate().orElseThrow().remarks().size());
   }
 
+  /** At kinetic damping the one-loop rate is a little above that at gamma = .02, 2.54262e-3. */
+  @Test
+  void kineticDampingHasARate() {
+    ShotPlan plan = ShotPlan.of(Rings.reference(), 2e-5, SHOT).withCutoffModes(24);
+    ExpectedRate expected = plan.rate().orElseThrow();
+    double scaled = plan.ring().units().toScaled(expected.rate());
+    assertTrue(scaled > 2.543e-3 && scaled < 2.63e-3, "rate " + scaled);
+    assertEquals(0.05, expected.lowRatio());
+    assertTrue(expected.remarks().get(0).contains("damping"), expected.remarks().get(0));
+  }
+
   @Test
   void settingsFollowTheRules() {
     ShotPlan plan = Rings.referencePlan();
