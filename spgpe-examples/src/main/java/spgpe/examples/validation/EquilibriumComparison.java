@@ -47,11 +47,11 @@ public final class EquilibriumComparison {
   private static final long SEED = 20261202;
 
   static final Setting A32 =
-      new Setting("A", new CoupledPair(1, 1, 0.1, 0, 0.5), new RingModes(40, 32), 2, 4);
+      new Setting("A", new CoupledPair(1, 1, 0.1, 0, 0.5), new RingModes(40, 32), 144, 2, 4);
   static final Setting A64 =
-      new Setting("A", new CoupledPair(1, 1, 0.1, 0, 0.5), new RingModes(40, 64), 2, 4);
+      new Setting("A", new CoupledPair(1, 1, 0.1, 0, 0.5), new RingModes(40, 64), 288, 2, 4);
   static final Setting B48 =
-      new Setting("B", new CoupledPair(1, 1, 0.1, 0.15, 0.25), new RingModes(32, 48), 2, 5);
+      new Setting("B", new CoupledPair(1, 1, 0.1, 0.15, 0.25), new RingModes(32, 48), 200, 2, 5);
   private static final List<Setting> SETTINGS = List.of(A32, A64, B48);
 
   private EquilibriumComparison() {}
@@ -62,10 +62,12 @@ public final class EquilibriumComparison {
    * @param name short name
    * @param pair parameters
    * @param ring ring and cutoff
+   * @param points grid points, more than 4 n_max so that nothing aliases
    * @param fitFrom smallest distance of the fit of the correlation length
    * @param fitTo largest distance of the fit
    */
-  record Setting(String name, CoupledPair pair, RingModes ring, double fitFrom, double fitTo) {}
+  record Setting(
+      String name, CoupledPair pair, RingModes ring, int points, double fitFrom, double fitTo) {}
 
   /**
    * How long to measure.
@@ -96,7 +98,7 @@ public final class EquilibriumComparison {
     Model model =
         Model.of(
             Projector.modesUpTo(ring.cutoffMode())
-                .on(PeriodicGrid.of(Axis.holdingModes(ring.cutoffMode(), ring.length()))),
+                .on(PeriodicGrid.of(Axis.of(setting.points(), ring.length()))),
             Hamiltonian.pair(pair.g(), 0)
                 .with(CoherentCoupling.constant(pair.coherentCoupling()))
                 .with(BiquadraticCoupling.of(pair.biquadraticCoupling())),
