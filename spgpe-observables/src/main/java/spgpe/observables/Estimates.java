@@ -1,5 +1,6 @@
 package spgpe.observables;
 
+import spgpe.statistics.Estimate;
 import spgpe.internal.check.Check;
 
 /** Several measured numbers with their covariance. Immutable and thread-safe. */
@@ -89,8 +90,8 @@ public final class Estimates {
    * @param i index
    * @return estimate
    */
-  public Measured get(int i) {
-    return new Measured(values[i], standardError(i));
+  public Estimate get(int i) {
+    return new Estimate(values[i], standardError(i));
   }
 
   /**

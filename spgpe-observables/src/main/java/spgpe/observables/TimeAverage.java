@@ -1,5 +1,6 @@
 package spgpe.observables;
 
+import spgpe.statistics.Estimate;
 import java.util.function.ToDoubleFunction;
 import java.util.function.UnaryOperator;
 import spgpe.internal.check.Check;
@@ -184,8 +185,8 @@ public final class TimeAverage implements Accumulator<TimeAverage> {
    * @param i index of the number
    * @return estimate
    */
-  public Measured estimate(int i) {
-    return new Measured(mean(i), standardError(i));
+  public Estimate estimate(int i) {
+    return new Estimate(mean(i), standardError(i));
   }
 
   /**
@@ -219,7 +220,7 @@ public final class TimeAverage implements Accumulator<TimeAverage> {
    * @throws IllegalStateException with fewer than two trajectories, or if the samples are too long
    *     for a covariance
    */
-  public Measured derived(ToDoubleFunction<double[]> function) {
+  public Estimate derived(ToDoubleFunction<double[]> function) {
     Check.notNull(function, "function");
     UnaryOperator<double[]> vector = v -> new double[] {function.applyAsDouble(v)};
     return derivedVector(vector).get(0);

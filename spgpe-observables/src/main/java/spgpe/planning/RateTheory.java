@@ -128,7 +128,7 @@ final class RateTheory {
     if (bubble != null && ring.inter() == 0) {
       double temperature = ring.temperature();
       DecayRate rate = DecayRate.of(bubble, temperature, damping);
-      double constant = Math.log(rate.prefactorPerLength()) + 0.5 * Math.log(temperature);
+      double constant = Math.log(rate.prefactor()) + 0.5 * Math.log(temperature);
       return new RateTheory(
           ring, damping, ExpectedRate.Basis.FULL_SADDLE, bubble.energy(), closed.energy(),
           constant + Math.log(ring.length()), bubble, rate, remarks);

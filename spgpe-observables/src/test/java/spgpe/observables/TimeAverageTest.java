@@ -1,5 +1,6 @@
 package spgpe.observables;
 
+import spgpe.statistics.Estimate;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
@@ -137,10 +138,10 @@ class TimeAverageTest {
       parts.add(trajectory(TimeAverage.from(0), 0, new double[] {x, 2 * x}));
     }
     TimeAverage sum = Samples.merged(parts);
-    Measured ratio = sum.derived(v -> v[1] / v[0]);
+    Estimate ratio = sum.derived(v -> v[1] / v[0]);
     assertEquals(2, ratio.value(), 1e-14);
     assertEquals(0, ratio.standardError(), 1e-6); // derivatives are differences
-    Measured product = sum.derived(v -> v[0] * v[1]);
+    Estimate product = sum.derived(v -> v[0] * v[1]);
     // d(2 x^2) = 4 x dx
     double expected = 12 * sum.standardError(0);
     assertEquals(expected, product.standardError(), 1e-3 * expected);

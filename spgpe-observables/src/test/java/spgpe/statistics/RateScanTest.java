@@ -85,7 +85,7 @@ class RateScanTest {
   }
 
   /**
-   * Measured rates 1.55e-3 (94 events, length 48) and 3.10e-3 (87 events, length 96) have equal
+   * Estimate rates 1.55e-3 (94 events, length 48) and 3.10e-3 (87 events, length 96) have equal
    * densities. Unequal: 100 and 150 events in equal exposure; reference NumPy and SciPy 1.17.
    */
   @Test

@@ -13,7 +13,7 @@ import spgpe.hamiltonian.Hamiltonian;
 import spgpe.integrate.OuRk4;
 import spgpe.model.Model;
 import spgpe.observables.Estimates;
-import spgpe.observables.Measured;
+import spgpe.statistics.Estimate;
 import spgpe.observables.TimeAverage;
 import spgpe.observables.correlation.CorrelationFunction;
 import spgpe.observables.correlation.CorrelationLength;
@@ -89,7 +89,7 @@ public final class EquilibriumComparison {
    * @param sy correlation of S_y
    */
   record Outcome(
-      Setting setting, Measured density, Measured coherence, Measured sySquared,
+      Setting setting, Estimate density, Estimate coherence, Estimate sySquared,
       CorrelationFunction sy) {}
 
   static Outcome measure(Setting setting, Effort effort, Executor executor) {
@@ -155,7 +155,7 @@ public final class EquilibriumComparison {
   }
 
   private static ComparisonTable row(
-      ComparisonTable table, String name, Measured measured, double theory, double relative) {
+      ComparisonTable table, String name, Estimate measured, double theory, double relative) {
     return table.with(
         name, measured.value(), measured.standardError(),
         Prediction.exact(theory, Math.abs(theory) * relative));

@@ -11,6 +11,8 @@ import spgpe.hamiltonian.LocalTerm;
 import spgpe.integrate.OuRk4;
 import spgpe.model.Model;
 import spgpe.observables.FirstPassage;
+import spgpe.observables.TimeAverage;
+import spgpe.observables.density.PairMoment;
 import spgpe.observables.phase.RelativePhase;
 import spgpe.planning.ExpectedRate;
 import spgpe.planning.ShotPlan;
@@ -26,9 +28,11 @@ import spgpe.run.InitialState;
 import spgpe.run.Observable;
 import spgpe.run.Recording;
 import spgpe.run.Schedule;
+import spgpe.run.StopRule;
 import spgpe.run.TimeMoments;
 import spgpe.run.Trajectory;
 import spgpe.run.TrajectoryEnd;
+import spgpe.statistics.Estimate;
 import spgpe.units.CoupledPair;
 import spgpe.units.Density;
 import spgpe.units.Energy;
@@ -105,6 +109,20 @@ final class Snippets {
       fraction, needed, slower.experiment().temperature().nanokelvin(),
       rate.barrierOverTemperature(), model.components()
     };
+  }
+
+  static Estimate metastableAverage(Model model, Executor executor) {
+    // snippet-begin metastable-average
+    Recording<TimeAverage> moments =
+        Recording.of(PairMoment.all(), Schedule.every(10), TimeAverage.beforeDecay(100, 50));
+    StopRule decay = FirstPassage.upward(RelativePhase.meanCosine(), -0.4, Schedule.every(0.5));
+    EnsembleResult result =
+        Ensemble.of(model).startingFrom(InitialState.uniform(1, -1))
+            .integratedBy(OuRk4.ofStep(0.1)).trajectories(4).seed(2026).until(300)
+            .stopWhen(decay).record(moments).runOn(executor);
+    Estimate n = result.get(moments).estimate(PairMoment.DENSITY_1.index());
+    // snippet-end
+    return n;
   }
 
   static double[] ownEnsemble(Executor executor) {

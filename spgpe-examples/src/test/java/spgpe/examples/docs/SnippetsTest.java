@@ -16,6 +16,15 @@ import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
+import spgpe.grid.Axis;
+import spgpe.grid.PeriodicGrid;
+import spgpe.hamiltonian.BiquadraticCoupling;
+import spgpe.hamiltonian.CoherentCoupling;
+import spgpe.hamiltonian.Hamiltonian;
+import spgpe.model.Model;
+import spgpe.projector.CoherentRegion;
+import spgpe.projector.Projector;
+import spgpe.reservoir.Reservoir;
 
 /** The documents show code that compiles and runs, and their links lead somewhere. */
 class SnippetsTest {
@@ -58,6 +67,17 @@ class SnippetsTest {
     assertEquals(23.45, numbers[2], 0.05, "temperature in nK");
     assertEquals(11.06, numbers[3], 0.005, "E_b/T");
     assertEquals(2, numbers[4], "components");
+  }
+
+  @Test
+  void metastableAverageIsNearTheMeanField() {
+    CoherentRegion region = Projector.modesUpTo(24).on(PeriodicGrid.of(Axis.of(128, 48)));
+    Hamiltonian energy =
+        Hamiltonian.pair(1, 0).with(CoherentCoupling.constant(0.1))
+            .with(BiquadraticCoupling.of(0.225));
+    Model model = Model.of(region, energy, Reservoir.of(0.02, 1.1, 0.1));
+    // mean field (mu - J)/g = 1, lowered by about half of the fluctuations of order T
+    assertEquals(1, Snippets.metastableAverage(model, Runnable::run).value(), 0.02);
   }
 
   @Test

@@ -3,7 +3,7 @@ package spgpe.observables.bubble;
 import org.apache.commons.math3.linear.SingularMatrixException;
 import org.apache.commons.math3.stat.regression.OLSMultipleLinearRegression;
 import spgpe.internal.check.Check;
-import spgpe.observables.Measured;
+import spgpe.statistics.Estimate;
 
 /**
  * Speed of bubble walls, outwards, by least squares. Errors come from the scatter about the fit and
@@ -19,7 +19,7 @@ import spgpe.observables.Measured;
  * @param startRadius R0 of the hyperbola; NaN for a linear fit or if R0<sup>2</sup> &lt; 0
  * @param frames number of frames used
  */
-public record WallSpeed(Measured speed, double startTime, double startRadius, int frames) {
+public record WallSpeed(Estimate speed, double startTime, double startRadius, int frames) {
   /** Which wall. */
   public enum Side {
     /** The wall at smaller x, moving left. */
@@ -55,7 +55,7 @@ public record WallSpeed(Measured speed, double startTime, double startRadius, in
     }
     OLSMultipleLinearRegression fit = fit(y, x);
     return new WallSpeed(
-        new Measured(
+        new Estimate(
             fit.estimateRegressionParameters()[1],
             fit.estimateRegressionParametersStandardErrors()[1]),
         Double.NaN, Double.NaN, y.length);
@@ -86,7 +86,7 @@ public record WallSpeed(Measured speed, double startTime, double startRadius, in
     double v = Math.sqrt(p[2]);
     double square = p[0] - p[1] * p[1] / (4 * p[2]);
     return new WallSpeed(
-        new Measured(v, fit.estimateRegressionParametersStandardErrors()[2] / (2 * v)),
+        new Estimate(v, fit.estimateRegressionParametersStandardErrors()[2] / (2 * v)),
         centre - p[1] / (2 * p[2]), square >= 0 ? Math.sqrt(square) : Double.NaN, y.length);
   }
 
@@ -114,7 +114,7 @@ public record WallSpeed(Measured speed, double startTime, double startRadius, in
     requireUpward(p[1]);
     double v = Math.sqrt(p[1]);
     return new WallSpeed(
-        new Measured(v, fit.estimateRegressionParametersStandardErrors()[1] / (2 * v)),
+        new Estimate(v, fit.estimateRegressionParametersStandardErrors()[1] / (2 * v)),
         startTime, p[0] >= 0 ? Math.sqrt(p[0]) : Double.NaN, y.length);
   }
 

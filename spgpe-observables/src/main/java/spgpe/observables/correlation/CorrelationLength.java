@@ -3,7 +3,7 @@ package spgpe.observables.correlation;
 import spgpe.internal.check.Check;
 import spgpe.internal.measure.CurveFit;
 import spgpe.observables.Estimates;
-import spgpe.observables.Measured;
+import spgpe.statistics.Estimate;
 
 /**
  * Correlation length from a fit of C(r) = A f(r) over a range of distances:
@@ -27,7 +27,7 @@ import spgpe.observables.Measured;
  * @param points number of fitted points
  */
 public record CorrelationLength(
-    Measured length, Measured amplitude, double chiSquare, int degreesOfFreedom, int points) {
+    Estimate length, Estimate amplitude, double chiSquare, int degreesOfFreedom, int points) {
   /** How the points of a fit are weighted. */
   public enum Weighting {
     /**
@@ -178,8 +178,8 @@ public record CorrelationLength(
     Check.argument(
         q > 0, "the correlation does not decay over the range: from=%s, to=%s", from, to);
     return new CorrelationLength(
-        new Measured(1 / q, r.error(1) / (q * q)),
-        new Measured(r.parameters()[0], r.error(0)),
+        new Estimate(1 / q, r.error(1) / (q * q)),
+        new Estimate(r.parameters()[0], r.error(0)),
         r.chiSquare(), r.degreesOfFreedom(), n);
   }
 

@@ -2,7 +2,7 @@ package spgpe.observables.density;
 
 import spgpe.internal.check.Check;
 import spgpe.model.Model;
-import spgpe.observables.Measured;
+import spgpe.statistics.Estimate;
 import spgpe.observables.TimeAverage;
 import spgpe.run.Observable;
 import spgpe.run.Snapshot;
@@ -64,9 +64,9 @@ public final class NumberFluctuation implements Observable {
    * @return estimate
    * @throws IllegalArgumentException if the average is not of this observable's size
    */
-  public Measured mean(TimeAverage average) {
+  public Estimate mean(TimeAverage average) {
     require(average);
-    return new Measured(average.mean(0) + reference, average.standardError(0));
+    return new Estimate(average.mean(0) + reference, average.standardError(0));
   }
 
   /**
@@ -77,7 +77,7 @@ public final class NumberFluctuation implements Observable {
    * @throws IllegalArgumentException if the average is not of this observable's size
    * @throws IllegalStateException with fewer than two trajectories
    */
-  public Measured variance(TimeAverage average) {
+  public Estimate variance(TimeAverage average) {
     require(average);
     return average.derived(v -> v[1] - v[0] * v[0]);
   }

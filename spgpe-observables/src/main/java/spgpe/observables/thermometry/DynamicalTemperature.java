@@ -3,7 +3,7 @@ package spgpe.observables.thermometry;
 import spgpe.internal.check.Check;
 import spgpe.internal.measure.CurvatureMeter;
 import spgpe.model.Model;
-import spgpe.observables.Measured;
+import spgpe.statistics.Estimate;
 import spgpe.observables.TimeAverage;
 import spgpe.projector.Amplitudes;
 import spgpe.run.Observable;
@@ -91,7 +91,7 @@ public final class DynamicalTemperature {
    * @throws IllegalArgumentException if the average has another size
    * @throws IllegalStateException with fewer than two trajectories
    */
-  public static Measured temperature(TimeAverage average) {
+  public static Estimate temperature(TimeAverage average) {
     Check.notNull(average, "average");
     Check.argument(
         average.size() == 1 || average.size() == 2,
@@ -107,7 +107,7 @@ public final class DynamicalTemperature {
    * @throws IllegalArgumentException if the average has another size
    * @throws IllegalStateException with fewer than two trajectories
    */
-  public static Measured chemicalPotential(TimeAverage average) {
+  public static Estimate chemicalPotential(TimeAverage average) {
     requireTwo(average);
     return average.derived(v -> v[1] / v[0]);
   }
@@ -120,7 +120,7 @@ public final class DynamicalTemperature {
    * @throws IllegalArgumentException if the average has another size
    * @throws IllegalStateException with fewer than two trajectories
    */
-  public static Measured temperatureFromCurvature(TimeAverage average) {
+  public static Estimate temperatureFromCurvature(TimeAverage average) {
     requireTwo(average);
     return average.derived(v -> v[0] / v[1]);
   }

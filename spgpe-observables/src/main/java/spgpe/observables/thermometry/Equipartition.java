@@ -5,7 +5,7 @@ import spgpe.internal.measure.CurveFit;
 import spgpe.model.ForceEvaluator;
 import spgpe.model.Model;
 import spgpe.observables.Estimates;
-import spgpe.observables.Measured;
+import spgpe.statistics.Estimate;
 import spgpe.observables.TimeAverage;
 import spgpe.projector.Amplitudes;
 import spgpe.projector.CoherentRegion;
@@ -200,8 +200,8 @@ public final class Equipartition implements Observable {
       result = fitOnce(average, occupation, work, result.parameters()[1], scale);
     }
     return new EquipartitionFit(
-        new Measured(result.parameters()[0], result.error(0)),
-        new Measured(result.parameters()[1], result.error(1)),
+        new Estimate(result.parameters()[0], result.error(0)),
+        new Estimate(result.parameters()[1], result.error(1)),
         result.chiSquare(), result.degreesOfFreedom());
   }
 

@@ -1,6 +1,6 @@
 package spgpe.observables.thermometry;
 
-import spgpe.observables.Measured;
+import spgpe.statistics.Estimate;
 
 /**
  * Temperature and chemical potential from generalised equipartition. Immutable and thread-safe.
@@ -12,4 +12,4 @@ import spgpe.observables.Measured;
  * @param degreesOfFreedom bands less two
  */
 public record EquipartitionFit(
-    Measured temperature, Measured chemicalPotential, double chiSquare, int degreesOfFreedom) {}
+    Estimate temperature, Estimate chemicalPotential, double chiSquare, int degreesOfFreedom) {}

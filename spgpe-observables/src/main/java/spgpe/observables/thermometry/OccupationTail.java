@@ -8,7 +8,7 @@ import spgpe.internal.check.Check;
 import spgpe.internal.measure.CurveFit;
 import spgpe.internal.measure.Masses;
 import spgpe.model.Model;
-import spgpe.observables.Measured;
+import spgpe.statistics.Estimate;
 import spgpe.observables.TimeAverage;
 import spgpe.projector.CoherentRegion;
 
@@ -31,7 +31,7 @@ import spgpe.projector.CoherentRegion;
  * @param degreesOfFreedom shells less two
  */
 public record OccupationTail(
-    Measured temperature, Measured offset, double chiSquare, int degreesOfFreedom) {
+    Estimate temperature, Estimate offset, double chiSquare, int degreesOfFreedom) {
 
   private static final double SAME = 1e-9;
 
@@ -100,7 +100,7 @@ public record OccupationTail(
               return (e + p[1]) / p[0];
             });
     return new OccupationTail(
-        new Measured(r.parameters()[0], r.error(0)), new Measured(r.parameters()[1], r.error(1)),
+        new Estimate(r.parameters()[0], r.error(0)), new Estimate(r.parameters()[1], r.error(1)),
         r.chiSquare(), r.degreesOfFreedom());
   }
 }

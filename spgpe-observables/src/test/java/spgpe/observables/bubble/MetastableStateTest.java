@@ -13,7 +13,7 @@ import spgpe.model.Model;
 import spgpe.observables.Estimates;
 import spgpe.observables.Fields;
 import spgpe.observables.FirstPassage;
-import spgpe.observables.Measured;
+import spgpe.statistics.Estimate;
 import spgpe.observables.Samples;
 import spgpe.observables.TimeAverage;
 import spgpe.observables.correlation.CorrelationFunction;
@@ -61,11 +61,11 @@ class MetastableStateTest {
       integral += Math.sinh(c[r]) * 40 / 128 / 2 / Math.sinh(c[0]);
     }
     int half = 64 + 3;
-    Measured mean = average.get(0).estimate(half - 1);
+    Estimate mean = average.get(0).estimate(half - 1);
     assertEquals(mean.value(), f.meanCosine(), 1e-12);
     assertTrue(mean.standardError() < 1e-3, mean::toString);
     assertEquals(-Math.exp(-v / 2), f.meanCosine(), 4 * mean.standardError());
-    Measured length =
+    Estimate length =
         average.get(0).derived(
             x -> {
               double sum = 0;
@@ -78,7 +78,7 @@ class MetastableStateTest {
     assertTrue(length.standardError() < 0.07, length::toString);
     assertEquals(integral, f.phaseLength(), 4 * length.standardError());
     assertEquals(1 / 0.7, integral, 0.05 / 0.7); // cutoff and sinh: a few percent longer
-    Measured variance = average.get(0).derived(x -> x[0] - x[half - 1] * x[half - 1]);
+    Estimate variance = average.get(0).derived(x -> x[0] - x[half - 1] * x[half - 1]);
     assertTrue(variance.standardError() < 0.02 * variance.value(), variance::toString);
     assertEquals(Math.exp(-v) * (Math.cosh(v) - 1), variance.value(), 4 * variance.standardError());
     assertEquals(Math.sqrt(variance.value()), f.deviation(0), 1e-9);

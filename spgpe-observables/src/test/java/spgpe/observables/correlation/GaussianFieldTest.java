@@ -9,7 +9,7 @@ import spgpe.hamiltonian.Hamiltonian;
 import spgpe.model.Model;
 import spgpe.observables.Estimates;
 import spgpe.observables.Fields;
-import spgpe.observables.Measured;
+import spgpe.statistics.Estimate;
 import spgpe.observables.Samples;
 import spgpe.observables.TimeAverage;
 import spgpe.observables.density.AtomNumber;
@@ -81,7 +81,7 @@ class GaussianFieldTest {
       assertWithin4(
           expected, averages.get(3).mean(m), averages.get(3).standardError(m), 0.03 * expected);
     }
-    Measured variance = number.variance(averages.get(4));
+    Estimate variance = number.variance(averages.get(4));
     // var N = sum n_q^2 = 1.06693255 <N>
     assertWithin4(1.06693255 * 40 * n, variance.value(), variance.standardError(), 1.5);
     assertWithin4(40 * n, number.mean(averages.get(4)).value(),

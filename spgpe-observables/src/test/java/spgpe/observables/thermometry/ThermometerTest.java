@@ -18,7 +18,7 @@ import spgpe.model.ForceEvaluator;
 import spgpe.model.Model;
 import spgpe.observables.Estimates;
 import spgpe.observables.Fields;
-import spgpe.observables.Measured;
+import spgpe.statistics.Estimate;
 import spgpe.observables.Samples;
 import spgpe.observables.TimeAverage;
 import spgpe.observables.spectrum.ModeOccupation;
@@ -209,7 +209,7 @@ class ThermometerTest {
     assertMeasures(0.05 / 1.047, tail.temperature(), 0.03);
   }
 
-  private static void assertMeasures(double expected, Measured found, double relative) {
+  private static void assertMeasures(double expected, Estimate found, double relative) {
     assertTrue(
         found.standardError() > 0 && found.standardError() < relative * expected,
         "error too large to say anything: " + found);
