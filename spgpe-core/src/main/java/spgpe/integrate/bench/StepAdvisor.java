@@ -220,7 +220,8 @@ public final class StepAdvisor {
           String.format(
               Locale.ROOT,
               "numerical damping of RK4 cools the highest modes: dt=%.4g exceeds %.4g at"
-                  + " gamma=%.3g; a shorter step, or OuRk4, whose bias does not grow at small gamma",
+                  + " gamma=%.3g; a shorter step, or OuRk4, whose bias does not grow at small"
+                  + " gamma",
               step, cooling, smallestGamma));
     }
     if (meanField * step > LARGEST_MEAN_FIELD_PHASE) {
