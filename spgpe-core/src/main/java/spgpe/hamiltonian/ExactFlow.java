@@ -4,8 +4,8 @@ import spgpe.projector.PointBlock;
 
 /**
  * A local term that can solve its own Hamiltonian equation i dpsi_j/dt = f_j(psi) exactly, point by
- * point. An optional extra, used by split-step schemes on regions that keep every mode of their grid;
- * a projection after such a flow would cost an order, see docs/integrators.md.
+ * point. An optional extra, used by split-step schemes on regions that keep every mode of their
+ * grid; a projection after such a flow would cost an order, see docs/integrators.md.
  */
 public interface ExactFlow extends LocalTerm {
   /** What a flow changes; decides which flows commute. */
@@ -49,7 +49,8 @@ public interface ExactFlow extends LocalTerm {
    *
    * @param time time at which coefficients are taken and held
    * @param duration how far to advance, any sign
-   * @param block points at hand; its psi arrays are changed, its result arrays are not to be touched
+   * @param block points at hand; its psi arrays are changed, its result arrays are not to be
+   *     touched
    */
   void flow(double time, double duration, PointBlock block);
 }

@@ -9,11 +9,11 @@ import spgpe.reservoir.NoiseGenerator;
 /**
  * Clock, state and noise of a stepper, for the built-in schemes and for a user's own.
  *
- * <p>A scheme is written as a loop of "noise, deterministic step, noise" in which the noise after one
- * step and before the next is drawn in one piece. A subclass gives {@link #step}, which takes that
- * piece and then the deterministic step, and {@link #toSymmetricPoint}, which applies the half of the
- * next piece that an observer must see. Schemes without noise need only the deterministic step. Owns
- * scratch memory: one thread at a time.
+ * <p>A scheme is written as a loop of "noise, deterministic step, noise" in which the noise after
+ * one step and before the next is drawn in one piece. A subclass gives {@link #step}, which takes
+ * that piece and then the deterministic step, and {@link #toSymmetricPoint}, which applies the half
+ * of the next piece that an observer must see. Schemes without noise need only the deterministic
+ * step. Owns scratch memory: one thread at a time.
  */
 public abstract class AbstractStepper implements Stepper {
   /** Evaluates the forces of the model. */

@@ -12,9 +12,9 @@ import spgpe.reservoir.NoiseGenerator;
  *
  * <p>The step of the recipe is the interval at which the state can be observed; inside, the scheme
  * takes interval/2<sup>r</sup>. With noise, steps chosen from the state would bias the equilibrium
- * law: models with damping are refused (choose a fixed step with {@link Rk4Ip#suggestStep}). One lane
- * only, for neighbours must not share a step. Method: Balac and Mahe, Comput. Phys. Commun. 184, 1211
- * (2013). Immutable and thread-safe.
+ * law: models with damping are refused (choose a fixed step with {@link Rk4Ip#suggestStep}). One
+ * lane only, for neighbours must not share a step. Method: Balac and Mahe, Comput. Phys. Commun.
+ * 184, 1211 (2013). Immutable and thread-safe.
  */
 public final class AdaptiveRk4Ip implements Integrator {
   private static final int MAX_REFINEMENT = 40;
@@ -34,8 +34,8 @@ public final class AdaptiveRk4Ip implements Integrator {
    * Makes the scheme.
    *
    * @param interval time between possible observations, finite and positive
-   * @param tolerance largest estimated error of one step relative to the norm of the state, 1e-15 to
-   *     0.1
+   * @param tolerance largest estimated error of one step relative to the norm of the state, 1e-15
+   *     to 0.1
    * @return the scheme
    * @throws IllegalArgumentException if a value is out of range
    */

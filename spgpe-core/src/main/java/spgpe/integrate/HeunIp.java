@@ -12,8 +12,8 @@ import spgpe.reservoir.NoiseGenerator;
  * <pre>E = exp(-(i + Gamma) h dt),   N(a) = -(i + gamma) dt P{local force - mu psi}
  * k1 = E N(a),   k2 = N(E a + k1),   a' = E a + (k1 + k2)/2</pre>
  *
- * <p>Its numerical heating or damping is much larger than that of {@link Rk4Ip} at equal cost; in the
- * laboratory frame it would be useless (docs/integrators.md). Immutable and thread-safe.
+ * <p>Its numerical heating or damping is much larger than that of {@link Rk4Ip} at equal cost; in
+ * the laboratory frame it would be useless (docs/integrators.md). Immutable and thread-safe.
  */
 public final class HeunIp implements Integrator {
   private final double step;

@@ -48,8 +48,8 @@ public interface Integrator {
    *     first step
    * @param lanes realisations advanced together
    * @return the stepper
-   * @throws IllegalArgumentException if the step exceeds {@link #largestStableStep}, or if the scheme
-   *     does not fit the model; the message says why
+   * @throws IllegalArgumentException if the step exceeds {@link #largestStableStep}, or if the
+   *     scheme does not fit the model; the message says why
    */
   Stepper bind(Model model, NoiseGenerator noise, int lanes);
 }

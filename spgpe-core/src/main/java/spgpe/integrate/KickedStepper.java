@@ -10,9 +10,9 @@ import spgpe.reservoir.NoiseGenerator;
  *
  * <pre>a_jk += sqrt(gamma_j T dt/2) (z + i z'),   deterministic step,   the same kick again</pre>
  *
- * <p>The halves must be independent: one normal split in two, or noise held over the stages of a step,
- * cools the modes of high energy and has weak order 1 (docs/integrators.md). A subclass gives {@link
- * #deterministicStep}. Owns scratch memory: one thread at a time.
+ * <p>The halves must be independent: one normal split in two, or noise held over the stages of a
+ * step, cools the modes of high energy and has weak order 1 (docs/integrators.md). A subclass gives
+ * {@link #deterministicStep}. Owns scratch memory: one thread at a time.
  */
 public abstract class KickedStepper extends AbstractStepper {
   private final HalfKicks kicks;
@@ -41,8 +41,8 @@ public abstract class KickedStepper extends AbstractStepper {
   protected abstract void deterministicStep(double time);
 
   /**
-   * target = base - (i + gamma_j) h force: an Euler step, the piece that Runge-Kutta schemes are made
-   * of.
+   * target = base - (i + gamma_j) h force: an Euler step, the piece that Runge-Kutta schemes are
+   * made of.
    *
    * @param base where to step from
    * @param h time step

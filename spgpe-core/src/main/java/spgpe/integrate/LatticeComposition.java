@@ -11,7 +11,8 @@ import spgpe.reservoir.NoiseGenerator;
  *
  * <pre>a_1 b_1 a_2 b_2 ... b_s a_(s+1),   sum of a = sum of b = 1.</pre>
  *
- * <p>Every composition of order above two has stages backwards in time (Sheng; Suzuki), in which
+ * <p>Every composition of order above two has stages backwards in time (Sheng, IMA J. Numer. Anal.
+ * 9, 199 (1989); Suzuki, J. Math. Phys. 32, 400 (1991); both from memory), in which
  * damping would grow and noise would need a negative variance: models with damping are refused, and
  * so is a projector. Conserves the norm to rounding. Immutable and thread-safe.
  */
@@ -53,9 +54,9 @@ public final class LatticeComposition implements Integrator {
 
   /**
    * The optimised six-stage splitting of Blanes and Moan, J. Comput. Appl. Math. 142, 313 (2002),
-   * with errors some hundred times below {@link #yoshida} at the same step and twice its cost. It is
-   * no composition of symmetric steps and loses its order when the local flow is not exact: models
-   * whose local terms do not commute are refused.
+   * with errors some hundred times below {@link #yoshida} at the same step and twice its cost. It
+   * is no composition of symmetric steps and loses its order when the local flow is not exact:
+   * models whose local terms do not commute are refused.
    *
    * @param step time step, finite and positive
    * @return the scheme

@@ -6,13 +6,13 @@ import spgpe.projector.Amplitudes;
 import spgpe.reservoir.NoiseGenerator;
 
 /**
- * Strang splitting on the unprojected lattice: exact Ornstein-Uhlenbeck half step of the linear part,
- * flow of the local part point by point, another half step. One pair of transforms per step.
+ * Strang splitting on the unprojected lattice: exact Ornstein-Uhlenbeck half step of the linear
+ * part, flow of the local part point by point, another half step. One pair of transforms per step.
  *
- * <p>Second order; the cheapest scheme for equilibrium where a lattice (all modes kept, forces alias)
- * is accepted. Needs {@link spgpe.projector.Projector#allModes} and local terms that are {@link
- * spgpe.hamiltonian.ExactFlow}s; refuses a projector, since projecting after an exact local flow drops
- * to first order. Strang, SIAM J. Numer. Anal. 5, 506 (1968). Immutable and thread-safe.
+ * <p>Second order; the cheapest scheme for equilibrium where a lattice (all modes kept, forces
+ * alias) is accepted. Needs {@link spgpe.projector.Projector#allModes} and local terms that are
+ * {@link spgpe.hamiltonian.ExactFlow}s; refuses a projector, since projecting after an exact local
+ * flow drops to first order. Strang, SIAM J. Numer. Anal. 5, 506 (1968). Immutable and thread-safe.
  */
 public final class LatticeStrang implements Integrator {
   private final double step;

@@ -5,8 +5,8 @@ import spgpe.model.Model;
 import spgpe.projector.Amplitudes;
 
 /**
- * One deterministic step of RK4 in the interaction picture and its embedded error estimate. The step
- * can be changed by giving other tables of the half flow. One thread at a time.
+ * One deterministic step of RK4 in the interaction picture and its embedded error estimate. The
+ * step can be changed by giving other tables of the half flow. One thread at a time.
  */
 final class LawsonRk4 {
   /** Weights of k1..k4 in the interaction picture at mid-step. */

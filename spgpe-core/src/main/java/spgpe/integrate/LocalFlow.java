@@ -17,8 +17,8 @@ import spgpe.projector.PointBlock;
  * <pre>dpsi_j = -(i + gamma_j)(local force_j - mu_j psi_j) dt</pre>
  *
  * <p>The Hamiltonian part is a palindrome of exact flows (one product if they all commute); the
- * damping part, which is small, takes explicit midpoint half steps before and after it. One thread at
- * a time.
+ * damping part, which is small, takes explicit midpoint half steps before and after it. One thread
+ * at a time.
  */
 final class LocalFlow {
   private final Model model;

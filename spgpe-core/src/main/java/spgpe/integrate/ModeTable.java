@@ -4,9 +4,9 @@ import spgpe.internal.linear.ComplexMatrix;
 import spgpe.projector.Amplitudes;
 
 /**
- * A complex matrix over the components for each mode, repeated for each lane, so that applying it is
- * a flat loop. Immutable; elements (or imaginary parts) that vanish for every mode are kept as empty
- * arrays and take no time.
+ * A complex matrix over the components for each mode, repeated for each lane, so that applying it
+ * is a flat loop. Immutable; elements (or imaginary parts) that vanish for every mode are kept as
+ * empty arrays and take no time.
  */
 final class ModeTable {
   private final int components;

@@ -13,9 +13,9 @@ import spgpe.projector.Amplitudes;
  * a(t + tau) = E a(t) + xi,   E = exp(-A tau),
  * C(tau) = &lt;xi xi^+&gt; = integral from 0 to tau of e^(-A s) 2 Gamma T e^(-A^+ s) ds,</pre>
  *
- * <p>for one mode of energy w: C = (T/w)(1 - exp(-2 gamma w tau)) (Uhlenbeck and Ornstein, Phys. Rev.
- * 36, 823 (1930)). For coupled components E and C come from one block exponential (Van Loan, IEEE
- * Trans. Autom. Control 23, 395 (1978)).
+ * <p>for one mode of energy w: C = (T/w)(1 - exp(-2 gamma w tau)) (Uhlenbeck and Ornstein, Phys.
+ * Rev. 36, 823 (1930)). For coupled components E and C come from one block exponential (Van Loan,
+ * IEEE Trans. Autom. Control 23, 395 (1978)).
  *
  * <p>Two neighbouring half steps of a splitting scheme are taken in one, tau = dt, with noise L z.
  * The state between them, which observers want, is E_half a + xi_half with xi_half drawn given the

@@ -9,11 +9,12 @@ import spgpe.reservoir.NoiseGenerator;
  * Exact Ornstein-Uhlenbeck half step of the linear part, implicit midpoint step of the projected
  * nonlinear part, another half step: for long runs that must conserve the norm.
  *
- * <pre>m = a + (dt/2) A(m),   a' = 2 m - a,   A(m) = -(i + gamma_j) P{local force - mu_j psi_j}(m)</pre>
+ * <pre>m = a + (dt/2) A(m),   a' = 2 m - a,
+ * A(m) = -(i + gamma_j) P{local force - mu_j psi_j}(m)</pre>
  *
  * <p>Second order; without damping the norm is conserved to the tolerance. The equation for m is
- * iterated until no amplitude changes by more than tolerance times the largest one, in each lane for
- * itself, so that lanes do not depend on each other. A fixed number of iterations would bring a
+ * iterated until no amplitude changes by more than tolerance times the largest one, in each lane
+ * for itself, so that lanes do not depend on each other. A fixed number of iterations would bring a
  * spurious damping or growth (docs/integrators.md). Immutable and thread-safe.
  */
 public final class OuMidpoint implements Integrator {
@@ -150,8 +151,8 @@ public final class OuMidpoint implements Integrator {
     private void requireConvergence(boolean condition, double time) {
       if (!condition) {
         throw new IllegalStateException(
-            "midpoint iteration must converge within " + MAX_ITERATIONS + " iterations: time=" + time
-                + ", step=" + dt + ", tolerance=" + tolerance
+            "midpoint iteration must converge within " + MAX_ITERATIONS + " iterations: time="
+                + time + ", step=" + dt + ", tolerance=" + tolerance
                 + "; use a smaller step (g n dt/2 must stay well below 1)");
       }
     }

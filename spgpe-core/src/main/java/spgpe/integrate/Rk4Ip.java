@@ -81,8 +81,8 @@ public final class Rk4Ip implements Integrator {
    * @param time time at which to try
    * @param tolerance relative error of one step, 1e-14 to 0.1
    * @return dt
-   * @throws IllegalArgumentException if the tolerance is out of range, the state is zero or not finite
-   *     or the shape does not fit
+   * @throws IllegalArgumentException if the tolerance is out of range, the state is zero or not
+   *     finite or the shape does not fit
    */
   public static double suggestStep(Model model, Amplitudes state, double time, double tolerance) {
     Check.notNull(model, "model");
@@ -103,7 +103,8 @@ public final class Rk4Ip implements Integrator {
       scheme.step(time, step, LinearFlow.over(step / 2, model, lanes), trial);
       double error = scheme.relativeError(time + step, step, trial);
       Check.argument(
-          Double.isFinite(error), "the state must be finite and not zero: relative error=%s", error);
+          Double.isFinite(error), "the state must be finite and not zero: relative error=%s",
+          error);
       if (error <= tolerance && (error >= 0.9 * tolerance || step == largest)) {
         break;
       }

@@ -3,14 +3,15 @@ package spgpe.integrate;
 import spgpe.internal.check.Check;
 
 /**
- * What is known of a scheme, for choosing one and for testing the claims. Immutable and thread-safe.
+ * What is known of a scheme, for choosing one and for testing the claims. Immutable and
+ * thread-safe.
  *
  * @param deterministicOrder order of the global error of a run without noise
  * @param admitsNoise whether the scheme runs models with noise
  * @param strongOrder order of the error of single paths with additive noise; 0 without noise
  * @param weakOrder order of the error of averages with additive noise; 0 without noise
- * @param forceEvaluationsPerStep evaluations of the nonlinear part in one step, each of them one pair
- *     of transforms of all components; for iterated schemes the usual number
+ * @param forceEvaluationsPerStep evaluations of the nonlinear part in one step, each of them one
+ *     pair of transforms of all components; for iterated schemes the usual number
  * @param latticeOnly whether the scheme needs a region that keeps every mode of its grid
  */
 public record SchemeFacts(
@@ -27,8 +28,8 @@ public record SchemeFacts(
    * @param admitsNoise whether the scheme runs models with noise
    * @param strongOrder order of the error of single paths with additive noise; 0 without noise
    * @param weakOrder order of the error of averages with additive noise; 0 without noise
-   * @param forceEvaluationsPerStep evaluations of the nonlinear part in one step, each of them one pair
-   *     of transforms of all components; for iterated schemes the usual number
+   * @param forceEvaluationsPerStep evaluations of the nonlinear part in one step, each of them one
+   *     pair of transforms of all components; for iterated schemes the usual number
    * @param latticeOnly whether the scheme needs a region that keeps every mode of its grid
    * @throws IllegalArgumentException if a value is out of range
    */

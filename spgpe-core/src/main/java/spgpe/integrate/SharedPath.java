@@ -8,10 +8,10 @@ import spgpe.reservoir.NoiseGenerator;
 import spgpe.reservoir.RandomStreams;
 
 /**
- * Random streams whose Brownian path is the same for different steps: the normals of a long step are
- * sums of those of the short steps inside it. Streams with the same base and ratios 1, 2, 4 serve runs
- * at dt, 2 dt, 4 dt. For measuring strong and weak orders with paired paths; slower than the base by
- * about twice the ratio. Immutable and thread-safe.
+ * Random streams whose Brownian path is the same for different steps: the normals of a long step
+ * are sums of those of the short steps inside it. Streams with the same base and ratios 1, 2, 4
+ * serve runs at dt, 2 dt, 4 dt. For measuring strong and weak orders with paired paths; slower than
+ * the base by about twice the ratio. Immutable and thread-safe.
  */
 public final class SharedPath implements RandomStreams {
   private final RandomStreams base;

@@ -6,7 +6,8 @@ import spgpe.projector.Amplitudes;
 /**
  * Sums of Runge-Kutta stages. With a force F the increment of a stage is
  *
- * <pre>k = -(i + gamma_j) dt F:   Re k = dt (Im F - gamma_j Re F),   Im k = -dt (Re F + gamma_j Im F).</pre>
+ * <pre>k = -(i + gamma_j) dt F:
+ * Re k = dt (Im F - gamma_j Re F),   Im k = -dt (Re F + gamma_j Im F).</pre>
  */
 final class StageSum {
   private final double[] gamma;

@@ -5,10 +5,10 @@ import spgpe.projector.Amplitudes;
 /**
  * Advances a state in time. Owns its state and scratch memory: one thread at a time.
  *
- * <p>Splitting schemes have a point in each step at which the state follows the equilibrium law best
- * (the symmetric point, after half of the noise). {@link #start} takes the state at that point and
- * {@link #observe} gives it there; what is carried from step to step inside need not be the same.
- * Observing changes nothing, so a trajectory does not depend on when it was looked at.
+ * <p>Splitting schemes have a point in each step at which the state follows the equilibrium law
+ * best (the symmetric point, after half of the noise). {@link #start} takes the state at that point
+ * and {@link #observe} gives it there; what is carried from step to step inside need not be the
+ * same. Observing changes nothing, so a trajectory does not depend on when it was looked at.
  */
 public interface Stepper {
   /**

@@ -4,9 +4,9 @@ import spgpe.internal.check.Check;
 import spgpe.projector.Amplitudes;
 
 /**
- * Everything a {@link Stepper} carries from step to step: with it, the same scheme, model and random
- * streams, a run goes on bit for bit as if it had not been interrupted. Noise needs no state of its
- * own, for it is a function of the step number. Immutable and thread-safe.
+ * Everything a {@link Stepper} carries from step to step: with it, the same scheme, model and
+ * random streams, a run goes on bit for bit as if it had not been interrupted. Noise needs no state
+ * of its own, for it is a function of the step number. Immutable and thread-safe.
  */
 public final class StepperState {
   private final Amplitudes inner;

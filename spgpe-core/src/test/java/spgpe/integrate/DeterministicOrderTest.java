@@ -97,9 +97,9 @@ class DeterministicOrderTest {
   }
 
   /**
-   * The forbidden scheme, built from parts: project after the exact local flow. P exp(-iV dt) differs
-   * from the projected flow by (dt^2/2) P V (1-P) V psi in each step, so the order is one and the norm
-   * leaks in proportion to dt.
+   * The forbidden scheme, built from parts: project after the exact local flow. P exp(-iV dt)
+   * differs from the projected flow by (dt^2/2) P V (1-P) V psi in each step, so the order is one
+   * and the norm leaks in proportion to dt.
    */
   @Test
   void projectionAfterAnExactLocalFlowIsOfOrderOne() {
@@ -151,8 +151,8 @@ class DeterministicOrderTest {
   }
 
   /**
-   * At dt = 0.05 the default conserves atoms and momentum, RK4IP leaks both; the energy of the default
-   * oscillates by O(dt^2), that of RK4IP drifts.
+   * At dt = 0.05 the default conserves atoms and momentum, RK4IP leaks both; the energy of the
+   * default oscillates by O(dt^2), that of RK4IP drifts.
    */
   @Test
   void driftsOfAtomNumberAndMomentum() {

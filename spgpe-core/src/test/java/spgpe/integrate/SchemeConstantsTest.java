@@ -23,8 +23,9 @@ class SchemeConstantsTest {
   }
 
   /**
-   * Order conditions of the embedded pair (Butcher): sum b = 1, sum b c = 1/2, sum b c^2 = 1/3, sum b A
-   * c = 1/6, sum b A c^2 = 1/12 for order four, for the classical stages and a fifth one at the end of the step.
+   * Order conditions of the embedded pair (Butcher): sum b = 1, sum b c = 1/2, sum b c^2 = 1/3, sum
+   * b A c = 1/6, sum b A c^2 = 1/12 for order four, for the classical stages and a fifth one at the
+   * end of the step.
    */
   @Test
   void embeddedPairFulfilsItsOrderConditions() {

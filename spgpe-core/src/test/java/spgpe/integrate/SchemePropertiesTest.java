@@ -53,8 +53,8 @@ class SchemePropertiesTest {
   }
 
   /**
-   * gamma = 0: atom number and momentum to 1e-10, K to O(dt^2); the lattice conserves the number alone,
-   * for aliasing breaks momentum.
+   * gamma = 0: atom number and momentum to 1e-10, K to O(dt^2); the lattice conserves the number
+   * alone, for aliasing breaks momentum.
    */
   @Property(tries = 25, seed = "71")
   void conservation(

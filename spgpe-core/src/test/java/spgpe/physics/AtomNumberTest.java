@@ -30,25 +30,26 @@ class AtomNumberTest {
   }
 
   /**
-   * Density at T = 0.1, mu = g = 1 on a ring of length 32 with modes |n| &lt;= 31: 0.946820 from the
-   * transfer operator of the uncut field plus 0.01092 for the cutoff, derived in docs/validation.md: 0.9577.
-   * Tolerance 0.002 for the leading-order cutoff correction; standard error about 0.0004, so no false
-   * alarm to speak of (4.5 sigma below the tolerance). A temperature off by 10 % moves it by 0.006.
+   * Density at T = 0.1, mu = g = 1 on a ring of length 32 with modes |n| &lt;= 31: 0.946820 from
+   * the transfer operator of the uncut field plus 0.01092 for the cutoff, derived in
+   * docs/validation.md: 0.9577. Tolerance 0.002 for the leading-order cutoff correction; standard
+   * error about 0.0004, so no false alarm to speak of (4.5 sigma below the tolerance). A
+   * temperature off by 10 % moves it by 0.006.
    */
   @Test
   void densityAgreesWithTheTransferOperator() {
     Estimate n =
         ThermalRuns.run(
-            model(32, 31, 1, 2), OuRk4.ofStep(0.05), ThermalRuns.equilibrium(0.97), ATOMS, 41, 64, 5,
-            0.5, 155)[0];
+            model(32, 31, 1, 2), OuRk4.ofStep(0.05), ThermalRuns.equilibrium(0.97), ATOMS, 41, 64,
+            5, 0.5, 155)[0];
     assertTrue(n.error() / 32 < 0.0006, "error=" + n.error() / 32);
     assertEquals(0.9577, n.mean() / 32, 0.002);
   }
 
   /**
-   * var N = T d&lt;N&gt;/dmu (a property of exp(-K/T)); the slope from runs at mu = 0.8 and 1.2. Some 3000
-   * samples 2.5 apart, correlation time 1: relative error of the variance 3 %, limit 12 % (4 sigma,
-   * false alarm 6e-5). Noise of twice the strength in one part only would break it.
+   * var N = T d&lt;N&gt;/dmu (a property of exp(-K/T)); the slope from runs at mu = 0.8 and 1.2.
+   * Some 3000 samples 2.5 apart, correlation time 1: relative error of the variance 3 %, limit 12 %
+   * (4 sigma, false alarm 6e-5). Noise of twice the strength in one part only would break it.
    */
   @Test
   void fluctuationOfTheAtomNumber() {
@@ -58,8 +59,8 @@ class AtomNumberTest {
     for (double mu : new double[] {0.8, 1, 1.2}) {
       List<TimeSeries.Series> all =
           ThermalRuns.series(
-              model(16, 15, mu, 0.5), OuRk4.ofStep(0.05), ThermalRuns.equilibrium(Math.sqrt(mu)), ATOMS,
-              42, 24, 5, 2.5, mu == 1 ? 330 : 105);
+              model(16, 15, mu, 0.5), OuRk4.ofStep(0.05), ThermalRuns.equilibrium(Math.sqrt(mu)),
+              ATOMS, 42, 24, 5, 2.5, mu == 1 ? 330 : 105);
       double sum = 0;
       double squares = 0;
       double count = 0;

@@ -70,9 +70,9 @@ class ClosedFormTest {
   }
 
   /**
-   * Two grey solitons running towards each other, psi = i v + B tanh(B (x - v t)), B^2 = 1 - v^2, at g = n = 1
-   * (Tsuzuki, J. Low Temp. Phys. 4, 441 (1971)). Each moves in the other's uniform background: the
-   * product is exact up to exp(-2 B distance).
+   * Two grey solitons running towards each other, psi = i v + B tanh(B (x - v t)), B^2 = 1 - v^2,
+   * at g = n = 1 (Tsuzuki, J. Low Temp. Phys. 4, 441 (1971)). Each moves in the other's uniform
+   * background: the product is exact up to exp(-2 B distance).
    */
   @Test
   void darkSolitons() {
@@ -96,8 +96,8 @@ class ClosedFormTest {
   }
 
   /**
-   * Vector bright soliton of equal attractive couplings, psi_j = c_j A sech(A (x - v t)) exp(i v x +
-   * i (A^2 - v^2) t/2), sum of |c_j|^2 = 1 (Manakov, Sov. Phys. JETP 38, 248 (1974)).
+   * Vector bright soliton of equal attractive couplings, psi_j = c_j A sech(A (x - v t)) exp(i v x
+   * + i (A^2 - v^2) t/2), sum of |c_j|^2 = 1 (Manakov, Sov. Phys. JETP 38, 248 (1974)).
    */
   @Test
   void manakovVectorSoliton() {
@@ -129,8 +129,8 @@ class ClosedFormTest {
   }
 
   /**
-   * Detuned Rabi oscillation: all atoms in component 1 at t = 0, N_2/N = (4 J^2/W^2) sin^2(W t/2), W^2
-   * = 4 J^2 + delta^2 (Rabi, Phys. Rev. 51, 652 (1937)); equal couplings leave it unchanged.
+   * Detuned Rabi oscillation: all atoms in component 1 at t = 0, N_2/N = (4 J^2/W^2) sin^2(W t/2),
+   * W^2 = 4 J^2 + delta^2 (Rabi, Phys. Rev. 51, 652 (1937)); equal couplings leave it unchanged.
    */
   @ParameterizedTest
   @ValueSource(doubles = {0, 0.7})
@@ -178,8 +178,8 @@ class ClosedFormTest {
 
   /**
    * Josephson plasma frequency of a uniform pair about phase 0: w^2 = (2J + 2 kappa n)(2J + 2 (g -
-   * g_12) n) (for kappa = 0 Whitlock and Bouchoule, Phys. Rev. A 68, 053609 (2003), from memory; the
-   * biquadratic part is derived in docs/validation.md).
+   * g_12) n) (for kappa = 0 Whitlock and Bouchoule, Phys. Rev. A 68, 053609 (2003), from memory;
+   * the biquadratic part is derived in docs/validation.md).
    */
   @ParameterizedTest
   @ValueSource(doubles = {0, 0.15})
@@ -209,7 +209,9 @@ class ClosedFormTest {
     assertEquals(1, frequency(difference, 0.05) / expected, 1e-5);
   }
 
-  /** Bogoliubov dispersion E = sqrt(eps (eps + 2 g n)) (Bogoliubov, J. Phys. USSR 11, 23 (1947)). */
+  /**
+   * Bogoliubov dispersion E = sqrt(eps (eps + 2 g n)) (Bogoliubov, J. Phys. USSR 11, 23 (1947)).
+   */
   @ParameterizedTest
   @ValueSource(ints = {1, 2, 5, 9})
   void bogoliubovDispersion(int n) {

@@ -23,9 +23,10 @@ import spgpe.reservoir.Reservoir;
 
 /**
  * Equilibrium invariants of an interacting, coupled pair, derived from the law exp(-K/T): for every
- * mode Re &lt;a^* dK/da^*&gt; = T; their sum &lt;K2 + 2 K4&gt; = M T; &lt;sum gamma |f|^2&gt; = T &lt;sum gamma
- * d2K/da da^*&gt;. Errors are taken across trajectories, which are independent; limits are 4.5 of them
- * (with 24 trajectories a false alarm of 1.6e-4 per number, about 1e-3 per test).
+ * mode Re &lt;a^* dK/da^*&gt; = T; their sum &lt;K2 + 2 K4&gt; = M T; &lt;sum gamma |f|^2&gt; = T
+ * &lt;sum gamma d2K/da da^*&gt;. Errors are taken across trajectories, which are independent;
+ * limits are 4.5 of them (with 24 trajectories a false alarm of 1.6e-4 per number, about 1e-3 per
+ * test).
  */
 class EquipartitionTest {
   private static final int BANDS = 3;
@@ -80,7 +81,9 @@ class EquipartitionTest {
     }
   }
 
-  /** The test above would see it: RK4IP at dt = 0.1 and gamma = 1e-3 cools the upper band by 14 %. */
+  /**
+   * The test above would see it: RK4IP at dt = 0.1 and gamma = 1e-3 cools the upper band by 14 %.
+   */
   @Test
   void numericalCoolingOfRk4IsSeen() {
     Estimate[] found = run(model(1e-3), Rk4Ip.ofStep(0.1), 33, 400);
@@ -104,8 +107,8 @@ class EquipartitionTest {
   }
 
   /**
-   * Generated models: temperatures, chemical potentials, couplings and unequal dampings. Errors of the
-   * bands below 3 %, so 13 % is seen.
+   * Generated models: temperatures, chemical potentials, couplings and unequal dampings. Errors of
+   * the bands below 3 %, so 13 % is seen.
    */
   @ParameterizedTest
   @ValueSource(ints = {1, 2, 3, 4})

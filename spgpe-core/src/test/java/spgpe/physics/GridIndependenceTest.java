@@ -95,8 +95,8 @@ class GridIndependenceTest {
   }
 
   /**
-   * The threshold N = 4 n_c + 1 for a cubic force is sharp (derived, docs/theory.md): with one point
-   * less the force is wrong, and momentum leaks while the norm does not.
+   * The threshold N = 4 n_c + 1 for a cubic force is sharp (derived, docs/theory.md): with one
+   * point less the force is wrong, and momentum leaks while the norm does not.
    */
   @Test
   void onePointLessAliases() {

@@ -23,9 +23,9 @@ import spgpe.reservoir.RandomStreams;
 import spgpe.reservoir.Reservoir;
 
 /**
- * Equilibrium of the ideal gas: n_k = T/(eps_k - mu), |a_k|^2 exponential (Blakie et al., Adv. Phys.
- * 57, 363 (2008)). Samples are at least 5 slowest amplitude times apart, 64 x 250 = 16000 of them, so
- * practically independent.
+ * Equilibrium of the ideal gas: n_k = T/(eps_k - mu), |a_k|^2 exponential (Blakie et al., Adv.
+ * Phys. 57, 363 (2008)). Samples are at least 5 slowest amplitude times apart, 64 x 250 = 16000 of
+ * them, so practically independent.
  */
 class IdealGasTest {
   private static final int LANES = 64;
@@ -168,8 +168,8 @@ class IdealGasTest {
 
   /**
    * Two coupled ideal components: covariance T h^-1 whatever the dampings, here 0.3 and 3. Standard
-   * errors 0.8 %; 4.5 of them (false alarm 2e-5). Detailed balance lost by mixing up the dampings would
-   * shift the populations by tens of percent.
+   * errors 0.8 %; 4.5 of them (false alarm 2e-5). Detailed balance lost by mixing up the dampings
+   * would shift the populations by tens of percent.
    */
   @Test
   void coupledComponentsForgetTheirDampings() {

@@ -24,9 +24,10 @@ import spgpe.reservoir.Reservoir;
 
 /**
  * Covariance of the noise of one step, from an empty field, by 64 lanes x 400 steps x 11 modes =
- * 281600 complex numbers for each component. Every estimate is compared at 4.5 standard errors (false
- * alarm 7e-6 each, 2e-4 for the class). The relative standard error of a variance is 0.19 %: a wrong
- * factor of 2 or sqrt(2), a missing dx or dt, or noise held over the step (2 % here) is seen.
+ * 281600 complex numbers for each component. Every estimate is compared at 4.5 standard errors
+ * (false alarm 7e-6 each, 2e-4 for the class). The relative standard error of a variance is 0.19 %:
+ * a wrong factor of 2 or sqrt(2), a missing dx or dt, or noise held over the step (2 % here) is
+ * seen.
  */
 class NoiseCovarianceTest {
   private static final int LANES = 64;

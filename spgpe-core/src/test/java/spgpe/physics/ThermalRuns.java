@@ -74,9 +74,10 @@ final class ThermalRuns {
   }
 
   /**
-   * Re(a^* f)/T averaged over the modes of bands of |k| (the condensate mode left out), then the sum
-   * over all modes divided by M T (virial), then sum of gamma |f|^2 over T sum of gamma d2K/da da^*
-   * (power balance) for contact and biquadratic interaction, then atom number, then K. One thread.
+   * Re(a^* f)/T averaged over the modes of bands of |k| (the condensate mode left out), then the
+   * sum over all modes divided by M T (virial), then sum of gamma |f|^2 over T sum of gamma d2K/da
+   * da^* (power balance) for contact and biquadratic interaction, then atom number, then K. One
+   * thread.
    */
   static Observable invariants(Model forModel, int bands, double g, double inter, double kappa) {
     ForceEvaluator forces = forModel.evaluator(1);

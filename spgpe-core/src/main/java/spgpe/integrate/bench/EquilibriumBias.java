@@ -99,8 +99,8 @@ public final class EquilibriumBias {
    * @param tolerance largest |bias|, 1e-8 to 0.5
    * @param upperLimit where to stop searching, finite and positive
    * @return dt, to a relative accuracy of about 1e-3
-   * @throws IllegalArgumentException if a value is out of range or no step down to upperLimit/1e3 is
-   *     good enough
+   * @throws IllegalArgumentException if a value is out of range or no step down to upperLimit/1e3
+   *     is good enough
    */
   public double largestStep(Integrator scheme, double tolerance, double upperLimit) {
     Check.notNull(scheme, "integrator");
@@ -150,7 +150,8 @@ public final class EquilibriumBias {
       Worst worst = worst(scheme.withStep(step));
       text.append(
           String.format(
-              Locale.ROOT, "step %-8.4g gamma %-8.3g worst occupation bias %+9.4f %% at energy %.3f%n",
+              Locale.ROOT,
+              "step %-8.4g gamma %-8.3g worst occupation bias %+9.4f %% at energy %.3f%n",
               step, damping, 100 * worst.bias(), worst.energy()));
     }
     return text.toString();

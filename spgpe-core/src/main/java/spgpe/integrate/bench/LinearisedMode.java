@@ -20,8 +20,8 @@ import spgpe.reservoir.Reservoir;
  * <pre>K = (eps + 2 gn) x^2 + eps y^2,     da = -(i + gamma)(eps a + 2 gn x) dt + dW,
  * exact law: &lt;x^2&gt; = T/(2 (eps + 2 gn)),   &lt;y^2&gt; = T/(2 eps).</pre>
  *
- * <p>On it every scheme is a linear map s' = M s + noise of covariance Q between symmetric points. M
- * and Q are read off the scheme itself, by its response to unit states and to unit noise numbers;
+ * <p>On it every scheme is a linear map s' = M s + noise of covariance Q between symmetric points.
+ * M and Q are read off the scheme itself, by its response to unit states and to unit noise numbers;
  * the covariance S that the scheme really has solves the discrete Lyapunov equation S = M S
  * M<sup>T</sup> + Q, without sampling. The test runs on a lattice of two points, so schemes that
  * need one fit too. Immutable and thread-safe.

@@ -4,8 +4,8 @@ import spgpe.hamiltonian.ExactFlow;
 import spgpe.projector.PointBlock;
 
 /**
- * What is left of a contact interaction after linearisation about a uniform condensate: K = integral
- * of 2 gn (Re psi)^2, force f = gn (psi + psi^*). Immutable and thread-safe.
+ * What is left of a contact interaction after linearisation about a uniform condensate: K =
+ * integral of 2 gn (Re psi)^2, force f = gn (psi + psi^*). Immutable and thread-safe.
  */
 record QuadraticMeanField(double meanField) implements ExactFlow {
   @Override

@@ -16,8 +16,8 @@ import spgpe.model.Model;
  *
  * <p>The prediction is that of {@link LinearisedMode}s of the model's kinetic energies at one mean
  * field, by default the largest |mu_j| plus the largest coherent coupling: a uniform gas. It says
- * nothing about errors of real-time dynamics, see {@link Rk4Ip#suggestStep} for those. Immutable and
- * thread-safe.
+ * nothing about errors of real-time dynamics, see {@link Rk4Ip#suggestStep} for those. Immutable
+ * and thread-safe.
  */
 public final class StepAdvisor {
   private static final double DEFAULT_TOLERANCE = 1e-3;
@@ -49,8 +49,8 @@ public final class StepAdvisor {
    * @param bias worst relative occupation bias; infinite if unstable
    * @param worstEnergy kinetic energy of the worst mode
    * @param stabilityLimit pi/(eps_max + 2 g n)
-   * @param rk4CoolingLimit step at which the numerical damping of RK4 in the interaction picture cools
-   *     the highest modes by the tolerance, [72 gamma tol/((g n)^2 eps_max^3)]^(1/5)
+   * @param rk4CoolingLimit step at which the numerical damping of RK4 in the interaction picture
+   *     cools the highest modes by the tolerance, [72 gamma tol/((g n)^2 eps_max^3)]^(1/5)
    * @param evaluationsPerTime force evaluations per unit time
    * @param warnings what else to mind, in words
    */
@@ -65,8 +65,8 @@ public final class StepAdvisor {
      * @param bias worst relative occupation bias; infinite if unstable
      * @param worstEnergy kinetic energy of the worst mode
      * @param stabilityLimit pi/(eps_max + 2 g n)
-     * @param rk4CoolingLimit step at which the numerical damping of RK4 in the interaction picture cools
-     *     the highest modes by the tolerance, [72 gamma tol/((g n)^2 eps_max^3)]^(1/5)
+     * @param rk4CoolingLimit step at which the numerical damping of RK4 in the interaction picture
+     *     cools the highest modes by the tolerance, [72 gamma tol/((g n)^2 eps_max^3)]^(1/5)
      * @param evaluationsPerTime force evaluations per unit time
      * @param warnings what else to mind, in words
      */
@@ -178,7 +178,8 @@ public final class StepAdvisor {
    *
    * @param scheme any scheme that admits noise, with its step
    * @return the advice
-   * @throws IllegalArgumentException if the scheme refuses the model for a reason other than the step
+   * @throws IllegalArgumentException if the scheme refuses the model for a reason other than the
+   *     step
    */
   public Advice examine(Integrator scheme) {
     Check.notNull(scheme, "integrator");
@@ -218,16 +219,17 @@ public final class StepAdvisor {
       warnings.add(
           String.format(
               Locale.ROOT,
-              "numerical damping of RK4 cools the highest modes: dt=%.4g exceeds %.4g at gamma=%.3g;"
-                  + " a shorter step, or OuRk4, whose bias does not grow at small gamma",
+              "numerical damping of RK4 cools the highest modes: dt=%.4g exceeds %.4g at"
+                  + " gamma=%.3g; a shorter step, or OuRk4, whose bias does not grow at small"
+                  + " gamma",
               step, cooling, smallestGamma));
     }
     if (meanField * step > LARGEST_MEAN_FIELD_PHASE) {
       warnings.add(
           String.format(
               Locale.ROOT,
-              "g n dt should not exceed %.1f, else errors beyond the linearised ones grow: g n=%.4g,"
-                  + " dt=%.4g", LARGEST_MEAN_FIELD_PHASE, meanField, step));
+              "g n dt should not exceed %.1f, else errors beyond the linearised ones grow:"
+                  + " g n=%.4g, dt=%.4g", LARGEST_MEAN_FIELD_PHASE, meanField, step));
     }
     return new Advice(
         step, verdict, worst.bias(), worst.energy(), stabilityLimit(), cooling,

@@ -40,7 +40,8 @@ public record WorkPrecision(double tolerance, List<Row> rows) {
    * @param longestStep where to stop searching, finite and positive
    * @param schemes any schemes; their own steps do not matter
    * @return the table, in the order of the schemes
-   * @throws IllegalArgumentException if a value is out of range or a scheme cannot reach the tolerance
+   * @throws IllegalArgumentException if a value is out of range or a scheme cannot reach the
+   *     tolerance
    */
   public static WorkPrecision compare(
       EquilibriumBias modes, double tolerance, double longestStep, List<Integrator> schemes) {

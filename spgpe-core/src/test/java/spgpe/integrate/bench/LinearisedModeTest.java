@@ -43,8 +43,8 @@ class LinearisedModeTest {
   }
 
   /**
-   * Without interaction: OU schemes are exact; independent half kicks give x coth x, x = gamma eps dt
-   * (derived, docs/integrators.md).
+   * Without interaction: OU schemes are exact; independent half kicks give x coth x, x = gamma eps
+   * dt (derived, docs/integrators.md).
    */
   @ParameterizedTest
   @CsvSource({"0.1, 0.1, 18", "1, 0.05, 5", "0.001, 0.1, 10"})
@@ -62,9 +62,9 @@ class LinearisedModeTest {
   }
 
   /**
-   * First growth in a scan of the energy at gn = 1 (a resonance near dt eps = pi - 2 gn dt). Published
-   * for split-step schemes by Weideman and Herbst, SIAM J. Numer. Anal. 23, 485 (1986); numbers from
-   * our own scan, docs/validation.md.
+   * First growth in a scan of the energy at gn = 1 (a resonance near dt eps = pi - 2 gn dt).
+   * Published for split-step schemes by Weideman and Herbst, SIAM J. Numer. Anal. 23, 485 (1986);
+   * numbers from our own scan, docs/validation.md.
    */
   @ParameterizedTest
   @CsvSource({"0.1, 2.94", "0.2, 2.75"})
@@ -99,9 +99,9 @@ class LinearisedModeTest {
   }
 
   /**
-   * A long run without restarts has the variances that the unit responses predict, here 5 to 10 % off
-   * the exact law. 64 lanes x 3000 samples, correlation time about 2 of them: standard error of a
-   * variance 0.5 %; limit 4.5 of them (false alarm 3e-5 for the four numbers).
+   * A long run without restarts has the variances that the unit responses predict, here 5 to 10 %
+   * off the exact law. 64 lanes x 3000 samples, correlation time about 2 of them: standard error of
+   * a variance 0.5 %; limit 4.5 of them (false alarm 3e-5 for the four numbers).
    */
   @ParameterizedTest
   @ValueSource(booleans = {true, false})
@@ -114,7 +114,9 @@ class LinearisedModeTest {
     Model model =
         Model.of(
             Projector.allModes().on(PeriodicGrid.of(Axis.of(2, 1e6))),
-            Hamiltonian.ofMasses(1).with(Detuning.ofOffsets(energy)).with(new QuadraticMeanField(1)),
+            Hamiltonian.ofMasses(1)
+                .with(Detuning.ofOffsets(energy))
+                .with(new QuadraticMeanField(1)),
             Reservoir.of(1, 0, gamma));
     int lanes = 64;
     NoiseGenerator noise = RandomStreams.counterBased(81).generator(model.region(), 1, lanes);

@@ -63,8 +63,8 @@ class OrderStudyTest {
   }
 
   /**
-   * Additive noise: strong order 1. Standard error of the order below 0.04 with 2000 paths; limit 0.15
-   * (false alarm 2e-4). Half an order lost or gained is seen.
+   * Additive noise: strong order 1. Standard error of the order below 0.04 with 2000 paths; limit
+   * 0.15 (false alarm 2e-4). Half an order lost or gained is seen.
    */
   @ParameterizedTest
   @MethodSource("schemes")
@@ -75,8 +75,8 @@ class OrderStudyTest {
   }
 
   /**
-   * Sampled weak order of the scheme with the largest weak error; order 1.7(2), its own value at this
-   * step being 1.8. Limits are three standard errors.
+   * Sampled weak order of the scheme with the largest weak error; order 1.7(2), its own value at
+   * this step being 1.8. Limits are three standard errors.
    */
   @Test
   void sampledWeakOrder() {
@@ -136,9 +136,9 @@ class OrderStudyTest {
   }
 
   /**
-   * Error of &lt;n&gt;, n = |a|^2, after one step from n0, against its Taylor series in dt. With L the
-   * generator of the process and w = offset - mu: L n = -2 gamma (w n + n^2) + 2 gamma T, L n^2 = 2 n L n
-   * + 4 gamma T n, and &lt;n&gt; = n0 + dt L n + (dt^2/2) L L n + O(dt^3).
+   * Error of &lt;n&gt;, n = |a|^2, after one step from n0, against its Taylor series in dt. With L
+   * the generator of the process and w = offset - mu: L n = -2 gamma (w n + n^2) + 2 gamma T, L n^2
+   * = 2 n L n + 4 gamma T n, and &lt;n&gt; = n0 + dt L n + (dt^2/2) L L n + O(dt^3).
    */
   private static double weakErrorOfOneStep(Integrator scheme, double dt) {
     double temperature = 0.5;

@@ -32,8 +32,8 @@ import spgpe.run.Trajectory;
 /**
  * Orders and equilibrium bias of the integrators, as the tables of docs/validation.md.
  *
- * <p>Without arguments the orders and the exact tables of the linearised mode (a minute). With the arguments
- * "ensemble TRAJECTORIES TIME" the runs of the whole interacting field too.
+ * <p>Without arguments the orders and the exact tables of the linearised mode (a minute). With the
+ * arguments "ensemble TRAJECTORIES TIME" the runs of the whole interacting field too.
  */
 public final class IntegratorTables {
   private static final double LENGTH = 32;
@@ -113,7 +113,8 @@ public final class IntegratorTables {
 
   private static void printEnsembleTable(int trajectories, double time) {
     System.out.println();
-    System.out.println("Interacting pair: <N>, <K> and equipartition ratios, one sigma in brackets");
+    System.out.println(
+        "Interacting pair: <N>, <K> and equipartition ratios, one sigma in brackets");
     System.out.println("| scheme | gamma | dt | N | K | middle modes | upper modes |");
     System.out.println("|---|---|---|---|---|---|---|");
     for (double gamma : new double[] {0.1, 0.01, 1e-3}) {
@@ -168,7 +169,8 @@ public final class IntegratorTables {
       double mean = sum / trajectories;
       double error =
           Math.sqrt((squares / trajectories - mean * mean) / (trajectories - 1));
-      row.append(String.format(Locale.ROOT, i < 2 ? " %.3f(%.3f) |" : " %.4f(%.4f) |", mean, error));
+      String cell = i < 2 ? " %.3f(%.3f) |" : " %.4f(%.4f) |";
+      row.append(String.format(Locale.ROOT, cell, mean, error));
     }
     System.out.println(row);
   }
