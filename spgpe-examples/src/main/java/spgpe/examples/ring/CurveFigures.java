@@ -120,7 +120,28 @@ final class CurveFigures {
     }
     plot.setDataset(1, lines);
     plot.setRenderer(1, lineLook);
+    if (measured.getItemCount() > 0) {
+      vertical.setRange( // whole decades, so that at least two are labelled
+          Math.pow(10, Math.floor(Math.log10(lowest(measured)))),
+          Math.pow(10, Math.ceil(Math.log10(highest(measured)))));
+    }
     write(file, "Decay rate against 1/T", plot);
+  }
+
+  private static double lowest(XYIntervalSeries series) {
+    double lowest = Double.POSITIVE_INFINITY;
+    for (int i = 0; i < series.getItemCount(); i++) {
+      lowest = Math.min(lowest, series.getYLowValue(i));
+    }
+    return lowest;
+  }
+
+  private static double highest(XYIntervalSeries series) {
+    double highest = 0;
+    for (int i = 0; i < series.getItemCount(); i++) {
+      highest = Math.max(highest, series.getYHighValue(i));
+    }
+    return highest;
   }
 
   /** The fitted line, the expected rates, and the slope of the closed form through the middle. */
