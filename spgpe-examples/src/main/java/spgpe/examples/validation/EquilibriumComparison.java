@@ -35,8 +35,8 @@ import spgpe.theory.Prediction;
 import spgpe.theory.RingModes;
 
 /**
- * Equilibrium of two coupled components against the exact classical field theory with the correction
- * for the momentum cutoff.
+ * Equilibrium of two coupled components against the exact classical field theory with the
+ * correction for the momentum cutoff.
  *
  * <p>gamma = 1, start in the uniform true vacuum, samples every 1 after time 100. The correlation
  * length of S_y, the relative phase, is fitted over a range of distances to the measured curve and,
@@ -133,8 +133,8 @@ public final class EquilibriumComparison {
    * The table.
    *
    * @param outcome the simulation
-   * @param withNeglected whether the predictions carry the size of the neglected order of the cutoff
-   *     correction as an error
+   * @param withNeglected whether the predictions carry the size of the neglected order of the
+   *     cutoff correction as an error
    */
   static ComparisonTable table(Outcome outcome, boolean withNeglected) {
     Setting setting = outcome.setting();
