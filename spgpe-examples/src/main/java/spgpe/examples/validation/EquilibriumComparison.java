@@ -35,23 +35,23 @@ import spgpe.theory.Prediction;
 import spgpe.theory.RingModes;
 
 /**
- * Equilibrium of two coupled components against the exact classical field theory with the correction
- * for the momentum cutoff.
+ * Equilibrium of two coupled components against the exact classical field theory with the
+ * correction for the momentum cutoff.
  *
  * <p>gamma = 1, start in the uniform true vacuum, samples every 1 after time 100. The correlation
- * length of S_y, the relative phase, is fitted over a range of distances to the measured curve and,
- * with the same weights, to the exact one.
+ * length of S_y, the relative phase, is that of an exponential fitted over a range of distances to
+ * the measured curve and, with the same weights, to the exact one.
  */
 public final class EquilibriumComparison {
   private static final double START = 100;
   private static final long SEED = 20261202;
 
   static final Setting A32 =
-      new Setting("A", new CoupledPair(1, 1, 0.1, 0, 0.5), new RingModes(40, 32), 144, 2, 4);
+      new Setting("A", new CoupledPair(1, 1, 0.1, 0, 0.5), new RingModes(40, 32), 144, 1, 4);
   static final Setting A64 =
-      new Setting("A", new CoupledPair(1, 1, 0.1, 0, 0.5), new RingModes(40, 64), 288, 2, 4);
+      new Setting("A", new CoupledPair(1, 1, 0.1, 0, 0.5), new RingModes(40, 64), 288, 1, 4);
   static final Setting B48 =
-      new Setting("B", new CoupledPair(1, 1, 0.1, 0.15, 0.25), new RingModes(32, 48), 200, 2, 5);
+      new Setting("B", new CoupledPair(1, 1, 0.1, 0.15, 0.25), new RingModes(32, 48), 200, 1, 5);
   private static final List<Setting> SETTINGS = List.of(A32, A64, B48);
 
   private EquilibriumComparison() {}
@@ -133,8 +133,8 @@ public final class EquilibriumComparison {
    * The table.
    *
    * @param outcome the simulation
-   * @param withNeglected whether the predictions carry the size of the neglected order of the cutoff
-   *     correction as an error
+   * @param withNeglected whether the predictions carry the size of the neglected order of the
+   *     cutoff correction as an error
    */
   static ComparisonTable table(Outcome outcome, boolean withNeglected) {
     Setting setting = outcome.setting();
@@ -172,10 +172,17 @@ public final class EquilibriumComparison {
     return pair.withMu(pair.mu() + (2 * pair.g() + 0.5 * pair.biquadraticCoupling()) * missing);
   }
 
-  /** The exact curve at the distances of the measured one and with its covariance. */
+  /**
+   * The exact curve at the distances of the measured one and with its covariance: at the effective
+   * chemical potential, less the part of the missing modes, 4 g(r) dn(r) with g the correlation of
+   * the field and dn(r) that of the missing modes. At r = 0 this is the correction of S_y squared;
+   * further out it rings with the cutoff.
+   */
   static CorrelationFunction exactCurve(Outcome outcome) {
-    spgpe.theory.CorrelationFunction exact =
-        PairEquilibrium.of(shifted(outcome.setting())).syCorrelation();
+    Setting setting = outcome.setting();
+    PairEquilibrium full = PairEquilibrium.of(shifted(setting));
+    spgpe.theory.CorrelationFunction exact = full.syCorrelation();
+    spgpe.theory.CorrelationFunction field = full.fieldCorrelation();
     CorrelationFunction measured = outcome.sy();
     int count = measured.size();
     double[] distances = new double[count];
@@ -183,7 +190,8 @@ public final class EquilibriumComparison {
     double[][] covariance = new double[count][count];
     for (int i = 0; i < count; i++) {
       distances[i] = measured.distance(i);
-      values[i] = exact.at(distances[i]);
+      values[i] =
+          exact.at(distances[i]) - 4 * field.at(distances[i]) * missing(setting, distances[i]);
       for (int j = 0; j < count; j++) {
         covariance[i][j] = measured.estimates().covariance(i, j);
       }
@@ -191,6 +199,18 @@ public final class EquilibriumComparison {
     return CorrelationFunction.of(
         distances, Estimates.of(values, covariance, measured.estimates().trajectories()),
         measured.period());
+  }
+
+  /** Correlation of the missing modes: sum of (2T/(k^2 L)) cos(k r) over |n| > n_max. */
+  static double missing(Setting setting, double distance) {
+    double length = setting.ring().length();
+    double angle = 2 * Math.PI * distance / length;
+    // Fourier series of a parabola, valid for angles from 0 to 2 pi
+    double sum = Math.PI * Math.PI / 6 - Math.PI * angle / 2 + angle * angle / 4;
+    for (int n = 1; n <= setting.ring().cutoffMode(); n++) {
+      sum -= Math.cos(n * angle) / ((double) n * n);
+    }
+    return setting.pair().temperature() * length / (Math.PI * Math.PI) * sum;
   }
 
   /**

@@ -16,6 +16,7 @@ import spgpe.run.Ensemble;
 import spgpe.run.InitialState;
 import spgpe.run.Recording;
 import spgpe.run.Schedule;
+import spgpe.statistics.RateEstimate;
 import spgpe.theory.Comparison;
 import spgpe.theory.ComparisonTable;
 import spgpe.theory.CoupledPair;
@@ -24,7 +25,6 @@ import spgpe.theory.PairAverages;
 import spgpe.theory.PairEquilibrium;
 import spgpe.theory.Prediction;
 import spgpe.theory.RingModes;
-import spgpe.statistics.RateEstimate;
 
 /** The code of docs/right-run.md. */
 final class RightRun {

@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
+import spgpe.observables.correlation.CorrelationFunction;
 import spgpe.theory.Comparison;
 import spgpe.theory.ComparisonTable;
 import spgpe.theory.CoupledPair;
@@ -15,7 +16,7 @@ import spgpe.theory.RingModes;
  * A small version of {@link EquilibriumComparison}, seed fixed before the first run of this test: a
  * cold set, where the neglected order of the cutoff correction is 3e-4.
  *
- * <p>Bounds of 3.9 combined standard errors on four numbers: false-alarm probability 4e-4 in all.
+ * <p>Bounds of 3.9 combined standard errors on eight numbers: false-alarm probability 8e-4 in all.
  * Power: shown by the second test, in which the same data are held against a temperature 5 % off.
  */
 class EquilibriumComparisonTest {
@@ -56,12 +57,26 @@ class EquilibriumComparisonTest {
   }
 
   @Test
-  void fittedLengthOfTheExactCurveIsItsDecayLength() {
-    double asymptotic =
-        PairEquilibrium.of(EquilibriumComparison.shifted(SET)).syCorrelation().decayLength();
-    double fitted =
-        EquilibriumComparison.table(outcome, false).rows().get(3).prediction().value();
-    // the first excited states of the sum still count at the smallest distance
-    assertEquals(asymptotic, fitted, 0.02 * asymptotic);
+  void measuredCorrelationFollowsTheExactCurveWithTheRingingOfTheCutoff() {
+    CorrelationFunction exact = EquilibriumComparison.exactCurve(outcome);
+    double moment = PairEquilibrium.withCutoff(SET.pair(), SET.ring()).sySquared();
+    // line against ring of length 24, and the cutoff of the ring against its continuum form
+    assertEquals(moment, exact.value(0), 3e-3 * moment);
+    for (int i : new int[] {3, 6, 9, 12}) { // distances 1 to 4
+      assertEquals(
+          exact.value(i), outcome.sy().value(i), BOUND * outcome.sy().standardError(i),
+          "distance " + exact.distance(i));
+    }
+  }
+
+  @Test
+  void missingModesAddUpToTheDirectSum() {
+    double direct = 0;
+    for (int n = SET.ring().cutoffMode() + 1; n < 200_000; n++) {
+      double k = 2 * Math.PI * n / SET.ring().length();
+      direct +=
+          4 * SET.pair().temperature() / (k * k * SET.ring().length()) * Math.cos(k * 1.25);
+    }
+    assertEquals(direct, EquilibriumComparison.missing(SET, 1.25), 1e-8);
   }
 }
