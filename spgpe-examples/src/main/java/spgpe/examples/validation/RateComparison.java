@@ -52,8 +52,8 @@ public final class RateComparison {
   /** Ends are about 1.5 expected lifetimes, so that few trajectories are censored. */
   private static final List<Setting> SETTINGS =
       List.of(
-          new Setting(9, 400, 1500), new Setting(10, 600, 3000), new Setting(12, 200, 6000),
-          new Setting(14, 80, 30_000));
+          new Setting(9, 400, 1500), new Setting(10, 600, 3000), new Setting(12, 120, 6000),
+          new Setting(14, 60, 30_000));
 
   private RateComparison() {}
 
