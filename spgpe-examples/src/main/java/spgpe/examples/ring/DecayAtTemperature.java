@@ -19,12 +19,15 @@ import spgpe.units.Temperature;
  * Outcome of the ensemble at one temperature. Times are scaled.
  *
  * @param plan the plan it followed
- * @param ends how the trajectories ended
+ * @param ends how the trajectories ended: at the reported threshold or at the end of the run
+ * @param passages first passages of all thresholds
  * @param until end time of the run
- * @param meanCosine mean of cos(relative phase) over the ring, against time
+ * @param meanCosine mean of cos(relative phase) over the ring, against time, of the trajectories
+ *     that have not passed the highest threshold
  */
 record DecayAtTemperature(
-    ShotPlan plan, List<TrajectoryEnd> ends, double until, TimeMoments meanCosine) {
+    ShotPlan plan, List<TrajectoryEnd> ends, FirstPassageTimes passages, double until,
+    TimeMoments meanCosine) {
   static final double LEVEL = 0.95;
 
   Temperature temperature() {
@@ -42,12 +45,7 @@ record DecayAtTemperature(
 
   /** First-passage times, censored at the end of the run. */
   SurvivalData firstPassages() {
-    double[] times = ends.stream().mapToDouble(TrajectoryEnd::time).toArray();
-    boolean[] decayed = new boolean[times.length];
-    for (int i = 0; i < decayed.length; i++) {
-      decayed[i] = ends.get(i).isStopped();
-    }
-    return SurvivalData.of(times, decayed);
+    return FirstPassageTimes.survival(ends);
   }
 
   long decays() {
@@ -79,13 +77,14 @@ record DecayAtTemperature(
     return KaplanMeier.of(firstPassages());
   }
 
-  /** The rate for several truncation times about the chosen one. */
-  Optional<TruncationScan> truncationScan() {
+  /** The rate through a threshold, for several truncation times about the chosen one. */
+  Optional<TruncationScan> truncationScan(double threshold) {
+    List<TrajectoryEnd> passed = passages.endsAt(threshold);
     double cut = truncation();
     double[] times = {0.6 * cut, 0.8 * cut, cut, 1.25 * cut, 1.5 * cut};
-    double longest = ends.stream().mapToDouble(TrajectoryEnd::time).max().orElse(0);
+    double longest = passed.stream().mapToDouble(TrajectoryEnd::time).max().orElse(0);
     return longest > times[times.length - 1]
-        ? Optional.of(TruncationScan.of(firstPassages(), times))
+        ? Optional.of(TruncationScan.of(FirstPassageTimes.survival(passed), times))
         : Optional.empty();
   }
 

@@ -192,19 +192,24 @@ final class Report {
 
   private static String plateau(List<DecayAtTemperature> points) {
     StringBuilder text =
-        new StringBuilder("\nSensitivity of the rate (per scaled time) to the truncation time\n");
+        new StringBuilder(
+            "\nSensitivity of the rate (per scaled time) to threshold and truncation time\n");
     for (DecayAtTemperature point : points) {
-      Optional<TruncationScan> scan = point.truncationScan();
-      StringBuilder row = new StringBuilder();
-      scan.ifPresent(
-          table -> table.rows().forEach(
-              r -> row.append(
-                  String.format(
-                      Locale.ROOT, "  %.0f: %.3e(%.0e)",
-                      r.truncationTime(), r.rate().rate(), r.rate().standardError()))));
-      line(text, "%5.1f nK%s", point.temperature().nanokelvin(),
-          scan.isPresent() ? row : "  no trajectory outlived the largest truncation time");
+      for (double threshold : point.passages().thresholds()) {
+        Optional<TruncationScan> scan = point.truncationScan(threshold);
+        StringBuilder row = new StringBuilder();
+        scan.ifPresent(
+            table -> table.rows().forEach(
+                r -> row.append(
+                    String.format(
+                        Locale.ROOT, "  %.0f: %.3e(%.0e)",
+                        r.truncationTime(), r.rate().rate(), r.rate().standardError()))));
+        line(text, "%5.1f nK %+4.1f%s", point.temperature().nanokelvin(), threshold,
+            scan.isPresent() ? row : "  no trajectory outlived the largest truncation time");
+      }
     }
+    line(text, "A high threshold is passed later (the bubble must fill more of the ring) and needs"
+        + " a longer truncation time.");
     return text.toString();
   }
 

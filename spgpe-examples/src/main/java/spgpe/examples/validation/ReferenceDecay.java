@@ -1,5 +1,6 @@
 package spgpe.examples.validation;
 
+import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import java.util.concurrent.Executor;
@@ -21,13 +22,13 @@ import spgpe.run.Ensemble;
 import spgpe.run.EnsembleResult;
 import spgpe.run.InitialState;
 import spgpe.run.ProgressListener;
-import spgpe.run.Recording;
 import spgpe.run.Schedule;
 import spgpe.run.TrajectoryEnd;
 import spgpe.statistics.Censoring;
 import spgpe.statistics.CoxOakesTest;
 import spgpe.statistics.Estimate;
 import spgpe.statistics.Interval;
+import spgpe.statistics.KaplanMeier;
 import spgpe.statistics.RateEstimate;
 import spgpe.statistics.SurvivalData;
 
@@ -50,9 +51,25 @@ public final class ReferenceDecay {
       List.of(
           new Estimate(0.97354, 4e-5), new Estimate(-0.95912, 2e-5), new Estimate(0.08380, 4e-5),
           new Estimate(0.05535, 4e-5), new Estimate(0.03009, 3e-5), new Estimate(0.00961, 3e-5),
-          new Estimate(0.00296, 2e-5));
+          new Estimate(0.00296, 2e-5), new Estimate(0.27585, 11e-5), new Estimate(0.98243, 7e-5),
+          new Estimate(0.07210, 2e-5), new Estimate(0.07611, 3e-5));
 
-  private static final double TRUNCATION = 100;
+  static final double[] SURVIVAL_TIMES = {
+    110, 125, 150, 200, 300, 400, 500, 700, 900, 1200, 1600, 2000, 2500, 3000
+  };
+
+  /** Part of the 11,055 trajectories alive at t = 100 that is alive at each time. */
+  static final List<Estimate> REFERENCE_SURVIVAL =
+      List.of(
+          new Estimate(0.9849, 0.0012), new Estimate(0.9627, 0.0018),
+          new Estimate(0.9269, 0.0025), new Estimate(0.8583, 0.0033),
+          new Estimate(0.7345, 0.0042), new Estimate(0.6343, 0.0046),
+          new Estimate(0.5455, 0.0047), new Estimate(0.3969, 0.0047),
+          new Estimate(0.2896, 0.0043), new Estimate(0.1826, 0.0037),
+          new Estimate(0.0967, 0.0028), new Estimate(0.0503, 0.0021),
+          new Estimate(0.0238, 0.0015), new Estimate(0.0110, 0.0010));
+
+  static final double TRUNCATION = 100;
   private static final double END = 3000;
 
   private ReferenceDecay() {}
@@ -61,11 +78,30 @@ public final class ReferenceDecay {
    * What was measured.
    *
    * @param passages first passages, not truncated
-   * @param averages metastable averages
+   * @param averages metastable averages in the order of {@link MetastableAverages#NAMES}
+   * @param snapshots number of snapshots in the averages
    */
-  record Outcome(SurvivalData passages, MetastableAverages averages) {
+  record Outcome(SurvivalData passages, List<Estimate> averages, long snapshots) {
     RateEstimate rate() {
       return RateEstimate.of(passages.truncatedBefore(TRUNCATION));
+    }
+
+    /** Trajectories alive at the truncation time. */
+    int alive() {
+      return passages.truncatedBefore(TRUNCATION).size();
+    }
+
+    /** Part of those alive at the truncation time that is alive later; binomial errors. */
+    List<Estimate> survival() {
+      KaplanMeier curve = KaplanMeier.of(passages.truncatedBefore(TRUNCATION));
+      return Arrays.stream(SURVIVAL_TIMES)
+          .mapToObj(t -> new Estimate(curve.survivalAt(t), binomialError(curve.survivalAt(t))))
+          .toList();
+    }
+
+    /** Standard error of a surviving part, if that is its true value. */
+    double binomialError(double survival) {
+      return Math.sqrt(survival * (1 - survival) / alive());
     }
   }
 
@@ -79,11 +115,8 @@ public final class ReferenceDecay {
             Hamiltonian.pair(1, 0).with(CoherentCoupling.constant(0.1))
                 .with(BiquadraticCoupling.of(0.225)),
             Reservoir.of(0.05157356, 1.1, 0.1));
-    Recording<MetastableAverages> averages =
-        Recording.of(
-            MetastableAverages.observable(), Schedule.every(10).startingAt(TRUNCATION),
-            MetastableAverages::new);
-    EnsembleResult result =
+    MetastableAverages averages = new MetastableAverages();
+    Ensemble plan =
         Ensemble.of(model)
             .startingFrom(InitialState.uniform(1, -1))
             .integratedBy(OuRk4.ofStep(0.1))
@@ -92,16 +125,16 @@ public final class ReferenceDecay {
             .until(END)
             .stopWhen(
                 FirstPassage.upward(RelativePhase.meanCosine(), -0.4, Schedule.every(0.5)))
-            .record(averages)
-            .progress(listener)
-            .runOn(executor);
+            .progress(listener);
+    EnsembleResult result = averages.recordedBy(plan).runOn(executor);
     List<TrajectoryEnd> ends = result.ends();
     double[] times = ends.stream().mapToDouble(TrajectoryEnd::time).toArray();
     boolean[] passed = new boolean[times.length];
     for (int i = 0; i < passed.length; i++) {
       passed[i] = ends.get(i).isStopped();
     }
-    return new Outcome(SurvivalData.of(times, passed), result.get(averages));
+    return new Outcome(
+        SurvivalData.of(times, passed), averages.of(result, model), averages.snapshots(result));
   }
 
   /** Distance of two estimates in combined standard errors. */
@@ -143,11 +176,16 @@ public final class ReferenceDecay {
         Locale.ROOT, "  95 %% interval [%.4e, %.4e], exponentiality chi2 = %.2f%n",
         interval.lower(), interval.upper(),
         CoxOakesTest.of(outcome.passages().truncatedBefore(TRUNCATION)).chiSquare());
-    System.out.println(outcome.averages().snapshots() + " metastable snapshots");
+    System.out.println(outcome.snapshots() + " metastable snapshots");
     for (int i = 0; i < MetastableAverages.NAMES.size(); i++) {
       print(
-          MetastableAverages.NAMES.get(i), outcome.averages().average(i),
-          REFERENCE_AVERAGES.get(i));
+          MetastableAverages.NAMES.get(i), outcome.averages().get(i), REFERENCE_AVERAGES.get(i));
+    }
+    System.out.println("survival of " + outcome.alive() + " trajectories alive at t=100");
+    for (int i = 0; i < SURVIVAL_TIMES.length; i++) {
+      print(
+          String.format(Locale.ROOT, "survival t=%.0f", SURVIVAL_TIMES[i]),
+          outcome.survival().get(i), REFERENCE_SURVIVAL.get(i));
     }
   }
 

@@ -14,8 +14,17 @@ import java.util.Set;
 final class ReferenceTracker {
   private ReferenceTracker() {}
 
+  /** Time and site of a birth out of the metastable state. */
+  record Birth(double time, double site) {}
+
   static List<String> events(
       double[] times, double[][] frames, double length, BubbleSettings settings) {
+    return events(times, frames, length, settings, new ArrayList<>());
+  }
+
+  static List<String> events(
+      double[] times, double[][] frames, double length, BubbleSettings settings,
+      List<Birth> births) {
     List<String> events = new ArrayList<>();
     Map<Integer, Set<Integer>> before = new HashMap<>();
     Set<Integer> filled = new HashSet<>();
@@ -59,6 +68,11 @@ final class ReferenceTracker {
         } else if (regions.get(r).stream().anyMatch(p -> smooth[p] > settings.seedLevel())) {
           id = next++;
           events.add(times[s] + (s == 0 ? " PRESENT_AT_START " : " NUCLEATED ") + id + " -1");
+          if (s > 0) {
+            births.add(
+                new Birth(
+                    times[s], site(smooth, regions.get(r), settings.seedLevel(), length)));
+          }
         } else {
           continue;
         }
@@ -93,6 +107,21 @@ final class ReferenceTracker {
       result[i] = sum / weights;
     }
     return result;
+  }
+
+  /** Direction of the sum of the unit vectors to all points above the seed level. */
+  private static double site(
+      double[] smooth, Set<Integer> region, double seedLevel, double length) {
+    double x = 0;
+    double y = 0;
+    for (int p : region) {
+      if (smooth[p] > seedLevel) {
+        x += Math.cos(2 * Math.PI * p / smooth.length);
+        y += Math.sin(2 * Math.PI * p / smooth.length);
+      }
+    }
+    double turn = Math.atan2(y, x) / (2 * Math.PI);
+    return (turn < 0 ? turn + 1 : turn) * length;
   }
 
   /** Connected sets, ordered so that the first begins after the first point below the level. */

@@ -36,7 +36,7 @@ class TrackerAgainstReferenceTest {
     return result;
   }
 
-  private static List<String> events(BubbleHistory history) {
+  static List<String> events(BubbleHistory history) {
     return history.events().stream()
         .map(e -> e.time() + " " + e.kind() + " " + e.bubble() + " " + e.other())
         .collect(Collectors.toList());
