@@ -83,8 +83,10 @@ class PlaneEquilibriumTest {
   /**
    * Equipartition of a coupled, interacting pair on a disc: Re &lt;a^* f&gt; = T in three rings of
    * |k|, virial and power balance, as in {@link EquipartitionTest}; 24 trajectories, limits 4.5
-   * standard errors (false alarm 1.6e-4 for each of five numbers and two schemes). The inner ring has
-   * few and slow modes, error up to 4 %, so 18 % is seen; the others 2.5 %, so 11 % is.
+   * standard errors (false alarm 1.6e-4 for each of five numbers and two schemes, 1.6e-3 in all).
+   * Standard errors 2.4, 1.2 and 0.6 % in the rings (the inner one has few and slow modes), 2.2 %
+   * in the virial (the condensate has its share) and 0.5 % in the power balance; deviations of 16, 8,
+   * 4, 15 and 4 % are seen with a probability of 97 %.
    */
   @Test
   void equipartitionOfAnInteractingPair() {
@@ -97,17 +99,18 @@ class PlaneEquilibriumTest {
             Hamiltonian.pair(g, inter)
                 .with(CoherentCoupling.constant(0.1))
                 .with(BiquadraticCoupling.of(kappa)),
-            Reservoir.of(0.2, 1, 0).withDampings(0.2, 0.1));
+            Reservoir.of(0.2, 1, 0).withDampings(0.6, 0.3));
+    double[] largestError = {0.03, 0.02, 0.01, 0.04, 0.01};
+    int seed = 45;
     for (Integrator scheme : List.of(OuRk4.ofStep(0.05), Rk4Ip.ofStep(0.04))) {
       Estimate[] found =
           ThermalRuns.run(
               model, scheme, ThermalRuns.equilibrium(0.9, 0.9),
-              ThermalRuns.invariants(model, 3, g, inter, kappa), 42, 24, 4, 0.4, 28);
-      for (int i = 0; i < 5; i++) {
-        assertTrue(found[i].error() < (i == 0 ? 0.04 : 0.025), "number " + i + ": " + found[i]);
-        System.out.println("DBG " + scheme + i + found[i]);
-        assertEquals(
-            1, found[i].mean(), 4.5 * found[i].error(), scheme + ", number " + i + found[i]);
+              ThermalRuns.invariants(model, 3, g, inter, kappa), seed++, 24, 4, 0.4, 28);
+      for (int i = 0; i < largestError.length; i++) {
+        String what = scheme + ", number " + i + ": " + found[i];
+        assertTrue(found[i].error() < largestError[i], what);
+        assertEquals(1, found[i].mean(), 4.5 * found[i].error(), what);
       }
     }
   }
