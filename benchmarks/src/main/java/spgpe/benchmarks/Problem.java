@@ -28,6 +28,18 @@ final class Problem {
     CoherentRegion region =
         Projector.modesUpTo(points / 4 - 1)
             .on(PeriodicGrid.of(Axis.of(points, points * SPACING)));
+    return model(region);
+  }
+
+  /** A square with a disc of half the largest wave number of an axis, its rim left out. */
+  static Model plane(int points) {
+    Axis axis = Axis.of(points, points * SPACING);
+    double cutoff = Math.PI / SPACING / 2;
+    return model(
+        Projector.belowWaveNumber(cutoff * (1 - 1e-12)).on(PeriodicGrid.of(axis, axis)));
+  }
+
+  private static Model model(CoherentRegion region) {
     return Model.of(
         region,
         Hamiltonian.pair(1, 0).with(CoherentCoupling.constant(0.005))

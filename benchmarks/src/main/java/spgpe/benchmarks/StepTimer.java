@@ -5,8 +5,8 @@ import spgpe.integrate.Stepper;
 
 /**
  * Times the step like the program in {@code peer/} does, for alternating runs: arguments points,
- * steps, repeats, integrator, lanes; prints microseconds for each trajectory and step, best of the
- * repeats after one that is not counted.
+ * steps, repeats, integrator, lanes and, for a square of points times points, the word plane; prints
+ * microseconds for each trajectory and step, best of the repeats after one that is not counted.
  */
 public final class StepTimer {
   private StepTimer() {}
@@ -14,16 +14,17 @@ public final class StepTimer {
   /**
    * Runs the timer.
    *
-   * @param arguments points, steps, repeats, integrator, lanes
+   * @param arguments points, steps, repeats, integrator, lanes[, plane]
    */
   public static void main(String[] arguments) {
     int points = Integer.parseInt(arguments[0]);
     int steps = Integer.parseInt(arguments[1]);
     int repeats = Integer.parseInt(arguments[2]);
     int lanes = Integer.parseInt(arguments[4]);
+    boolean plane = arguments.length > 5 && arguments[5].equals("plane");
     Stepper stepper =
         Problem.startedStepper(
-            Problem.model(points), Problem.integrator(arguments[3]), lanes);
+            plane ? Problem.plane(points) : Problem.model(points), Problem.integrator(arguments[3]), lanes);
     double best = Double.POSITIVE_INFINITY;
     for (int r = 0; r <= repeats; r++) {
       long begin = System.nanoTime();

@@ -199,16 +199,14 @@ public final class CoherentRegion {
    * @param lanes realisations advanced together, at least 1
    * @param provider Fourier back end
    * @return the transform
-   * @throws UnsupportedOperationException if the grid is two-dimensional: this version transforms
-   *     one-dimensional regions only
+   * @throws IllegalArgumentException if a number is not positive, or if the back end cannot
+   *     transform the points of an axis
    */
   public ModeTransform transform(int components, int lanes, FourierProvider provider) {
     Check.notNull(provider, "provider");
-    if (grid.dimension() != 1) {
-      throw new UnsupportedOperationException(
-          "this version transforms one-dimensional regions only: grid=" + grid);
-    }
-    return new LineTransform(this, components, lanes, provider);
+    return grid.dimension() == 1
+        ? new LineTransform(this, components, lanes, provider)
+        : new PlaneTransform(this, components, lanes, provider);
   }
 
   int gridIndex(int mode) {

@@ -28,7 +28,7 @@ public final class Projector {
   }
 
   /**
-   * Keeps modes with |k| &le; cutoff (a disc in two dimensions).
+   * Keeps modes with |k| &le; cutoff (a disc of wave numbers in two dimensions).
    *
    * @param cutoff largest kept wave number, finite and positive
    * @return the rule
@@ -65,7 +65,7 @@ public final class Projector {
   }
 
   /**
-   * Keeps modes with |n| &le; largest on every axis (a rectangle in two dimensions).
+   * Keeps modes with |n| &le; largest on every axis (a square of mode numbers in two dimensions).
    *
    * @param largest largest kept mode number, at least 1
    * @return the rule
@@ -76,6 +76,30 @@ public final class Projector {
     return new Projector(
         (grid, nx, ny) -> Math.abs(nx) <= largest && Math.abs(ny) <= largest,
         "|n| <= " + largest, false);
+  }
+
+  /**
+   * Keeps modes with |n_x| &le; largestX and |n_y| &le; largestY: a rectangle. For a disc or, on a
+   * grid of unequal lengths, an ellipse of mode numbers take {@link #belowWaveNumber}.
+   *
+   * @param largestX largest kept mode number along x, at least 1
+   * @param largestY largest kept mode number along y, at least 1
+   * @return the rule, for two-dimensional grids
+   * @throws IllegalArgumentException if a number is not positive; from {@link #on} if the grid is a
+   *     line
+   */
+  public static Projector modesUpTo(int largestX, int largestY) {
+    Check.inRange(largestX, 1, 32767, "largest mode number along x");
+    Check.inRange(largestY, 1, 32767, "largest mode number along y");
+    return new Projector(
+        (grid, nx, ny) -> {
+          Check.argument(
+              grid.dimension() == 2,
+              "two largest mode numbers need a two-dimensional grid: largestX=%s, largestY=%s,"
+                  + " grid=%s; on a line use modesUpTo(largest)", largestX, largestY, grid);
+          return Math.abs(nx) <= largestX && Math.abs(ny) <= largestY;
+        },
+        "|nx| <= " + largestX + ", |ny| <= " + largestY, false);
   }
 
   /**

@@ -7,6 +7,7 @@ import spgpe.integrate.OuRk4;
 import spgpe.model.ForceEvaluator;
 import spgpe.model.Model;
 import spgpe.projector.Amplitudes;
+import spgpe.projector.CoherentRegion;
 import spgpe.run.Ensemble;
 import spgpe.run.InitialState;
 import spgpe.run.Observable;
@@ -98,7 +99,6 @@ final class ThermalRuns {
         Amplitudes a = s.amplitudes();
         double temperature = forModel.reservoir().temperature();
         forces.force(s.time(), a, force);
-        int cutoff = forModel.region().largestMode(0);
         int[] counts = new int[bands];
         java.util.Arrays.fill(result, 0);
         double atoms = 0;
@@ -115,9 +115,8 @@ final class ThermalRuns {
           double own = a.atomNumber(c, 0);
           for (int m = 0; m < modes; m++) {
             double af = a.re(c)[m] * force.re(c)[m] + a.im(c)[m] * force.im(c)[m];
-            int n = Math.abs(forModel.region().modeNumber(0, m));
-            if (n > 0) {
-              int band = (n - 1) * bands / cutoff;
+            int band = bandOf(forModel.region(), m, bands);
+            if (band >= 0) {
               result[band] += af / temperature;
               counts[band]++;
             }
@@ -142,5 +141,20 @@ final class ThermalRuns {
         result[bands + 3] = s.grandCanonicalEnergy();
       }
     };
+  }
+
+  /** Equal steps of |k| up to the cutoff; -1 for the condensate mode. */
+  private static int bandOf(CoherentRegion region, int mode, int bands) {
+    if (region.kSquared(mode) == 0) {
+      return -1;
+    }
+    if (region.grid().dimension() == 1) {
+      return (Math.abs(region.modeNumber(0, mode)) - 1) * bands / region.largestMode(0);
+    }
+    double largest = 0;
+    for (int m = 0; m < region.modes(); m++) {
+      largest = Math.max(largest, region.kSquared(m));
+    }
+    return Math.min(bands - 1, (int) (bands * Math.sqrt(region.kSquared(mode) / largest)));
   }
 }

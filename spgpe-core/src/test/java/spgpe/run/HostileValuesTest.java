@@ -106,6 +106,12 @@ class HostileValuesTest {
         new WholeRule(
             "largestMode", n -> Axis.holdingModes(n, 1), n -> n < 1 || n > 1 << 17),
         new WholeRule("largest mode number", Projector::modesUpTo, n -> n < 1 || n > 32767),
+        new WholeRule(
+            "largest mode number along x", n -> Projector.modesUpTo(n, 1),
+            n -> n < 1 || n > 32767),
+        new WholeRule(
+            "largest mode number along y", n -> Projector.modesUpTo(1, n),
+            n -> n < 1 || n > 32767),
         new WholeRule("components", n -> new Amplitudes(region, n, 1), n -> n < 1 || n > 255),
         new WholeRule("lanes", n -> new Amplitudes(region, 1, n), n -> n < 1 || n > 4096),
         new WholeRule(

@@ -9,6 +9,11 @@ import java.util.List;
 import java.util.Map;
 import java.util.TreeMap;
 import org.junit.jupiter.api.Test;
+import spgpe.grid.Axis;
+import spgpe.grid.PeriodicGrid;
+import spgpe.hamiltonian.BiquadraticCoupling;
+import spgpe.hamiltonian.CoherentCoupling;
+import spgpe.hamiltonian.Hamiltonian;
 import spgpe.model.Model;
 import spgpe.observables.bubble.BubbleDetector;
 import spgpe.observables.bubble.BubbleSettings;
@@ -37,6 +42,8 @@ import spgpe.observables.thermometry.OccupationTail;
 import spgpe.observables.topology.DomainWalls;
 import spgpe.observables.topology.Kinks;
 import spgpe.projector.Amplitudes;
+import spgpe.projector.Projector;
+import spgpe.reservoir.Reservoir;
 import spgpe.run.Observable;
 import spgpe.run.Schedule;
 import spgpe.run.Snapshot;
@@ -99,6 +106,71 @@ class AllObservablesTest {
       assertArrayEquals(before.re(0), a.re(0), 0, observable.name());
       assertArrayEquals(before.im(1), a.im(1), 0, observable.name());
       assertFalse(observable.name().isBlank());
+    }
+  }
+
+  private static Model plane() {
+    return Model.of(
+        Projector.modesUpTo(3, 2).on(PeriodicGrid.of(Axis.of(13, 7), Axis.of(9, 5))),
+        Hamiltonian.pair(1, 0)
+            .with(CoherentCoupling.constant(0.1))
+            .with(BiquadraticCoupling.of(0.225)),
+        Reservoir.of(0.05, 1.1, 0.1));
+  }
+
+  /** Those that are made for a ring say so; all others give finite numbers on a plane. */
+  @Test
+  void observablesOfRingsRefusePlanes() {
+    Model model = plane();
+    Amplitudes a = Samples.complexGaussian(model, k -> 1 / (1 + k * k), 4).get().amplitudes();
+    Snapshot snapshot = Snapshot.of(model, a, 0);
+    int refused = 0;
+    for (Observable observable : all()) {
+      boolean ring =
+          observable instanceof SpatialCorrelation || observable instanceof StructureFactor
+              || observable.name()
+                  .matches(".*(unwrapped|winding|wall|kink|fluctuations of the relative).*");
+      if (ring) {
+        String message = Fields.refusal(() -> Fields.measure(observable, snapshot));
+        assertTrue(message.contains("line"), observable.name() + ": " + message);
+        refused++;
+      } else {
+        for (double value : Fields.measure(observable, snapshot)) {
+          assertTrue(Double.isFinite(value), observable.name());
+        }
+      }
+    }
+    assertEquals(15, refused);
+    String fluctuations =
+        Fields.refusal(
+            () -> MetastableFluctuations.of(new TimeAverage(new double[] {0}, 122), model));
+    assertTrue(fluctuations.contains("not a plane"), fluctuations);
+    String waves = Fields.refusal(() -> StructureFactor.ofDensity().waveNumbers(model));
+    assertTrue(waves.contains("not a plane"), waves);
+    String distances = Fields.refusal(() -> SpatialCorrelation.cosine().distances(model));
+    assertTrue(distances.contains("line"), distances);
+    BubbleDetector detector = BubbleDetector.of(BubbleSettings.atLevel(0));
+    String census = Fields.refusal(() -> detector.census(model.region().grid()));
+    assertTrue(census.contains("not on a plane"), census);
+    PeriodicGrid ring = PeriodicGrid.of(Axis.of(13, 7));
+    String numbers = Fields.refusal(() -> detector.census(ring).create(new double[] {0}, 12));
+    assertTrue(numbers.contains("numbers=12, points=13"), numbers);
+  }
+
+  /** Momentum of a single moving mode and its current, along both axes. */
+  @Test
+  void momentumAndCurrentOnAPlane() {
+    Model model = plane();
+    Amplitudes a = new Amplitudes(model.region(), 2, 1);
+    int mode = model.region().indexOf(-2, 1);
+    a.re(1)[mode] = 3;
+    Snapshot snapshot = Snapshot.of(model, a, 0);
+    double kx = -2 * 2 * Math.PI / 7;
+    double ky = 2 * Math.PI / 5;
+    assertArrayEquals(
+        new double[] {9 * kx, 9 * ky}, Fields.measure(Momentum.total(), snapshot), 1e-12);
+    for (double current : Fields.measure(Current.ofComponent(1, 1), snapshot)) {
+      assertEquals(9 * ky / 35, current, 1e-13);
     }
   }
 

@@ -1,5 +1,6 @@
 package spgpe.observables.bubble;
 
+import spgpe.grid.PeriodicGrid;
 import spgpe.internal.check.Check;
 import spgpe.run.Accumulator;
 import spgpe.run.TimeSeries;
@@ -68,6 +69,24 @@ public final class BubbleDetector {
         series.times(), series.values(), length, series.end().trajectory(), series.end().time());
   }
 
+  /**
+   * Looks through a recorded trajectory of a model, and refuses what is not a ring.
+   *
+   * @param series a series of profiles of the order parameter, one number for each point
+   * @param ring grid of the model
+   * @return what was found
+   * @throws IllegalArgumentException if the grid is two-dimensional or has another number of points
+   *     than the profiles, or if the series is empty or not of finite profiles
+   */
+  public BubbleHistory find(TimeSeries.Series series, PeriodicGrid ring) {
+    Check.notNull(series, "series");
+    double length = lengthOf(ring);
+    for (double[] frame : series.values()) {
+      requireProfile(ring, frame.length);
+    }
+    return find(series, length);
+  }
+
   private BubbleHistory track(
       double[] times, double[][] frames, double length, long trajectory, double endTime) {
     Check.positive(length, "length (of the ring)");
@@ -93,7 +112,25 @@ public final class BubbleDetector {
   }
 
   /**
-   * Looks while the ensemble runs, without keeping frames. Record a profile of the order parameter.
+   * Looks while the ensemble of a model runs, and refuses what is not a ring. Record a profile of the
+   * order parameter.
+   *
+   * @param ring grid of the model
+   * @return factory for a recording; throws IllegalArgumentException if what is recorded has another
+   *     number of values than the ring has points
+   * @throws IllegalArgumentException if the grid is two-dimensional
+   */
+  public Accumulator.Factory<BubbleCensus> census(PeriodicGrid ring) {
+    double length = lengthOf(ring);
+    return (times, size) -> {
+      requireProfile(ring, size);
+      return new BubbleCensus(times, new BubbleTracker(settings, size, length));
+    };
+  }
+
+  /**
+   * Looks while the ensemble runs, without keeping frames. Record a profile of the order parameter on
+   * a ring; from a length alone a plane cannot be told, see {@link #census(PeriodicGrid)}.
    *
    * @param length length of the ring
    * @return factory for a recording
@@ -103,6 +140,21 @@ public final class BubbleDetector {
     Check.positive(length, "length (of the ring)");
     return (times, size) ->
         new BubbleCensus(times, new BubbleTracker(settings, size, length));
+  }
+
+  private static double lengthOf(PeriodicGrid ring) {
+    Check.notNull(ring, "ring");
+    Check.argument(
+        ring.dimension() == 1,
+        "bubbles are followed on a line (ring) only, not on a plane: grid=%s", ring);
+    return ring.axis(0).length();
+  }
+
+  private static void requireProfile(PeriodicGrid ring, int numbers) {
+    Check.argument(
+        numbers == ring.points(),
+        "the detector needs a profile, one number for each point: numbers=%s, points=%s",
+        numbers, ring.points());
   }
 
   static void requireFinite(double time, double[] frame) {

@@ -70,11 +70,16 @@ public final class MetastableFluctuations {
    * @param average average of {@link #observable} in the metastable state
    * @param model the model that was run
    * @return the fluctuations
-   * @throws IllegalArgumentException if the average is of something else or holds no sample
+   * @throws IllegalArgumentException if the average is of something else or holds no sample, or if
+   *     the model is two-dimensional
    */
   public static MetastableFluctuations of(TimeAverage average, Model model) {
     Check.notNull(average, "average");
     Check.notNull(model, "model");
+    Check.argument(
+        model.region().grid().dimension() == 1,
+        "the metastable fluctuations need a line (ring), not a plane: grid=%s",
+        model.region().grid());
     int points = model.region().grid().points();
     int half = points / 2 + 3;
     Check.argument(

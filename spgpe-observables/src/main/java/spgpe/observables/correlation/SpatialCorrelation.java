@@ -169,9 +169,7 @@ public final class SpatialCorrelation implements Observable {
   public int size(Model model) {
     PointwiseProfile.requireComponents(model, components, name);
     int points = model.region().grid().points();
-    Check.argument(
-        model.region().grid().dimension() == 1,
-        "correlations along a ring need a line: grid=%s", model.region().grid());
+    requireLine(model);
     for (Observable profile : new Observable[] {a, b}) {
       if (profile != null) {
         Check.argument(
@@ -222,13 +220,21 @@ public final class SpatialCorrelation implements Observable {
    *
    * @param model the model that is run
    * @return new array 0, dx, ..., floor(N/2) dx
+   * @throws IllegalArgumentException if the model is two-dimensional
    */
   public double[] distances(Model model) {
-    double[] r = new double[distanceCount(Check.notNull(model, "model"))];
+    requireLine(Check.notNull(model, "model"));
+    double[] r = new double[distanceCount(model)];
     for (int i = 0; i < r.length; i++) {
       r[i] = model.region().grid().axis(0).position(i);
     }
     return r;
+  }
+
+  private static void requireLine(Model model) {
+    Check.argument(
+        model.region().grid().dimension() == 1,
+        "correlations along a ring need a line: grid=%s", model.region().grid());
   }
 
   private static int distanceCount(Model model) {

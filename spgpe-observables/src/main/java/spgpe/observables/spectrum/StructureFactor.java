@@ -116,9 +116,13 @@ public final class StructureFactor implements Observable {
    *
    * @param model the model that is run
    * @return new array 0, 2 pi/L, ...
+   * @throws IllegalArgumentException if the model is two-dimensional
    */
   public double[] waveNumbers(Model model) {
     Check.notNull(model, "model");
+    Check.argument(
+        model.region().grid().dimension() == 1,
+        "a structure factor needs a line (ring), not a plane: grid=%s", model.region().grid());
     double[] k = new double[model.region().grid().points() / 2 + 1];
     for (int n = 0; n < k.length; n++) {
       k[n] = model.region().grid().axis(0).waveNumber(n);
