@@ -14,7 +14,8 @@ import spgpe.statistics.RateEstimate;
  * all, and another 8e-4 (exact binomial) for the seven points of the survival curve.
  * Power: the rate has a relative error of about 0.1 with 100 trajectories, so that a rate wrong by
  * a factor 1.7 is found with probability 0.97; a temperature or noise strength wrong by 5 % changes
- * the rate by a factor 1.6 and &lt;dphi^2&gt; (relative error 0.006) by 6 %, which is found with certainty.
+ * the rate by a factor 1.6 and &lt;dphi^2&gt; (relative error 0.006) by 6 %, which is found with
+ * certainty.
  */
 class ReferenceDecayTest {
   private static final double BOUND = 3.9;
