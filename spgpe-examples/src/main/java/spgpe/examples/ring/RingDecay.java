@@ -17,8 +17,8 @@ import spgpe.run.Trajectory;
 import spgpe.run.TrajectoryEnd;
 
 /**
- * The simulation behind the command: an ensemble for each plan, and a space-time record of a typical
- * trajectory of each.
+ * The simulation behind the command: an ensemble for each plan, and a space-time record of a
+ * typical trajectory of each.
  *
  * @param seed seed of all ensembles
  * @param trajectories trajectories of each plan

@@ -10,11 +10,12 @@ import spgpe.statistics.RateEstimate;
 /**
  * A small version of {@link ReferenceDecay}, seed fixed before the first run of this test.
  *
- * <p>Bounds of 3.9 standard errors on each of twelve numbers: false-alarm probability 1.2e-3 in all, and
- * another 8e-4 (exact binomial) for the seven points of the survival curve.
- * Power: the rate has a relative error of about 0.1 with 100 trajectories, so that a rate wrong by a
- * factor 1.7 is found with probability 0.97; a temperature or noise strength wrong by 5 % changes the rate by a factor
- * 1.6 and &lt;dphi^2&gt; (relative error 0.006) by 6 %, which is found with certainty.
+ * <p>Bounds of 3.9 standard errors on each of twelve numbers: false-alarm probability 1.2e-3 in
+ * all, and another 8e-4 (exact binomial) for the seven points of the survival curve.
+ * Power: the rate has a relative error of about 0.1 with 100 trajectories, so that a rate wrong by
+ * a factor 1.7 is found with probability 0.97; a temperature or noise strength wrong by 5 % changes
+ * the rate by a factor 1.6 and &lt;dphi^2&gt; (relative error 0.006) by 6 %, which is found with
+ * certainty.
  */
 class ReferenceDecayTest {
   private static final double BOUND = 3.9;

@@ -118,8 +118,8 @@ class NoisyRunsTest {
    * 2.4e6 values that mostly lie elsewhere, below 0.1 for a new seed, 0 for this one. Power: one
    * different birth or event fails, with certainty.
    *
-   * <p>Nor may the detector miss a decay: each trajectory whose mean cosine ends above 0.2 must have
-   * a bubble, and each with a bubble older than 60 must have decayed.
+   * <p>Nor may the detector miss a decay: each trajectory whose mean cosine ends above 0.2 must
+   * have a bubble, and each with a bubble older than 60 must have decayed.
    */
   @Test
   void birthsAndSitesOfThePlainDetector() {
