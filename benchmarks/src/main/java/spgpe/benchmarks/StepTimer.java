@@ -5,8 +5,9 @@ import spgpe.integrate.Stepper;
 
 /**
  * Times the step like the program in {@code peer/} does, for alternating runs: arguments points,
- * steps, repeats, integrator, lanes and, for a square of points times points, the word plane; prints
- * microseconds for each trajectory and step, best of the repeats after one that is not counted.
+ * steps, repeats, integrator, lanes and, for a square of points times points, the word plane.
+ * Prints microseconds for each trajectory and step, best of the repeats after one that is not
+ * counted.
  */
 public final class StepTimer {
   private StepTimer() {}
@@ -21,10 +22,11 @@ public final class StepTimer {
     int steps = Integer.parseInt(arguments[1]);
     int repeats = Integer.parseInt(arguments[2]);
     int lanes = Integer.parseInt(arguments[4]);
-    boolean plane = arguments.length > 5 && arguments[5].equals("plane");
+    boolean plane = arguments.length > 5 && "plane".equals(arguments[5]);
     Stepper stepper =
         Problem.startedStepper(
-            plane ? Problem.plane(points) : Problem.model(points), Problem.integrator(arguments[3]), lanes);
+            plane ? Problem.plane(points) : Problem.model(points),
+            Problem.integrator(arguments[3]), lanes);
     double best = Double.POSITIVE_INFINITY;
     for (int r = 0; r <= repeats; r++) {
       long begin = System.nanoTime();

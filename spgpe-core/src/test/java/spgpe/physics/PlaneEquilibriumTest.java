@@ -85,8 +85,8 @@ class PlaneEquilibriumTest {
    * |k|, virial and power balance, as in {@link EquipartitionTest}; 24 trajectories, limits 4.5
    * standard errors (false alarm 1.6e-4 for each of five numbers and two schemes, 1.6e-3 in all).
    * Standard errors 2.4, 1.2 and 0.6 % in the rings (the inner one has few and slow modes), 2.2 %
-   * in the virial (the condensate has its share) and 0.5 % in the power balance; deviations of 16, 8,
-   * 4, 15 and 4 % are seen with a probability of 97 %.
+   * in the virial (the condensate has its share) and 0.5 % in the power balance; deviations of 16,
+   * 8, 4, 15 and 4 % are seen with a probability of 97 %.
    */
   @Test
   void equipartitionOfAnInteractingPair() {

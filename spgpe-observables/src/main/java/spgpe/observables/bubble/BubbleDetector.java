@@ -112,12 +112,12 @@ public final class BubbleDetector {
   }
 
   /**
-   * Looks while the ensemble of a model runs, and refuses what is not a ring. Record a profile of the
-   * order parameter.
+   * Looks while the ensemble of a model runs, and refuses what is not a ring. Record a profile of
+   * the order parameter.
    *
    * @param ring grid of the model
-   * @return factory for a recording; throws IllegalArgumentException if what is recorded has another
-   *     number of values than the ring has points
+   * @return factory for a recording; throws IllegalArgumentException if what is recorded has
+   *     another number of values than the ring has points
    * @throws IllegalArgumentException if the grid is two-dimensional
    */
   public Accumulator.Factory<BubbleCensus> census(PeriodicGrid ring) {
@@ -129,8 +129,8 @@ public final class BubbleDetector {
   }
 
   /**
-   * Looks while the ensemble runs, without keeping frames. Record a profile of the order parameter on
-   * a ring; from a length alone a plane cannot be told, see {@link #census(PeriodicGrid)}.
+   * Looks while the ensemble runs, without keeping frames. Record a profile of the order parameter
+   * on a ring; from a length alone a plane cannot be told, see {@link #census(PeriodicGrid)}.
    *
    * @param length length of the ring
    * @return factory for a recording
