@@ -11,13 +11,8 @@ import spgpe.internal.check.Check;
  * The arrays handed out are live: writing to them changes the state. Fixed shape, mutable, not
  * thread-safe.
  */
-public final class Amplitudes {
-  private static final int MAX_NUMBERS = 1 << 28;
-
+public final class Amplitudes extends LaneArrays {
   private final CoherentRegion region;
-  private final int lanes;
-  private final double[][] re;
-  private final double[][] im;
 
   /**
    * Makes a state of zeros.
@@ -28,16 +23,8 @@ public final class Amplitudes {
    * @throws IllegalArgumentException if a number is out of range
    */
   public Amplitudes(CoherentRegion region, int components, int lanes) {
-    this.region = Check.notNull(region, "region");
-    Check.inRange(components, 1, 255, "components");
-    Check.inRange(lanes, 1, 4096, "lanes");
-    this.lanes = lanes;
-    Check.argument(
-        (long) region.modes() * lanes <= MAX_NUMBERS,
-        "modes times lanes must not exceed %s: modes=%s, lanes=%s",
-        MAX_NUMBERS, region.modes(), lanes);
-    this.re = new double[components][region.modes() * lanes];
-    this.im = new double[components][region.modes() * lanes];
+    super("modes", Check.notNull(region, "region").modes(), components, lanes);
+    this.region = region;
   }
 
   /**
@@ -47,48 +34,6 @@ public final class Amplitudes {
    */
   public CoherentRegion region() {
     return region;
-  }
-
-  /**
-   * Number of components.
-   *
-   * @return components
-   */
-  public int components() {
-    return re.length;
-  }
-
-  /**
-   * Number of lanes.
-   *
-   * @return lanes
-   */
-  public int lanes() {
-    return lanes;
-  }
-
-  /**
-   * Live real parts.
-   *
-   * @param component component index from 0
-   * @return array of modes x lanes numbers
-   * @throws IllegalArgumentException if there is no such component
-   */
-  public double[] re(int component) {
-    Check.inRange(component, 0, re.length - 1, "component index");
-    return re[component];
-  }
-
-  /**
-   * Live imaginary parts.
-   *
-   * @param component component index from 0
-   * @return array of modes x lanes numbers
-   * @throws IllegalArgumentException if there is no such component
-   */
-  public double[] im(int component) {
-    Check.inRange(component, 0, im.length - 1, "component index");
-    return im[component];
   }
 
   /** Sets every amplitude to zero. */

@@ -9,13 +9,8 @@ import spgpe.internal.check.Check;
  * <p>Layout as in {@link Amplitudes}: separate real and imaginary arrays, index {@code point * lanes
  * + lane}. The arrays handed out are live. Fixed shape, mutable, not thread-safe.
  */
-public final class Field {
-  private static final int MAX_NUMBERS = 1 << 28;
-
+public final class Field extends LaneArrays {
   private final PeriodicGrid grid;
-  private final int lanes;
-  private final double[][] re;
-  private final double[][] im;
 
   /**
    * Makes a field of zeros.
@@ -26,16 +21,8 @@ public final class Field {
    * @throws IllegalArgumentException if a number is out of range
    */
   public Field(PeriodicGrid grid, int components, int lanes) {
-    this.grid = Check.notNull(grid, "grid");
-    Check.inRange(components, 1, 255, "components");
-    Check.inRange(lanes, 1, 4096, "lanes");
-    this.lanes = lanes;
-    Check.argument(
-        (long) grid.points() * lanes <= MAX_NUMBERS,
-        "points times lanes must not exceed %s: points=%s, lanes=%s",
-        MAX_NUMBERS, grid.points(), lanes);
-    this.re = new double[components][grid.points() * lanes];
-    this.im = new double[components][grid.points() * lanes];
+    super("points", Check.notNull(grid, "grid").points(), components, lanes);
+    this.grid = grid;
   }
 
   /**
@@ -45,48 +32,6 @@ public final class Field {
    */
   public PeriodicGrid grid() {
     return grid;
-  }
-
-  /**
-   * Number of components.
-   *
-   * @return components
-   */
-  public int components() {
-    return re.length;
-  }
-
-  /**
-   * Number of lanes.
-   *
-   * @return lanes
-   */
-  public int lanes() {
-    return lanes;
-  }
-
-  /**
-   * Live real parts.
-   *
-   * @param component component index from 0
-   * @return array of points x lanes numbers
-   * @throws IllegalArgumentException if there is no such component
-   */
-  public double[] re(int component) {
-    Check.inRange(component, 0, re.length - 1, "component index");
-    return re[component];
-  }
-
-  /**
-   * Live imaginary parts.
-   *
-   * @param component component index from 0
-   * @return array of points x lanes numbers
-   * @throws IllegalArgumentException if there is no such component
-   */
-  public double[] im(int component) {
-    Check.inRange(component, 0, im.length - 1, "component index");
-    return im[component];
   }
 
   /**
