@@ -66,41 +66,18 @@ public final class LatticeStrang implements Integrator {
     return "LatticeStrang: exact Ornstein-Uhlenbeck half steps around the local flow, step=" + step;
   }
 
-  private static final class Worker extends AbstractStepper {
-    private final OrnsteinUhlenbeck linear;
+  private static final class Worker extends OuStepper {
     private final LocalFlow local;
-    private final boolean nonlinear;
-    private final Amplitudes start;
 
     Worker(Model model, NoiseGenerator noise, int lanes, double dt) {
       super(model, noise, lanes, dt);
-      this.linear = new OrnsteinUhlenbeck(model, dt, lanes);
       this.local = new LocalFlow(model, lanes);
-      this.nonlinear = !model.localTerms().isEmpty();
-      this.start = new Amplitudes(model.region(), model.components(), lanes);
     }
 
     @Override
-    protected boolean isNoisy() {
-      return linear.isNoisy();
-    }
-
-    @Override
-    protected void step(boolean fromSymmetricPoint, Amplitudes normals, double time) {
-      if (fromSymmetricPoint) {
-        linear.half(state, normals, start);
-      } else {
-        linear.whole(state, normals, start);
-      }
+    void nonlinearStep(Amplitudes start, double time) {
       state.set(start);
-      if (nonlinear) {
-        local.advance(time + dt / 2, dt, state);
-      }
-    }
-
-    @Override
-    protected void toSymmetricPoint(Amplitudes normals, Amplitudes rest, Amplitudes target) {
-      linear.halfWayThrough(state, normals, rest, target);
+      local.advance(time + dt / 2, dt, state);
     }
   }
 }

@@ -89,12 +89,9 @@ public final class OuMidpoint implements Integrator {
         + " step=" + step + ", tolerance=" + tolerance;
   }
 
-  private static final class Worker extends AbstractStepper {
-    private final OrnsteinUhlenbeck linear;
+  private static final class Worker extends OuStepper {
     private final StageSum stage;
-    private final boolean nonlinear;
     private final double tolerance;
-    private final Amplitudes start;
     private final Amplitudes middle;
     private final Amplitudes next;
     private final Amplitudes force;
@@ -104,11 +101,8 @@ public final class OuMidpoint implements Integrator {
 
     Worker(Model model, NoiseGenerator noise, int lanes, double dt, double tolerance) {
       super(model, noise, lanes, dt);
-      this.linear = new OrnsteinUhlenbeck(model, dt, lanes);
       this.stage = new StageSum(model);
-      this.nonlinear = !model.localTerms().isEmpty();
       this.tolerance = tolerance;
-      this.start = new Amplitudes(model.region(), model.components(), lanes);
       this.middle = new Amplitudes(model.region(), model.components(), lanes);
       this.next = new Amplitudes(model.region(), model.components(), lanes);
       this.force = new Amplitudes(model.region(), model.components(), lanes);
@@ -118,21 +112,7 @@ public final class OuMidpoint implements Integrator {
     }
 
     @Override
-    protected boolean isNoisy() {
-      return linear.isNoisy();
-    }
-
-    @Override
-    protected void step(boolean fromSymmetricPoint, Amplitudes normals, double time) {
-      if (fromSymmetricPoint) {
-        linear.half(state, normals, start);
-      } else {
-        linear.whole(state, normals, start);
-      }
-      if (!nonlinear) {
-        state.set(start);
-        return;
-      }
+    void nonlinearStep(Amplitudes start, double time) {
       middle.set(start);
       java.util.Arrays.fill(done, false);
       int iterations = 0;
@@ -141,7 +121,7 @@ public final class OuMidpoint implements Integrator {
         forces.localForce(time + dt / 2, middle, force);
         stage.add(start, dt / 2, force, next);
         iterations++;
-      } while (!takeNext(time));
+      } while (!takeNext(start, time));
       for (int c = 0; c < state.components(); c++) {
         reflect(middle.re(c), start.re(c), state.re(c));
         reflect(middle.im(c), start.im(c), state.im(c));
@@ -157,7 +137,7 @@ public final class OuMidpoint implements Integrator {
       }
     }
 
-    private boolean isFinite(int lane) {
+    private static boolean isFinite(Amplitudes start, int lane) {
       for (int c = 0; c < start.components(); c++) {
         if (!(start.atomNumber(c, lane) < Double.POSITIVE_INFINITY)) {
           return false;
@@ -167,7 +147,7 @@ public final class OuMidpoint implements Integrator {
     }
 
     /** Takes over the lanes that have not converged; true if all have. */
-    private boolean takeNext(double time) {
+    private boolean takeNext(Amplitudes start, double time) {
       java.util.Arrays.fill(changes, 0);
       java.util.Arrays.fill(sizes, 0);
       for (int c = 0; c < state.components(); c++) {
@@ -178,7 +158,7 @@ public final class OuMidpoint implements Integrator {
       for (int lane = 0; lane < done.length; lane++) {
         if (!done[lane] && !(changes[lane] < 1e150)) {
           // a lane that was not finite before is left to the guard of the run
-          requireConvergence(!isFinite(lane), time);
+          requireConvergence(!isFinite(start, lane), time);
           done[lane] = true;
         }
         done[lane] |= changes[lane] <= tolerance * sizes[lane];
@@ -205,11 +185,6 @@ public final class OuMidpoint implements Integrator {
       for (int e = 0; e < target.length; e++) {
         target[e] = 2 * middle[e] - start[e];
       }
-    }
-
-    @Override
-    protected void toSymmetricPoint(Amplitudes normals, Amplitudes rest, Amplitudes target) {
-      linear.halfWayThrough(state, normals, rest, target);
     }
   }
 }

@@ -69,40 +69,20 @@ public final class OuRk4 implements Integrator {
     return "OuRk4: exact Ornstein-Uhlenbeck half steps around projected RK4, step=" + step;
   }
 
-  private static final class Worker extends AbstractStepper {
-    private final OrnsteinUhlenbeck linear;
+  private static final class Worker extends OuStepper {
     private final StageSum stage;
-    private final boolean nonlinear;
-    private final Amplitudes start;
     private final Amplitudes probe;
     private final Amplitudes force;
 
     Worker(Model model, NoiseGenerator noise, int lanes, double dt) {
       super(model, noise, lanes, dt);
-      this.linear = new OrnsteinUhlenbeck(model, dt, lanes);
       this.stage = new StageSum(model);
-      this.nonlinear = !model.localTerms().isEmpty();
-      this.start = new Amplitudes(model.region(), model.components(), lanes);
       this.probe = new Amplitudes(model.region(), model.components(), lanes);
       this.force = new Amplitudes(model.region(), model.components(), lanes);
     }
 
     @Override
-    protected boolean isNoisy() {
-      return linear.isNoisy();
-    }
-
-    @Override
-    protected void step(boolean fromSymmetricPoint, Amplitudes normals, double time) {
-      if (fromSymmetricPoint) {
-        linear.half(state, normals, start);
-      } else {
-        linear.whole(state, normals, start);
-      }
-      if (!nonlinear) {
-        state.set(start);
-        return;
-      }
+    void nonlinearStep(Amplitudes start, double time) {
       forces.localForce(time, start, force);
       stage.add(start, dt / 6, force, state);
       stage.add(start, dt / 2, force, probe);
@@ -114,11 +94,6 @@ public final class OuRk4 implements Integrator {
       stage.add(start, dt, force, probe);
       forces.localForce(time + dt, probe, force);
       stage.add(state, dt / 6, force, state);
-    }
-
-    @Override
-    protected void toSymmetricPoint(Amplitudes normals, Amplitudes rest, Amplitudes target) {
-      linear.halfWayThrough(state, normals, rest, target);
     }
   }
 }
