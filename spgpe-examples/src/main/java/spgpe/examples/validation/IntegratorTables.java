@@ -33,7 +33,8 @@ import spgpe.run.Trajectory;
  * Orders and equilibrium bias of the integrators, as the tables of docs/validation.md.
  *
  * <p>Without arguments the orders and the exact tables of the linearised mode (a minute). With the
- * arguments "ensemble TRAJECTORIES TIME" the runs of the whole interacting field too.
+ * arguments "ensemble TRAJECTORIES TIME [SCHEME ...]" the runs of the whole interacting field too,
+ * of all schemes or of those named.
  */
 public final class IntegratorTables {
   private static final double LENGTH = 32;
@@ -45,13 +46,15 @@ public final class IntegratorTables {
   /**
    * Prints the tables.
    *
-   * @param args nothing, or "ensemble", number of trajectories, time of each
+   * @param args nothing, or "ensemble", number of trajectories, time of each, names of schemes
    */
   public static void main(String[] args) {
     printOrderTable();
     printLinearTables();
-    if (args.length == 3 && args[0].equals("ensemble")) {
-      printEnsembleTable(Integer.parseInt(args[1]), Double.parseDouble(args[2]));
+    if (args.length >= 3 && args[0].equals("ensemble")) {
+      printEnsembleTable(
+          Integer.parseInt(args[1]), Double.parseDouble(args[2]),
+          List.of(args).subList(3, args.length));
     }
   }
 
@@ -111,7 +114,8 @@ public final class IntegratorTables {
     return 100 * modes.worst(scheme.withStep(step)).bias();
   }
 
-  private static void printEnsembleTable(int trajectories, double time) {
+  private static void printEnsembleTable(
+      int trajectories, double time, List<String> only) {
     System.out.println();
     System.out.println(
         "Interacting pair: <N>, <K> and equipartition ratios, one sigma in brackets");
@@ -120,8 +124,12 @@ public final class IntegratorTables {
     for (double gamma : new double[] {0.1, 0.01, 1e-3}) {
       for (double step : new double[] {0.1, 0.05}) {
         for (Integrator scheme :
-            List.of(OuRk4.ofStep(step), Rk4Ip.ofStep(step), LatticeStrang.ofStep(step))) {
-          printRow(scheme, gamma, trajectories, time);
+            List.of(
+                OuRk4.ofStep(step), OuMidpoint.ofStep(step), Rk4Ip.ofStep(step),
+                HeunIp.ofStep(step), LatticeStrang.ofStep(step))) {
+          if (only.isEmpty() || only.contains(scheme.getClass().getSimpleName())) {
+            printRow(scheme, gamma, trajectories, time);
+          }
         }
       }
     }
