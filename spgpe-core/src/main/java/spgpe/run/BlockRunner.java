@@ -1,11 +1,13 @@
 package spgpe.run;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.function.BooleanSupplier;
 import org.jspecify.annotations.Nullable;
 import spgpe.integrate.Integrator;
 import spgpe.integrate.Stepper;
+import spgpe.integrate.StepperState;
 import spgpe.internal.check.Check;
 import spgpe.model.Model;
 import spgpe.projector.Amplitudes;
@@ -14,7 +16,7 @@ import spgpe.reservoir.RandomStreams;
 
 /**
  * Runs blocks of trajectories in lockstep, one after the other, with one workspace: belongs to one
- * thread at a time.
+ * thread at a time. What a trajectory does depends neither on its lane nor on its neighbours.
  */
 final class BlockRunner {
   /** Steps between checks for divergence and cancellation when nothing is observed. */
@@ -42,14 +44,11 @@ final class BlockRunner {
   private final Snapshot snapshot;
   private final Amplitudes all;
   private final Amplitudes single;
-  private final Amplitudes[] lastGood;
-  private final double[] lastGoodTime;
   private final double[][] buffers;
   private final int[] channelPosition;
   private final int[] rulePosition;
   private final boolean[] running;
-  private final List<List<Channel.Probe<?>>> probes = new ArrayList<>();
-  private long firstTrajectory;
+  private List<OpenTrajectory> block = List.of();
   /** What is being asked that the user supplied, and its name; empty between such calls. */
   private String asked = "";
   private String askedName = "";
@@ -73,11 +72,6 @@ final class BlockRunner {
     this.snapshot = new Snapshot(model);
     this.all = new Amplitudes(model.region(), model.components(), lanes);
     this.single = new Amplitudes(model.region(), model.components(), 1);
-    this.lastGood = new Amplitudes[lanes];
-    for (int lane = 0; lane < lanes; lane++) {
-      lastGood[lane] = new Amplitudes(model.region(), model.components(), 1);
-    }
-    this.lastGoodTime = new double[lanes];
     this.buffers = new double[channels.size()][];
     for (int c = 0; c < buffers.length; c++) {
       buffers[c] = new double[channels.get(c).size()];
@@ -87,61 +81,112 @@ final class BlockRunner {
     this.running = new boolean[lanes];
   }
 
-  /** Runs trajectories first, first+1, ..., at most as many as there are lanes. */
-  void run(long first, int count, BooleanSupplier cancelled, Sink sink) {
-    prepare(first, count);
-    while (true) {
+  /**
+   * Runs a block to the end of its window.
+   *
+   * @return the trajectories that have not ended, ready to go on with other neighbours; empty if
+   *     cancelled
+   */
+  List<OpenTrajectory> run(TrajectoryPool.Block next, BooleanSupplier cancelled, Sink sink) {
+    block = next.trajectories();
+    Arrays.fill(running, false);
+    Arrays.fill(running, 0, block.size(), true);
+    findPositions(next.firstStep());
+    if (next.firstStep() == 0) {
+      begin();
+    } else {
+      resume();
+    }
+    while (stepper.stepNumber() < next.endStep()) {
       long step = stepper.stepNumber();
-      boolean due = isDue(step);
-      if (due || step % GUARD_INTERVAL == 0 || step == lastStep) {
+      if (isDue(step) || step % GUARD_INTERVAL == 0 || step == lastStep) {
         if (cancelled.getAsBoolean()) {
-          return;
+          return List.of();
         }
         stepper.observe(all);
-        for (int lane = 0; lane < count; lane++) {
+        for (int lane = 0; lane < block.size(); lane++) {
           if (running[lane]) {
             look(lane, step, sink);
           }
         }
         advancePositions(step);
         if (!anyRunning()) {
-          return;
+          return List.of();
         }
       }
       stepper.advance();
     }
+    return stillOpen();
   }
 
-  private void prepare(long first, int count) {
-    firstTrajectory = first;
+  private void begin() {
     asking(INITIAL, "");
-    java.util.Arrays.fill(channelPosition, 0);
-    java.util.Arrays.fill(rulePosition, 0);
-    java.util.Arrays.fill(running, false);
-    probes.clear();
-    for (int lane = 0; lane < lanes; lane++) {
-      // lanes without a trajectory of their own repeat the first one, unobserved
-      long trajectory = lane < count ? first + lane : first;
-      noise.assign(lane, trajectory);
+    for (int lane = 0; lane < block.size(); lane++) {
+      long trajectory = block.get(lane).index();
       single.clear();
       initialState.prepare(model, streams.initialState(trajectory), single);
       int bad = firstBadComponent(single);
       Check.argument(
           bad < 0, "initial state must be finite: trajectory=%s, component=%s", trajectory, bad);
-      all.setLane(lane, single);
-      lastGood[lane].set(single);
-      lastGoodTime[lane] = 0;
-      running[lane] = lane < count;
-      List<Channel.Probe<?>> own = new ArrayList<>();
-      if (lane < count) {
-        for (Channel<?> channel : channels) {
-          own.add(channel.probe());
-        }
-      }
-      probes.add(own);
+      block.get(lane).begin(single, channels);
+      assign(lane, trajectory, single);
     }
+    fillIdleLanes(block.get(0).lastGood());
     stepper.start(all, 0);
     asking("", "");
+  }
+
+  private void resume() {
+    for (int lane = 0; lane < block.size(); lane++) {
+      assign(lane, block.get(lane).index(), block.get(lane).state().inner());
+    }
+    StepperState common = block.get(0).state();
+    fillIdleLanes(common.inner());
+    stepper.restore(
+        StepperState.of(
+            all, common.stepNumber(), common.isAtSymmetricPoint(), common.refinement()));
+  }
+
+  private void assign(int lane, long trajectory, Amplitudes state) {
+    noise.assign(lane, trajectory);
+    all.setLane(lane, state);
+  }
+
+  /** Lanes without a trajectory of their own repeat the first one, unobserved. */
+  private void fillIdleLanes(Amplitudes state) {
+    for (int lane = block.size(); lane < lanes; lane++) {
+      assign(lane, block.get(0).index(), state);
+    }
+  }
+
+  private List<OpenTrajectory> stillOpen() {
+    StepperState saved = stepper.save();
+    Amplitudes inner = saved.inner();
+    List<OpenTrajectory> open = new ArrayList<>();
+    for (int lane = 0; lane < block.size(); lane++) {
+      if (running[lane]) {
+        inner.copyLane(lane, single);
+        block.get(lane).leavesWith(
+            StepperState.of(
+                single, saved.stepNumber(), saved.isAtSymmetricPoint(), saved.refinement()));
+        open.add(block.get(lane));
+      }
+    }
+    return open;
+  }
+
+  private void findPositions(long step) {
+    for (int c = 0; c < channelPosition.length; c++) {
+      channelPosition[c] = countBefore(channels.get(c).steps(), step);
+    }
+    for (int r = 0; r < rulePosition.length; r++) {
+      rulePosition[r] = countBefore(ruleSteps[r], step);
+    }
+  }
+
+  private static int countBefore(long[] steps, long step) {
+    int found = Arrays.binarySearch(steps, step);
+    return found >= 0 ? found : -found - 1;
   }
 
   private boolean isDue(long step) {
@@ -173,30 +218,29 @@ final class BlockRunner {
 
   private void look(int lane, long step, Sink sink) {
     double time = stepper.time();
-    long trajectory = firstTrajectory + lane;
+    OpenTrajectory open = block.get(lane);
     all.copyLane(lane, single);
     int bad = firstBadComponent(single);
     if (bad >= 0) {
       running[lane] = false;
       sink.diverged(
           new DivergedException(
-              trajectory, time, bad, lastGoodTime[lane], lastGood[lane].copy()),
-          probes.get(lane));
+              open.index(), time, bad, open.lastGoodTime(), open.lastGood().copy()),
+          open.probes());
       return;
     }
-    lastGood[lane].set(single);
-    lastGoodTime[lane] = time;
-    snapshot.show(single, time, step, trajectory);
+    open.isGood(single, time);
+    snapshot.show(single, time, step, open.index());
     for (int c = 0; c < channels.size(); c++) {
       if (isAt(channels.get(c).steps(), channelPosition[c], step)) {
         measure(channels.get(c).recording().observable(), buffers[c]);
-        probes.get(lane).get(c).accumulator().add(channelPosition[c], buffers[c]);
+        open.probes().get(c).accumulator().add(channelPosition[c], buffers[c]);
       }
     }
-    TrajectoryEnd end = endAt(step, time, trajectory);
+    TrajectoryEnd end = endAt(step, time, open.index());
     if (end != null) {
       running[lane] = false;
-      sink.ended(end, probes.get(lane), single);
+      sink.ended(end, open.probes(), single);
     }
   }
 
@@ -257,7 +301,11 @@ final class BlockRunner {
 
   /** Where the block stands, for error messages. */
   String position() {
-    String at = "trajectories from " + firstTrajectory;
+    StringBuilder indices = new StringBuilder();
+    for (OpenTrajectory open : block) {
+      indices.append(indices.isEmpty() ? "" : ", ").append(open.index());
+    }
+    String at = "trajectories " + indices;
     if (asked.equals(INITIAL)) {
       return at + ", " + INITIAL;
     }

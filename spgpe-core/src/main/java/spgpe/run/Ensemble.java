@@ -257,7 +257,9 @@ public final class Ensemble {
   }
 
   /**
-   * Runs on an executor and waits. The library starts no threads; every trajectory block is one task.
+   * Runs on an executor and waits. The library starts no threads; there is one task for each block of
+   * as many trajectories as lanes. When trajectories stop early, blocks are put together anew at 64
+   * times of the run, so that no lane idles for long; the numbers do not depend on it.
    * An interrupt of the waiting thread cancels the run and is kept set; the call then waits only for
    * blocks already begun, so it also frees a caller whose executor dropped tasks it had accepted.
    *

@@ -48,21 +48,22 @@ final class EnsembleRun {
       channel.probe();
     }
     idle.add(newRunner()); // contradictions show here, in the caller's thread
-    long blocks = (plan.count() + plan.lanes() - 1) / plan.lanes();
+    long blocks = (plan.count() + lanes() - 1) / lanes();
     Check.argument(
         blocks <= Integer.MAX_VALUE,
         "a run must not have more than 2^31-1 blocks of trajectories: trajectories=%s, lanes=%s; use"
             + " more lanes or run parts and merge them", plan.count(), plan.lanes());
-    int parts = (int) blocks;
-    for (int part = 0; part < parts && !stop.get(); part++) {
-      long block = part;
+    TrajectoryPool pool =
+        new TrajectoryPool(
+            plan.first(), plan.count(), lanes(), lastStep, !plan.stopRules().isEmpty());
+    for (long block = 0; block < blocks && !stop.get(); block++) {
       tasks.submitted();
       try {
         executor.execute(
             () -> {
               if (tasks.begin()) {
                 try {
-                  runBlock(block);
+                  work(pool);
                 } finally {
                   tasks.end();
                 }
@@ -87,7 +88,11 @@ final class EnsembleRun {
   private BlockRunner newRunner() {
     return new BlockRunner(
         plan.model(), plan.initialState(), plan.integrator(), plan.streams(), channels,
-        plan.stopRules(), lastStep, (int) Math.min(plan.lanes(), plan.count()));
+        plan.stopRules(), lastStep, lanes());
+  }
+
+  private int lanes() {
+    return (int) Math.min(plan.lanes(), plan.count());
   }
 
   private boolean isStopped() {
@@ -99,20 +104,31 @@ final class EnsembleRun {
     return stop.get();
   }
 
-  private void runBlock(long block) {
-    if (stop.get()) {
-      return;
-    }
+  /**
+   * Begins one block and goes on with what waits. A task that finds the pool empty is not needed any
+   * more: what others work on comes back to them.
+   */
+  private void work(TrajectoryPool pool) {
     BlockRunner runner = null;
+    boolean mayBegin = true;
     try {
-      runner = idle.poll();
-      if (runner == null) {
-        runner = newRunner();
+      while (!stop.get()) {
+        TrajectoryPool.Block block = pool.take(mayBegin);
+        mayBegin &= block.firstStep() > 0;
+        if (block.trajectories().isEmpty()) {
+          break;
+        }
+        if (runner == null) {
+          runner = idle.poll();
+        }
+        if (runner == null) {
+          runner = newRunner();
+        }
+        pool.putBack(runner.run(block, this::isStopped, new Collector()), block.endStep());
       }
-      long first = plan.first() + block * plan.lanes();
-      int count = (int) Math.min(plan.lanes(), plan.first() + plan.count() - first);
-      runner.run(first, count, this::isStopped, new Collector());
-      idle.add(runner);
+      if (runner != null) {
+        idle.add(runner);
+      }
     } catch (RuntimeException | Error e) {
       fail(runner == null ? "making a workspace failed" : runner.position(), e);
     }

@@ -66,7 +66,7 @@ class FailuresTest {
     RunFailedException failure =
         failure(
             SmallPlans.plan(SmallPlans.with(new BadTerm(1, -1)), 2),
-            "BadTerm(from=1.0)", "boom", "trajectories from 0");
+            "BadTerm(from=1.0)", "boom", "trajectories 0");
     TermFailedException term = assertInstanceOf(TermFailedException.class, failure.getCause());
     assertSame(BOOM, term.getCause());
     assertTrue(term.getMessage().contains("time=1.0"), term.getMessage());
@@ -211,7 +211,7 @@ class FailuresTest {
                 (model, random, target) -> {
                   throw BOOM;
                 });
-    assertSame(BOOM, failure(plan, "initial state", "boom", "trajectories from 0").getCause());
+    assertSame(BOOM, failure(plan, "initial state", "boom", "trajectories 0").getCause());
   }
 
   @Test

@@ -121,6 +121,34 @@ class ReproducibilityTest {
     }
   }
 
+  /** Long enough for several windows: 60 trajectories change lanes and neighbours many times. */
+  @Test
+  void refilledLanesGiveTheSameBits() {
+    for (Setup setup : Setup.values()) {
+      Ensemble plan =
+          plan(setup)
+              .trajectories(60)
+              .until(60)
+              .stopWhen(
+                  StopRule.when(
+                      "rare", Schedule.every(0.2).startingAt(0.4),
+                      s -> Math.hypot(s.field().re(0)[5], s.field().im(0)[5]) > 1.35));
+      EnsembleResult reference = plan.run();
+      long windows = reference.ends().stream().map(e -> (int) (e.time() / 6.4)).distinct().count();
+      assertEquals(true, windows >= 4, "trajectories end in " + windows + " windows");
+      List<Object> expected = contents(reference);
+      for (int lanes : new int[] {2, 8}) {
+        assertEquals(expected, contents(plan.lanes(lanes).run()), setup + ", lanes " + lanes);
+      }
+      ExecutorService executor = Executors.newFixedThreadPool(3);
+      try {
+        assertEquals(expected, contents(plan.lanes(4).runOn(executor)), setup + ", three threads");
+      } finally {
+        executor.shutdown();
+      }
+    }
+  }
+
   private static final List<Object> REFERENCE =
       List.copyOf(contents(plan(Setup.SPLIT_COUNTER).run()));
 
