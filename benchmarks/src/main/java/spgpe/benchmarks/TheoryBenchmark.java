@@ -1,5 +1,6 @@
 package spgpe.benchmarks;
 
+import java.util.Optional;
 import java.util.concurrent.TimeUnit;
 import org.openjdk.jmh.annotations.Benchmark;
 import org.openjdk.jmh.annotations.BenchmarkMode;
@@ -15,8 +16,13 @@ import spgpe.theory.CoupledPair;
 import spgpe.theory.CriticalBubble;
 import spgpe.theory.DecayRate;
 import spgpe.theory.FloquetExponent;
+import spgpe.theory.InstabilityBand;
 import spgpe.theory.ModulatedCoupling;
+import spgpe.theory.PairAverages;
 import spgpe.theory.PairEquilibrium;
+import spgpe.theory.PhaseEquilibrium;
+import spgpe.theory.PlanarBubble;
+import spgpe.theory.RadialBubble;
 import spgpe.theory.RingModes;
 import spgpe.theory.SingleComponentEquilibrium;
 
@@ -80,6 +86,56 @@ public class TheoryBenchmark {
   @Benchmark
   public double decayRate() {
     return DecayRate.of(bubble, metastable.temperature(), DAMPING).total();
+  }
+
+  /**
+   * Critical bubble in the plane with its fluctuation spectrum, 797 modes for each field.
+   *
+   * @return the bubble
+   */
+  @Benchmark
+  public PlanarBubble planarBubble() {
+    return PlanarBubble.of(metastable, 36, 16);
+  }
+
+  /**
+   * Exact equilibrium of the pair on a finite ring with the correction for the cutoff.
+   *
+   * @return averages
+   */
+  @Benchmark
+  public PairAverages pairWithCutoff() {
+    return PairEquilibrium.withCutoff(stable, new RingModes(32, 48));
+  }
+
+  /**
+   * Equilibrium of the relative phase alone.
+   *
+   * @return the equilibrium
+   */
+  @Benchmark
+  public PhaseEquilibrium phaseOnly() {
+    return PhaseEquilibrium.of(stable);
+  }
+
+  /**
+   * Critical bubble of the phase alone in the plane, by shooting.
+   *
+   * @return the bubble
+   */
+  @Benchmark
+  public RadialBubble radialBubble() {
+    return RadialBubble.of(1.5);
+  }
+
+  /**
+   * Edges and largest growth of the first instability band.
+   *
+   * @return the band
+   */
+  @Benchmark
+  public Optional<InstabilityBand> instabilityBand() {
+    return modulated.firstBand(0);
   }
 
   /**
