@@ -17,7 +17,12 @@ import spgpe.reservoir.NoiseGenerator;
  * @param step time step
  */
 public record ExplicitMidpoint(double step) implements Integrator {
-  /** Refuses steps out of range. */
+  /**
+   * Refuses steps out of range.
+   *
+   * @param step time step, finite and positive
+   * @throws IllegalArgumentException if it is not
+   */
   public ExplicitMidpoint {
     if (!(step > 0 && step < Double.POSITIVE_INFINITY)) {
       throw new IllegalArgumentException("time step must be finite and > 0: step=" + step);
