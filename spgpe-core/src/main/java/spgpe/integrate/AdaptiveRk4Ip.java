@@ -64,6 +64,7 @@ public final class AdaptiveRk4Ip implements Integrator {
 
   @Override
   public double largestStableStep(Model model) {
+    Check.notNull(model, "model");
     return Double.POSITIVE_INFINITY;
   }
 

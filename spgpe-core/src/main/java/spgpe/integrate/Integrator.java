@@ -1,5 +1,6 @@
 package spgpe.integrate;
 
+import spgpe.internal.check.Check;
 import spgpe.model.Model;
 import spgpe.reservoir.NoiseGenerator;
 
@@ -41,6 +42,20 @@ public interface Integrator {
   double largestStableStep(Model model);
 
   /**
+   * Refuses a step that is not below {@link #largestStableStep}; for {@link #bind}.
+   *
+   * @param model the model
+   * @throws IllegalArgumentException if the step is too long; the message gives step and limit
+   */
+  default void requireStableStep(Model model) {
+    double limit = largestStableStep(Check.notNull(model, "model"));
+    Check.argument(
+        step() < limit,
+        "time step must stay below the largest stable one for this model: step=%s, limit=%s; use a"
+            + " smaller step or a lower cutoff", step(), limit);
+  }
+
+  /**
    * Makes a stepper with its own scratch memory, for one thread.
    *
    * @param model the model
@@ -48,7 +63,7 @@ public interface Integrator {
    *     first step
    * @param lanes realisations advanced together
    * @return the stepper
-   * @throws IllegalArgumentException if the step exceeds {@link #largestStableStep}, or if the
+   * @throws IllegalArgumentException if the step is not below {@link #largestStableStep}, or if the
    *     scheme does not fit the model; the message says why
    */
   Stepper bind(Model model, NoiseGenerator noise, int lanes);

@@ -115,7 +115,7 @@ public final class LatticeComposition implements Integrator {
         "%s composition needs local terms whose flows commute, else it drops to second order:"
             + " terms=%s; use LatticeComposition.yoshida",
         name, model.hamiltonian());
-    StepLimit.require(this, model);
+    requireStableStep(model);
     return new Worker(model, noise, lanes, step, a, b);
   }
 

@@ -57,7 +57,7 @@ public final class LatticeStrang implements Integrator {
     Check.notNull(model, "model");
     Check.notNull(noise, "noise");
     LocalFlow.require(model, "LatticeStrang");
-    StepLimit.require(this, model);
+    requireStableStep(model);
     return new Worker(model, noise, lanes, step);
   }
 

@@ -60,7 +60,7 @@ public final class OuRk4 implements Integrator {
   public Stepper bind(Model model, NoiseGenerator noise, int lanes) {
     Check.notNull(model, "model");
     Check.notNull(noise, "noise");
-    StepLimit.require(this, model);
+    requireStableStep(model);
     return new Worker(model, noise, lanes, step);
   }
 

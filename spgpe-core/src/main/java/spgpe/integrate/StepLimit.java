@@ -1,6 +1,5 @@
 package spgpe.integrate;
 
-import spgpe.internal.check.Check;
 import spgpe.model.Model;
 
 /**
@@ -22,13 +21,5 @@ final class StepLimit {
       mu = Math.max(mu, Math.abs(model.reservoir().chemicalPotential(c)));
     }
     return Math.PI / (model.linearPart().spectralBound() + 2 * mu);
-  }
-
-  static void require(Integrator integrator, Model model) {
-    double limit = integrator.largestStableStep(model);
-    Check.argument(
-        integrator.step() < limit,
-        "time step must stay below pi/(eps_max + 2 mu): step=%s, limit=%s; use a smaller step or a"
-            + " lower cutoff", integrator.step(), limit);
   }
 }

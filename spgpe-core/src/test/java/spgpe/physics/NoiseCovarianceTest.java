@@ -222,34 +222,4 @@ class NoiseCovarianceTest {
     }
     return sums;
   }
-
-  /** The step from a state at rest splits the same way as a step in the middle of a run. */
-  @Test
-  void observationsDoNotChangeTheRun() {
-    Model model =
-        Model.of(
-            region(), Hamiltonian.pair(1, 0.3).with(CoherentCoupling.constant(0.2)),
-            Reservoir.of(T, 0.5, 0).withDampings(0.05, 0.4));
-    for (Integrator scheme : new Integrator[] {OuRk4.ofStep(0.01), Rk4Ip.ofStep(0.01)}) {
-      Amplitudes[] ends = new Amplitudes[2];
-      for (int look = 0; look < 2; look++) {
-        NoiseGenerator noise = RandomStreams.counterBased(14).generator(model.region(), 2, 1);
-        noise.assign(0, 0);
-        Stepper stepper = scheme.bind(model, noise, 1);
-        Amplitudes state = new Amplitudes(model.region(), 2, 1);
-        stepper.start(state, 0);
-        for (int s = 0; s < 20; s++) {
-          stepper.advance();
-          if (look == 1) {
-            stepper.observe(state);
-          }
-        }
-        stepper.observe(state);
-        ends[look] = state;
-      }
-      for (int m = 0; m < model.region().modes(); m++) {
-        assertEquals(ends[0].re(1)[m], ends[1].re(1)[m], 0);
-      }
-    }
-  }
 }

@@ -16,8 +16,6 @@ import org.junit.jupiter.api.Test;
  * @param <A> the accumulator
  */
 public abstract class AccumulatorContract<A extends Accumulator<A>> {
-  private static final double[] TIMES = {0, 0.5, 1.5, 2};
-
   /**
    * Makes the accumulator under test.
    *
@@ -43,22 +41,46 @@ public abstract class AccumulatorContract<A extends Accumulator<A>> {
     return 2;
   }
 
+  /**
+   * The scheduled times.
+   *
+   * @return new array, rising
+   */
+  protected double[] times() {
+    return new double[] {0, 0.5, 1.5, 2};
+  }
+
+  /**
+   * Turns a drawn number into one that the accumulator takes.
+   *
+   * @param drawn any number up to 1e4 in size
+   * @return number of a sample
+   */
+  protected double number(double drawn) {
+    return drawn;
+  }
+
+  private A empty() {
+    return factory().create(times(), size());
+  }
+
   private A ofTrajectory(long trajectory) {
-    A accumulator = factory().create(TIMES.clone(), size());
+    A accumulator = empty();
+    double[] times = times();
     SplittableRandom random = new SplittableRandom(1000 + trajectory);
     boolean stopped = random.nextInt(3) == 0;
-    int samples = stopped ? random.nextInt(TIMES.length + 1) : TIMES.length;
+    int samples = stopped ? random.nextInt(times.length + 1) : times.length;
     double[] values = new double[size()];
     for (int s = 0; s < samples; s++) {
       for (int i = 0; i < values.length; i++) {
-        values[i] = random.nextDouble(-1, 1) * Math.pow(10, random.nextInt(-3, 4));
+        values[i] = number(random.nextDouble(-1, 1) * Math.pow(10, random.nextInt(-3, 4)));
       }
       accumulator.add(s, values);
       Arrays.fill(values, 1e9); // the array is reused: an accumulator must have copied it
     }
     accumulator.finish(
         new TrajectoryEnd(
-            trajectory, 2,
+            trajectory, times[times.length - 1],
             stopped ? TrajectoryEnd.Reason.STOPPED : TrajectoryEnd.Reason.END_OF_RUN, ""));
     return accumulator;
   }
@@ -72,7 +94,7 @@ public abstract class AccumulatorContract<A extends Accumulator<A>> {
   }
 
   private List<?> sum(MergeTree<A> tree) {
-    return contents(tree.sum(factory().create(TIMES.clone(), size())));
+    return contents(tree.sum(empty()));
   }
 
   private static void shuffle(List<Long> list, SplittableRandom random) {
@@ -124,7 +146,7 @@ public abstract class AccumulatorContract<A extends Accumulator<A>> {
 
   @Test
   void mergingWithNothingChangesNothing() {
-    A empty = factory().create(TIMES.clone(), size());
+    A empty = empty();
     for (long trajectory = 0; trajectory < 20; trajectory++) {
       A one = ofTrajectory(trajectory);
       assertEquals(contents(one), contents(one.mergedWith(empty)));

@@ -54,14 +54,6 @@ class OrderStudyTest {
     return List.of(OuRk4.ofStep(1), Rk4Ip.ofStep(1), HeunIp.ofStep(1), OuMidpoint.ofStep(1));
   }
 
-  @ParameterizedTest
-  @MethodSource("schemes")
-  void deterministicOrderIsAsStated(Integrator scheme) {
-    Convergence found = study(0).deterministic(scheme, 20, 3);
-    assertEquals(scheme.facts().deterministicOrder(), found.order(), 0.1, found.table());
-    assertEquals(0, found.orderError(), 0);
-  }
-
   /**
    * Additive noise: strong order 1. Standard error of the order below 0.04 with 2000 paths; limit
    * 0.15 (false alarm 2e-4). Half an order lost or gained is seen.

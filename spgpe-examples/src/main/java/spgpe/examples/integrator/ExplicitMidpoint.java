@@ -1,5 +1,7 @@
 package spgpe.examples.integrator;
 
+import static java.util.Objects.requireNonNull;
+
 import spgpe.integrate.Integrator;
 import spgpe.integrate.KickedStepper;
 import spgpe.integrate.SchemeFacts;
@@ -15,6 +17,18 @@ import spgpe.reservoir.NoiseGenerator;
  * @param step time step
  */
 public record ExplicitMidpoint(double step) implements Integrator {
+  /**
+   * Refuses steps out of range.
+   *
+   * @param step time step, finite and positive
+   * @throws IllegalArgumentException if it is not
+   */
+  public ExplicitMidpoint {
+    if (!(step > 0 && step < Double.POSITIVE_INFINITY)) {
+      throw new IllegalArgumentException("time step must be finite and > 0: step=" + step);
+    }
+  }
+
   @Override
   public ExplicitMidpoint withStep(double newStep) {
     return new ExplicitMidpoint(newStep);
@@ -27,11 +41,12 @@ public record ExplicitMidpoint(double step) implements Integrator {
 
   @Override
   public double largestStableStep(Model model) {
-    return 1 / model.linearPart().spectralBound();
+    return 1 / requireNonNull(model, "model").linearPart().spectralBound();
   }
 
   @Override
   public Stepper bind(Model model, NoiseGenerator noise, int lanes) {
+    requireStableStep(model);
     Amplitudes force = new Amplitudes(model.region(), model.components(), lanes);
     Amplitudes middle = new Amplitudes(model.region(), model.components(), lanes);
     return new KickedStepper(model, noise, lanes, step) {

@@ -5,7 +5,6 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
-import java.util.List;
 import org.junit.jupiter.api.Test;
 import spgpe.grid.Axis;
 import spgpe.grid.PeriodicGrid;
@@ -15,7 +14,6 @@ import spgpe.hamiltonian.Hamiltonian;
 import spgpe.hamiltonian.HamiltonianTerm;
 import spgpe.hamiltonian.LocalTerm;
 import spgpe.hamiltonian.ModulatedCoupling;
-import spgpe.internal.check.AllocationMeter;
 import spgpe.model.Model;
 import spgpe.projector.Amplitudes;
 import spgpe.projector.PointBlock;
@@ -24,8 +22,8 @@ import spgpe.reservoir.NoiseGenerator;
 import spgpe.reservoir.RandomStreams;
 import spgpe.reservoir.Reservoir;
 
-/** Restarts, shared Brownian paths, lanes and refusals of the schemes. */
-class StepperStateTest {
+/** Shared Brownian paths, refusals and choices of steps; the rest is in {@link IntegratorContract}. */
+class SchemeChoicesTest {
   private static final Hamiltonian PAIR =
       Hamiltonian.pair(1, 0.3)
           .with(CoherentCoupling.constant(0.2))
@@ -38,18 +36,6 @@ class StepperStateTest {
             Projector.allModes().on(PeriodicGrid.of(Axis.of(16, 8))), hamiltonian, reservoir)
         : Model.of(
             Projector.modesUpTo(5).on(PeriodicGrid.of(Axis.of(32, 8))), hamiltonian, reservoir);
-  }
-
-  private static Model fit(Integrator scheme) {
-    double gamma = scheme.facts().admitsNoise() ? 0.1 : 0;
-    return model(scheme.facts().latticeOnly(), PAIR, Reservoir.of(0.2, 1, gamma));
-  }
-
-  private static List<Integrator> schemes() {
-    return List.of(
-        OuRk4.ofStep(0.05), OuMidpoint.ofStep(0.05), Rk4Ip.ofStep(0.05), HeunIp.ofStep(0.05),
-        LatticeStrang.ofStep(0.05), LatticeComposition.yoshida(0.05),
-        AdaptiveRk4Ip.of(0.2, 1e-8));
   }
 
   private static NoiseGenerator noise(Model model, int lanes) {
@@ -71,91 +57,6 @@ class StepperStateTest {
       }
     }
     return a;
-  }
-
-  private static void requireSame(Amplitudes expected, Amplitudes found, String message) {
-    for (int c = 0; c < 2; c++) {
-      assertArrayEquals(expected.re(c), found.re(c), 0, message);
-      assertArrayEquals(expected.im(c), found.im(c), 0, message);
-    }
-  }
-
-  @Test
-  void aRestoredStepperGoesOnBitForBit() {
-    for (Integrator scheme : schemes()) {
-      Model model = fit(scheme);
-      Stepper whole = scheme.bind(model, noise(model, 1), 1);
-      whole.start(start(model, 1), 0);
-      StepperState saved = whole.save();
-      assertTrue(saved.isAtSymmetricPoint());
-      for (int s = 0; s < 12; s++) {
-        if (s == 7) {
-          saved = whole.save();
-        }
-        whole.advance();
-      }
-      Stepper second = scheme.bind(model, noise(model, 1), 1);
-      second.restore(
-          StepperState.of(
-              saved.inner(), saved.stepNumber(), saved.isAtSymmetricPoint(), saved.refinement()));
-      assertEquals(7, second.stepNumber());
-      for (int s = 7; s < 12; s++) {
-        second.advance();
-      }
-      Amplitudes expected = start(model, 1);
-      Amplitudes found = start(model, 1);
-      whole.observe(expected);
-      second.observe(found);
-      requireSame(expected, found, scheme.toString());
-      assertEquals(whole.time(), second.time(), 0);
-    }
-  }
-
-  @Test
-  void aStepAndALookAllocateNothing() {
-    for (Integrator scheme : schemes()) {
-      Model model = fit(scheme);
-      Stepper stepper = scheme.bind(model, noise(model, 1), 1);
-      Amplitudes target = start(model, 1);
-      stepper.start(target, 0);
-      double step = AllocationMeter.bytesPerCall(stepper::advance);
-      double look = AllocationMeter.bytesPerCall(() -> stepper.observe(target));
-      assertTrue(step < 1, scheme + ": bytes for each step: " + step);
-      assertTrue(look < 1, scheme + ": bytes for each look: " + look);
-    }
-  }
-
-  @Test
-  void lanesDoNotDependOnEachOther() {
-    for (Integrator scheme : schemes()) {
-      if (scheme instanceof AdaptiveRk4Ip) {
-        continue;
-      }
-      Model model = fit(scheme);
-      Amplitudes all = start(model, 3);
-      Stepper together = scheme.bind(model, noise(model, 3), 3);
-      together.start(all, 0);
-      for (int s = 0; s < 10; s++) {
-        together.advance();
-      }
-      Amplitudes found = all.copy();
-      together.observe(found);
-      for (int lane = 0; lane < 3; lane++) {
-        Amplitudes one = new Amplitudes(model.region(), 2, 1);
-        all.copyLane(lane, one);
-        NoiseGenerator own = noise(model, 1);
-        own.assign(0, 10 + lane);
-        Stepper alone = scheme.bind(model, own, 1);
-        alone.start(one, 0);
-        for (int s = 0; s < 10; s++) {
-          alone.advance();
-        }
-        alone.observe(one);
-        Amplitudes lanes = new Amplitudes(model.region(), 2, 1);
-        found.copyLane(lane, lanes);
-        requireSame(one, lanes, scheme + " lane " + lane);
-      }
-    }
   }
 
   /** W at the end of a run from the kicks of HalfKicks: the same for ratios 1, 2, 4 and 3. */
@@ -246,13 +147,6 @@ class StepperStateTest {
     assertThrows(
         IllegalArgumentException.class,
         () -> AdaptiveRk4Ip.of(0.2, 1e-8).bind(undamped, noise(undamped, 2), 2));
-    for (Integrator scheme : schemes()) {
-      if (!(scheme instanceof AdaptiveRk4Ip)) {
-        assertTrue(refusal(scheme.withStep(1), fit(scheme)).contains("pi/"), scheme.toString());
-      }
-      assertThrows(IllegalArgumentException.class, () -> scheme.withStep(0));
-      assertThrows(IllegalArgumentException.class, () -> scheme.withStep(Double.NaN));
-    }
   }
 
   @Test
