@@ -34,8 +34,11 @@ abstract class FrameGeometry {
     smoothing.apply(frame, result);
   }
 
-  /** Circular mean on each axis of the points above a level. */
+  /** Circular mean on each axis of the points above a level, or of all if there are none. */
   Site mean(Region region, double[] frame, double level) {
+    if (!(frame[region.highestPoint(frame)] > level)) {
+      return mean(region, frame, Double.NEGATIVE_INFINITY);
+    }
     return new Site(
         mean(0, region, frame, level),
         grid.dimension() == 1 ? 0 : mean(1, region, frame, level));
@@ -56,7 +59,7 @@ abstract class FrameGeometry {
         count++;
       }
     }
-    if (count == 0 || Math.hypot(x, y) < 1e-9 * count) {
+    if (Math.hypot(x, y) < 1e-9 * count) {
       return substitute(axisIndex, region, frame);
     }
     return inside(Math.atan2(y, x) / (2 * Math.PI) * axis.length(), axis.length());
