@@ -170,6 +170,20 @@ public final class TimeAverage implements Accumulator<TimeAverage> {
   }
 
   /**
+   * Averages of all numbers, for example of a profile.
+   *
+   * @return new array; NaN without samples
+   */
+  public double[] means() {
+    ClusterMoments sums = sums();
+    double[] means = new double[size];
+    for (int i = 0; i < size; i++) {
+      means[i] = sums.mean(i);
+    }
+    return means;
+  }
+
+  /**
    * Standard error of the average across trajectories.
    *
    * @param i index of the number

@@ -18,6 +18,7 @@ import spgpe.model.Model;
 import spgpe.observables.bubble.BubbleDetector;
 import spgpe.observables.bubble.BubbleSettings;
 import spgpe.observables.bubble.MetastableFluctuations;
+import spgpe.observables.bubble.RadiusTrack;
 import spgpe.observables.bubble.WallSpeed;
 import spgpe.observables.bubble.WallTrack;
 import spgpe.observables.correlation.CorrelationFunction;
@@ -26,6 +27,7 @@ import spgpe.observables.correlation.SpatialCorrelation;
 import spgpe.observables.density.AtomNumber;
 import spgpe.observables.density.Current;
 import spgpe.observables.density.Density;
+import spgpe.observables.density.EdgeDensity;
 import spgpe.observables.density.Energy;
 import spgpe.observables.density.Momentum;
 import spgpe.observables.density.NumberFluctuation;
@@ -39,8 +41,10 @@ import spgpe.observables.spectrum.StructureFactor;
 import spgpe.observables.thermometry.DynamicalTemperature;
 import spgpe.observables.thermometry.Equipartition;
 import spgpe.observables.thermometry.OccupationTail;
+import spgpe.observables.topology.DomainWallLength;
 import spgpe.observables.topology.DomainWalls;
 import spgpe.observables.topology.Kinks;
+import spgpe.observables.topology.Vortices;
 import spgpe.projector.Amplitudes;
 import spgpe.projector.Projector;
 import spgpe.reservoir.Reservoir;
@@ -62,7 +66,7 @@ class AllObservablesTest {
         RelativePhase.sine(), RelativePhase.wrapped(), RelativePhase.wrappedAbout(Math.PI),
         RelativePhase.unwrapped(), RelativePhase.winding(), ComponentPhase.wrapped(1),
         ComponentPhase.winding(0), ModeOccupation.ofComponent(1), ModeOccupation.inPhase(),
-        ModeOccupation.outOfPhase(), ModeAmplitude.of(0, 2), ModeAmplitude.ofComponent(1),
+        ModeOccupation.outOfPhase(), ModeOccupation.inPhase().inShells(), ModeAmplitude.of(0, 2), ModeAmplitude.ofComponent(1),
         ModeAmplitude.all(), StructureFactor.ofDensity(), StructureFactor.ofComponent(0),
         StructureFactor.ofSpin(Density.SpinAxis.Z), SpatialCorrelation.firstOrder(1),
         SpatialCorrelation.secondOrder(0), SpatialCorrelation.phaseDifference(),
@@ -126,11 +130,7 @@ class AllObservablesTest {
     Snapshot snapshot = Snapshot.of(model, a, 0);
     int refused = 0;
     for (Observable observable : all()) {
-      boolean ring =
-          observable instanceof SpatialCorrelation || observable instanceof StructureFactor
-              || observable.name()
-                  .matches(".*(unwrapped|winding|wall|kink|fluctuations of the relative).*");
-      if (ring) {
+      if (observable.name().matches(".*(unwrapped|winding|number of domain walls|kink).*")) {
         String message = Fields.refusal(() -> Fields.measure(observable, snapshot));
         assertTrue(message.contains("line"), observable.name() + ": " + message);
         refused++;
@@ -140,21 +140,54 @@ class AllObservablesTest {
         }
       }
     }
-    assertEquals(15, refused);
-    String fluctuations =
+    assertEquals(5, refused);
+  }
+
+  @Test
+  void observablesOfPlanesRefuseRings() {
+    Model ring = Fields.pair(4, 10);
+    List<Observable> planar =
+        List.of(
+            Vortices.countOfComponent(1), Vortices.countOfRelativePhase(),
+            Vortices.chargesOfComponent(0), Vortices.chargesOfRelativePhase(),
+            DomainWallLength.of(RelativePhase.cosine(), 0));
+    for (Observable observable : planar) {
+      String message = Fields.refusal(() -> observable.size(ring));
+      assertTrue(message.contains("need a plane"), message);
+    }
+    String numbers =
         Fields.refusal(
-            () -> MetastableFluctuations.of(new TimeAverage(new double[] {0}, 122), model));
-    assertTrue(fluctuations.contains("not a plane"), fluctuations);
-    String waves = Fields.refusal(() -> StructureFactor.ofDensity().waveNumbers(model));
-    assertTrue(waves.contains("not a plane"), waves);
-    String distances = Fields.refusal(() -> SpatialCorrelation.cosine().distances(model));
-    assertTrue(distances.contains("line"), distances);
-    BubbleDetector detector = BubbleDetector.of(BubbleSettings.atLevel(0));
-    String census = Fields.refusal(() -> detector.census(model.region().grid()));
-    assertTrue(census.contains("not on a plane"), census);
-    PeriodicGrid ring = PeriodicGrid.of(Axis.of(13, 7));
-    String numbers = Fields.refusal(() -> detector.census(ring).create(new double[] {0}, 12));
-    assertTrue(numbers.contains("numbers=12, points=13"), numbers);
+            () ->
+                BubbleDetector.of(BubbleSettings.atLevel(0))
+                    .census(plane().region().grid()).create(new double[] {0}, 12));
+    assertTrue(numbers.contains("numbers=12, points=117"), numbers);
+  }
+
+  /** Those of planes, as for all: nothing is changed, nothing remembered. */
+  @Test
+  void observablesOfPlanesHaveNoMemory() {
+    Model model = plane();
+    Amplitudes a = Samples.complexGaussian(model, k -> 1 / (1 + k * k), 5).get().amplitudes();
+    Amplitudes b =
+        Samples.complexGaussian(model, k -> 1 / (1 + k * k), 6).get().amplitudes().copy();
+    Amplitudes before = a.copy();
+    List<Observable> planar =
+        List.of(
+            Vortices.countOfComponent(1), Vortices.countOfRelativePhase(),
+            Vortices.chargesOfComponent(0), Vortices.chargesOfRelativePhase(),
+            DomainWallLength.of(RelativePhase.cosine(), 0), SpatialCorrelation.firstOrder(0),
+            SpatialCorrelation.cosine(), StructureFactor.ofDensity(),
+            ModeOccupation.ofComponent(1).inShells(), MetastableFluctuations.observable());
+    for (Observable observable : planar) {
+      Snapshot s = Snapshot.of(model, a, 0);
+      double[] first = Fields.measure(observable, s);
+      a.set(b);
+      double[] other = Fields.measure(observable, Snapshot.of(model, a, 0));
+      assertFalse(java.util.Arrays.equals(first, other), observable.name());
+      a.set(before);
+      assertArrayEquals(first, Fields.measure(observable, s), 0, observable.name());
+      assertArrayEquals(before.re(0), a.re(0), 0, observable.name());
+    }
   }
 
   /** Momentum of a single moving mode and its current, along both axes. */
@@ -238,7 +271,27 @@ class AllObservablesTest {
             () -> MetastableFluctuations.of(noAverage, model),
             () -> MetastableFluctuations.of(average, noModel),
             () -> WallTrack.of(none, none, none),
-            () -> WallSpeed.hyperbola(nothing(WallTrack.class)));
+            () -> WallSpeed.hyperbola(nothing(WallTrack.class)),
+            () -> WallSpeed.linear(nothing(RadiusTrack.class)),
+            () -> WallSpeed.hyperbola(nothing(RadiusTrack.class), 0),
+            () -> RadiusTrack.of(none, List.of()),
+            () ->
+                BubbleDetector.of(BubbleSettings.atLevel(0))
+                    .inFrame(none, model.region().grid()),
+            () ->
+                BubbleDetector.of(BubbleSettings.atLevel(0))
+                    .inFrame(new double[1], nothing(PeriodicGrid.class)),
+            () ->
+                BubbleDetector.of(BubbleSettings.atLevel(0)).census(nothing(PeriodicGrid.class)),
+            () -> SpatialCorrelation.cosine().weights(noModel),
+            () -> StructureFactor.ofDensity().weights(noModel),
+            () -> ModeOccupation.inPhase().inShells().waveNumbers(noModel),
+            () -> Vortices.find(none, model.region().grid()),
+            () -> Vortices.find(new double[1], nothing(PeriodicGrid.class)),
+            () -> DomainWallLength.of(none, 0, model.region().grid()),
+            () -> DomainWallLength.of(noObservable, 0),
+            () -> EdgeDensity.of(noAverage, model.region().grid()),
+            () -> EdgeDensity.of(average, nothing(PeriodicGrid.class)));
     for (int i = 0; i < calls.size(); i++) {
       String message = Fields.refusal(calls.get(i));
       assertTrue(message.contains("must not be null"), "call " + i + ": " + message);

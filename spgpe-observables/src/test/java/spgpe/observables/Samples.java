@@ -39,7 +39,7 @@ public final class Samples {
     return List.of(sums);
   }
 
-  /** Complex Gaussian modes with &lt;|a_k|^2&gt; = spectrum(k) in every component. */
+  /** Complex Gaussian modes with &lt;|a_k|^2&gt; = spectrum(|k|) in every component. */
   public static Supplier<Snapshot> complexGaussian(
       Model model, DoubleUnaryOperator spectrum, long seed) {
     Random random = new Random(seed);
@@ -48,13 +48,20 @@ public final class Samples {
       for (int c = 0; c < state.components(); c++) {
         for (int m = 0; m < state.re(c).length; m++) {
           double sigma =
-              Math.sqrt(spectrum.applyAsDouble(model.region().waveNumber(0, m)) / 2);
+              Math.sqrt(spectrum.applyAsDouble(waveNumber(model, m)) / 2);
           state.re(c)[m] = sigma * random.nextGaussian();
           state.im(c)[m] = sigma * random.nextGaussian();
         }
       }
       return Snapshot.of(model, state, 0);
     };
+  }
+
+  /** k on a line, |k| on a plane. */
+  private static double waveNumber(Model model, int mode) {
+    return model.region().grid().dimension() == 1
+        ? model.region().waveNumber(0, mode)
+        : Math.sqrt(model.region().kSquared(mode));
   }
 
   /** psi_1 = exp(i phi), psi_2 = 1 with a real Gaussian phi, &lt;|phi_k|^2&gt; = spectrum(k). */

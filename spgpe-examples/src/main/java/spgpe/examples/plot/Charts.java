@@ -18,11 +18,19 @@ import java.util.List;
 import java.util.Locale;
 import javax.imageio.ImageIO;
 import org.jfree.chart.JFreeChart;
+import org.jfree.chart.annotations.XYDataImageAnnotation;
 import org.jfree.chart.axis.LogAxis;
 import org.jfree.chart.axis.NumberAxis;
 import org.jfree.chart.axis.NumberTickUnit;
 import org.jfree.chart.axis.ValueAxis;
 import org.jfree.chart.plot.XYPlot;
+import org.jfree.chart.renderer.LookupPaintScale;
+import org.jfree.chart.renderer.xy.XYLineAndShapeRenderer;
+import org.jfree.chart.title.PaintScaleLegend;
+import org.jfree.chart.ui.RectangleEdge;
+import org.jfree.data.xy.XYSeriesCollection;
+import spgpe.output.ColourMap;
+import spgpe.output.FieldImage;
 
 /** The common look of the figures: white ground, dark text, series told apart by shade and dash. */
 public final class Charts {
@@ -108,6 +116,56 @@ public final class Charts {
       chart.getLegend().setItemFont(TEXT.deriveFont(12f));
     }
     return chart;
+  }
+
+  /**
+   * An axis with its range.
+   *
+   * @param label quantity and unit
+   * @param low lower end
+   * @param high upper end
+   */
+  public record Axis(String label, double low, double high) {}
+
+  /**
+   * A map of a field in the library's sequential colours, from dark to light, with a colour bar.
+   *
+   * @param title one line
+   * @param field the picture, with the range of the colour axis
+   * @param x horizontal axis
+   * @param y vertical axis
+   * @param colours axis of the colours
+   * @return the chart
+   */
+  public static JFreeChart map(String title, FieldImage field, Axis x, Axis y, Axis colours) {
+    XYPlot plot =
+        new XYPlot(
+            new XYSeriesCollection(), linear(x.label()), linear(y.label()),
+            new XYLineAndShapeRenderer());
+    plot.getDomainAxis().setRange(x.low(), x.high());
+    plot.getRangeAxis().setRange(y.low(), y.high());
+    plot.addAnnotation(
+        new XYDataImageAnnotation(
+            field.toImage(), x.low(), y.low(), x.high() - x.low(), y.high() - y.low()));
+    JFreeChart chart = chart(title, plot, false);
+    chart.addSubtitle(colourBar(colours));
+    return chart;
+  }
+
+  private static PaintScaleLegend colourBar(Axis colours) {
+    ColourMap map = ColourMap.sequential();
+    LookupPaintScale scale = new LookupPaintScale(colours.low(), colours.high(), Color.GRAY);
+    for (int i = 0; i < 256; i++) {
+      scale.add(
+          colours.low() + (colours.high() - colours.low()) * i / 256,
+          new Color(map.colour((i + 0.5) / 256)));
+    }
+    PaintScaleLegend legend = new PaintScaleLegend(scale, linear(colours.label()));
+    legend.setPosition(RectangleEdge.BOTTOM);
+    legend.setSubdivisionCount(256);
+    legend.setStripWidth(14);
+    legend.setPadding(4, 60, 4, 20);
+    return legend;
   }
 
   /**

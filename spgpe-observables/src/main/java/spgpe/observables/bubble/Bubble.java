@@ -7,26 +7,30 @@ package spgpe.observables.bubble;
  * @param index index of the bubble in its history, in the order of birth
  * @param origin how it came: PRESENT_AT_START, NUCLEATED or SPLIT
  * @param birthTime time of the first frame that shows it
- * @param birthSite circular mean of its points above the seed level in that frame, in [0, L)
+ * @param birthSite circular mean of its points above the seed level in that frame, on
+ *     each axis
  * @param endTime time of the first frame without it, or of the last frame if it is still there
- * @param fate how it ended: MERGED or COLLAPSED, or FILLED_RING, or its origin if it is still there
+ * @param fate how it ended: MERGED or COLLAPSED, or FILLED, or its origin if it is still there
  * @param mergedInto index of the bubble into which it merged; -1 if it did not
- * @param largestWidth largest width at the grow level, a length
+ * @param largestWidth largest width at the grow level, a length; on a plane the diameter 2
+ *     sqrt(area/pi)
  * @param accepted whether it reached the minimum width and duration of the settings
- * @param walls positions of its walls
+ * @param walls positions of its walls on a ring; empty on a plane
+ * @param radius its radius against time
  */
 public record Bubble(
     long trajectory,
     int index,
     BubbleEvent.Kind origin,
     double birthTime,
-    double birthSite,
+    Site birthSite,
     double endTime,
     BubbleEvent.Kind fate,
     int mergedInto,
     double largestWidth,
     boolean accepted,
-    WallTrack walls) {
+    WallTrack walls,
+    RadiusTrack radius) {
   /**
    * How long it was there as a bubble of its own.
    *

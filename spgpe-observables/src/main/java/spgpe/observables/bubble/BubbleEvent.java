@@ -8,10 +8,10 @@ package spgpe.observables.bubble;
  * @param kind what happened
  * @param bubble index of the bubble in its history
  * @param other the other bubble: that into which it merged or from which it split; -1 otherwise
- * @param site position, in [0, L)
+ * @param site position
  */
 public record BubbleEvent(
-    long trajectory, double time, Kind kind, int bubble, int other, double site) {
+    long trajectory, double time, Kind kind, int bubble, int other, Site site) {
   /** What can happen. */
   public enum Kind {
     /** There in the first frame: it was born before. */
@@ -24,7 +24,7 @@ public record BubbleEvent(
     MERGED,
     /** Vanished. */
     COLLAPSED,
-    /** Covers the whole ring at the grow level. */
-    FILLED_RING
+    /** Covers the whole ring or plane at the grow level. */
+    FILLED
   }
 }

@@ -10,7 +10,8 @@ import spgpe.internal.check.Check;
  * @param seedLevel a region must exceed this somewhere to become a bubble
  * @param growLevel a bubble is the whole region above this level, and lives as long as there is one
  * @param wallLevel level at which the positions of the walls are read, the outermost crossing
- * @param minimumWidth width (at the grow level) a bubble must reach to be accepted, a length
+ * @param minimumWidth width (at the grow level) a bubble must reach to be accepted, a length; on a
+ *     plane the diameter 2 sqrt(area/pi)
  * @param minimumDuration time a bubble must live to be accepted
  * @param origin where the numbers come from
  */

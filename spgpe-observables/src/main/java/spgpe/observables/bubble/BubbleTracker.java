@@ -6,6 +6,7 @@ import java.util.List;
 import java.util.SortedSet;
 import java.util.TreeSet;
 import org.jspecify.annotations.Nullable;
+import spgpe.grid.PeriodicGrid;
 
 /**
  * Follows bubbles from frame to frame. A region above the grow level belongs to the bubbles with
@@ -17,9 +18,7 @@ final class BubbleTracker {
   private static final int GONE = -1;
 
   private final BubbleSettings settings;
-  private final double length;
-  private final int points;
-  private final PeriodicSmoothing smoothing;
+  private final FrameGeometry geometry;
   private final double[] smooth;
   private final List<OpenBubble> bubbles = new ArrayList<>();
   private final List<BubbleEvent> events = new ArrayList<>();
@@ -29,11 +28,10 @@ final class BubbleTracker {
   private int[] nextOwner;
   private int frames;
 
-  BubbleTracker(BubbleSettings settings, int points, double length) {
+  BubbleTracker(BubbleSettings settings, PeriodicGrid grid) {
+    int points = grid.points();
     this.settings = settings;
-    this.length = length;
-    this.points = points;
-    this.smoothing = new PeriodicSmoothing(points, length / points, settings.smoothing());
+    this.geometry = FrameGeometry.of(grid, settings.smoothing());
     this.smooth = new double[points];
     this.owner = new int[points];
     this.nextOwner = new int[points];
@@ -41,8 +39,8 @@ final class BubbleTracker {
   }
 
   void add(double time, double[] profile) {
-    smoothing.apply(profile, smooth);
-    List<Region> regions = Region.above(smooth, settings.growLevel());
+    geometry.smooth(profile, smooth);
+    List<Region> regions = geometry.regionsAbove(smooth, settings.growLevel());
     List<SortedSet<Integer>> parents = new ArrayList<>();
     for (Region region : regions) {
       parents.add(ownersIn(region));
@@ -69,8 +67,8 @@ final class BubbleTracker {
 
   private SortedSet<Integer> ownersIn(Region region) {
     SortedSet<Integer> found = new TreeSet<>();
-    for (int i = 0; i < region.length(); i++) {
-      int b = owner[region.point(i, points)];
+    for (int p : region.points) {
+      int b = owner[p];
       if (b >= 0) {
         found.add(b);
       }
@@ -80,7 +78,7 @@ final class BubbleTracker {
 
   /**
    * For each bubble the region that shares most points with it (of equals that with the higher
-   * peak, a rule that does not depend on where the ring is cut), GONE if none does, NOT_THERE if it
+   * peak, a rule that does not depend on where the frame is cut), GONE if none does, NOT_THERE if it
    * was not in the frame before.
    */
   private int[] heirs(List<Region> regions) {
@@ -97,8 +95,7 @@ final class BubbleTracker {
     for (int r = 0; r < regions.size(); r++) {
       Arrays.fill(shared, 0);
       double peak = Double.NEGATIVE_INFINITY;
-      for (int i = 0; i < regions.get(r).length(); i++) {
-        int p = regions.get(r).point(i, points);
+      for (int p : regions.get(r).points) {
         peak = Math.max(peak, smooth[p]);
         if (owner[p] >= 0) {
           shared[owner[p]]++;
@@ -136,7 +133,7 @@ final class BubbleTracker {
         identity = parent; // the oldest goes on
       } else {
         bubbles.get(parent).end(time, BubbleEvent.Kind.MERGED, identity);
-        report(time, BubbleEvent.Kind.MERGED, parent, identity, middle(region));
+        report(time, BubbleEvent.Kind.MERGED, parent, identity, meetingPoint(region));
       }
     }
     return identity >= 0
@@ -145,8 +142,8 @@ final class BubbleTracker {
   }
 
   private boolean isSeeded(Region region) {
-    for (int i = 0; i < region.length(); i++) {
-      if (smooth[region.point(i, points)] > settings.seedLevel()) {
+    for (int p : region.points) {
+      if (smooth[p] > settings.seedLevel()) {
         return true;
       }
     }
@@ -154,78 +151,32 @@ final class BubbleTracker {
   }
 
   private OpenBubble open(double time, BubbleEvent.Kind kind, int other, Region region) {
-    OpenBubble bubble = new OpenBubble(bubbles.size(), kind, time, site(region), length);
+    Site site = geometry.mean(region, smooth, settings.seedLevel());
+    OpenBubble bubble =
+        new OpenBubble(bubbles.size(), kind, time, site, geometry.grid.axis(0).length());
     bubbles.add(bubble);
     report(time, kind, bubble.index, other, bubble.birthSite());
     return bubble;
   }
 
   private void follow(OpenBubble bubble, double time, Region region) {
-    for (int i = 0; i < region.length(); i++) {
-      nextOwner[region.point(i, points)] = bubble.index;
+    for (int p : region.points) {
+      nextOwner[p] = bubble.index;
     }
-    boolean fills = region.length() == points;
-    double spacing = length / points;
-    if (bubble.see(time, region.length() * spacing, fills)) {
-      report(time, BubbleEvent.Kind.FILLED_RING, bubble.index, -1, bubble.birthSite());
+    boolean fills = region.size() == smooth.length;
+    if (bubble.see(time, 2 * geometry.radius(region.size()), fills)) {
+      report(time, BubbleEvent.Kind.FILLED, bubble.index, -1, bubble.birthSite());
     }
-    if (fills) {
-      return;
-    }
-    double level = settings.wallLevel();
-    int first = 0;
-    while (first < region.length() && !(smooth[region.point(first, points)] > level)) {
-      first++;
-    }
-    if (first == region.length()) {
-      return;
-    }
-    int last = region.length() - 1;
-    while (!(smooth[region.point(last, points)] > level)) {
-      last--;
-    }
-    double left = region.start() + first - fraction(region.point(first, points), -1, level);
-    double right = region.start() + last + fraction(region.point(last, points), 1, level);
-    bubble.addWalls(time, left * spacing, right * spacing);
+    geometry.read(bubble, time, region, smooth, settings.wallLevel());
   }
 
-  /** Part of a spacing from a point above the level to where its neighbour's side crosses it. */
-  private double fraction(int inside, int direction, double level) {
-    double above = smooth[inside];
-    double below = smooth[Math.floorMod(inside + direction, points)];
-    return (above - level) / (above - below);
+  private Site meetingPoint(Region region) {
+    return geometry.grid.dimension() == 1
+        ? new Site(geometry.substitute(0, region, smooth), 0)
+        : geometry.mean(region, smooth, Double.NEGATIVE_INFINITY);
   }
 
-  /** Circular mean of the points above the seed level; middle of the region if there is none. */
-  private double site(Region region) {
-    double x = 0;
-    double y = 0;
-    double step = 2 * Math.PI / points;
-    int count = 0;
-    for (int i = 0; i < region.length(); i++) {
-      int p = region.point(i, points);
-      if (smooth[p] > settings.seedLevel()) {
-        x += Math.cos(p * step);
-        y += Math.sin(p * step);
-        count++;
-      }
-    }
-    if (count == 0 || Math.hypot(x, y) < 1e-9 * count) {
-      return middle(region);
-    }
-    return inRing(Math.atan2(y, x) / (2 * Math.PI) * length);
-  }
-
-  private double middle(Region region) {
-    return inRing((region.start() + (region.length() - 1) / 2.0) * length / points);
-  }
-
-  private double inRing(double position) {
-    double inside = position - length * Math.floor(position / length);
-    return inside < length ? inside : 0;
-  }
-
-  private void report(double time, BubbleEvent.Kind kind, int bubble, int other, double site) {
+  private void report(double time, BubbleEvent.Kind kind, int bubble, int other, Site site) {
     events.add(new BubbleEvent(0, time, kind, bubble, other, site));
   }
 

@@ -8,9 +8,11 @@ final class OpenBubble {
   final int index;
   private final BubbleEvent.Kind origin;
   private final double birthTime;
-  private final double birthSite;
+  private final Site birthSite;
   private final double length;
   private final List<double[]> walls = new ArrayList<>();
+  private final List<Extent> extents = new ArrayList<>();
+  private final List<Double> extentTimes = new ArrayList<>();
   private double largestWidth;
   private boolean filled;
   private double endTime;
@@ -18,7 +20,7 @@ final class OpenBubble {
   private int mergedInto = -1;
 
   OpenBubble(
-      int index, BubbleEvent.Kind origin, double birthTime, double birthSite, double length) {
+      int index, BubbleEvent.Kind origin, double birthTime, Site birthSite, double length) {
     this.index = index;
     this.origin = origin;
     this.fate = origin;
@@ -28,18 +30,18 @@ final class OpenBubble {
     this.length = length;
   }
 
-  double birthSite() {
+  Site birthSite() {
     return birthSite;
   }
 
-  /** Sees the bubble in a frame; true if it fills the ring for the first time. */
-  boolean see(double time, double width, boolean fillsRing) {
+  /** Sees the bubble in a frame; true if it fills everything for the first time. */
+  boolean see(double time, double width, boolean fillsAll) {
     endTime = time;
     largestWidth = Math.max(largestWidth, width);
-    boolean first = fillsRing && !filled;
-    filled |= fillsRing;
+    boolean first = fillsAll && !filled;
+    filled |= fillsAll;
     if (first) {
-      fate = BubbleEvent.Kind.FILLED_RING;
+      fate = BubbleEvent.Kind.FILLED;
     }
     return first;
   }
@@ -52,6 +54,11 @@ final class OpenBubble {
       turns = length * Math.rint(((last[1] + last[2]) - (left + right)) / 2 / length);
     }
     walls.add(new double[] {time, left + turns, right + turns});
+  }
+
+  void addExtent(double time, Extent extent) {
+    extentTimes.add(time);
+    extents.add(extent);
   }
 
   void end(double time, BubbleEvent.Kind how, int into) {
@@ -75,6 +82,8 @@ final class OpenBubble {
             && endTime - birthTime >= settings.minimumDuration();
     return new Bubble(
         trajectory, index, origin, birthTime, birthSite, endTime, fate, mergedInto, largestWidth,
-        accepted, WallTrack.of(times, left, right));
+        accepted, WallTrack.of(times, left, right),
+        RadiusTrack.of(
+            extentTimes.stream().mapToDouble(Double::doubleValue).toArray(), extents));
   }
 }

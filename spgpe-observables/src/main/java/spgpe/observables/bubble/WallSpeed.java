@@ -10,7 +10,7 @@ import spgpe.statistics.Estimate;
  * take the frames as independent; the spread between bubbles is the better error.
  *
  * <p>Linear: position = a + v t over a range of times; the mean speed there. Hyperbola: with the
- * half distance r of the walls, r<sup>2</sup> = R0<sup>2</sup> + v<sup>2</sup>(t - t0)<sup>2</sup>,
+ * radius r of the bubble (half the distance of the walls on a ring), r<sup>2</sup> = R0<sup>2</sup> + v<sup>2</sup>(t - t0)<sup>2</sup>,
  * the motion of a wall under constant tension and pressure with limiting speed v. Immutable and
  * thread-safe.
  *
@@ -40,18 +40,39 @@ public record WallSpeed(Estimate speed, double startTime, double startRadius, in
    */
   public static WallSpeed linear(WallTrack track, Side side) {
     Check.notNull(side, "side");
-    requireFrames(track, 3);
-    double[] y = new double[track.size()];
-    double[][] x = new double[y.length][1];
-    double centre = centre(track);
+    Check.notNull(track, "track");
+    double[] t = new double[track.size()];
+    double[] y = new double[t.length];
     for (int i = 0; i < y.length; i++) {
-      x[i][0] = track.time(i) - centre;
+      t[i] = track.time(i);
       y[i] =
           switch (side) {
             case LEFT -> -track.left(i);
             case RIGHT -> track.right(i);
             case BOTH -> (track.right(i) - track.left(i)) / 2;
           };
+    }
+    return linear(t, y);
+  }
+
+  /**
+   * Mean speed at which a radius grows.
+   *
+   * @param track radii, at least three; for example {@code
+   *     bubble.radius().untilWrapped().between(t1, t2)}
+   * @return the fit
+   * @throws IllegalArgumentException if there are fewer than three frames
+   */
+  public static WallSpeed linear(RadiusTrack track) {
+    return linear(times(track), radii(track));
+  }
+
+  private static WallSpeed linear(double[] t, double[] y) {
+    requireFrames(t, 3);
+    double[][] x = new double[y.length][1];
+    double centre = centre(t);
+    for (int i = 0; i < y.length; i++) {
+      x[i][0] = t[i] - centre;
     }
     OLSMultipleLinearRegression fit = fit(y, x);
     return new WallSpeed(
@@ -70,15 +91,29 @@ public record WallSpeed(Estimate speed, double startTime, double startRadius, in
    *     not curve upwards
    */
   public static WallSpeed hyperbola(WallTrack track) {
-    requireFrames(track, 4);
-    double[] y = new double[track.size()];
+    return hyperbola(track(track));
+  }
+
+  /**
+   * Limiting speed from a hyperbola with free t0, R0 and v.
+   *
+   * @param track radii, at least four
+   * @return the fit
+   * @throws IllegalArgumentException if there are fewer than four frames, or if r<sup>2</sup> does
+   *     not curve upwards
+   */
+  public static WallSpeed hyperbola(RadiusTrack track) {
+    double[] times = times(track);
+    double[] radii = radii(track);
+    requireFrames(times, 4);
+    double[] y = new double[times.length];
     double[][] x = new double[y.length][2];
-    double centre = centre(track);
+    double centre = centre(times);
     for (int i = 0; i < y.length; i++) {
-      double t = track.time(i) - centre;
+      double t = times[i] - centre;
       x[i][0] = t;
       x[i][1] = t * t;
-      y[i] = radiusSquare(track, i);
+      y[i] = radii[i] * radii[i];
     }
     OLSMultipleLinearRegression fit = fit(y, x);
     double[] p = fit.estimateRegressionParameters();
@@ -100,14 +135,29 @@ public record WallSpeed(Estimate speed, double startTime, double startRadius, in
    *     r<sup>2</sup> does not grow
    */
   public static WallSpeed hyperbola(WallTrack track, double startTime) {
+    return hyperbola(track(track), startTime);
+  }
+
+  /**
+   * Limiting speed from a hyperbola with known t0: r<sup>2</sup> is linear in (t - t0)<sup>2</sup>.
+   *
+   * @param track radii, at least three
+   * @param startTime t0, finite
+   * @return the fit
+   * @throws IllegalArgumentException if there are fewer than three frames, t0 is not finite, or
+   *     r<sup>2</sup> does not grow
+   */
+  public static WallSpeed hyperbola(RadiusTrack track, double startTime) {
     Check.finite(startTime, "startTime");
-    requireFrames(track, 3);
-    double[] y = new double[track.size()];
+    double[] times = times(track);
+    double[] radii = radii(track);
+    requireFrames(times, 3);
+    double[] y = new double[times.length];
     double[][] x = new double[y.length][1];
     for (int i = 0; i < y.length; i++) {
-      double t = track.time(i) - startTime;
+      double t = times[i] - startTime;
       x[i][0] = t * t;
-      y[i] = radiusSquare(track, i);
+      y[i] = radii[i] * radii[i];
     }
     OLSMultipleLinearRegression fit = fit(y, x);
     double[] p = fit.estimateRegressionParameters();
@@ -129,21 +179,35 @@ public record WallSpeed(Estimate speed, double startTime, double startRadius, in
     return fit;
   }
 
-  private static double radiusSquare(WallTrack track, int i) {
-    double r = (track.right(i) - track.left(i)) / 2;
-    return r * r;
+  private static RadiusTrack track(WallTrack walls) {
+    return Check.notNull(walls, "track").radii();
   }
 
-  private static double centre(WallTrack track) {
-    return (track.time(0) + track.time(track.size() - 1)) / 2;
+  private static double[] times(RadiusTrack track) {
+    double[] times = new double[Check.notNull(track, "track").size()];
+    for (int i = 0; i < times.length; i++) {
+      times[i] = track.time(i);
+    }
+    return times;
   }
 
-  private static void requireFrames(WallTrack track, int needed) {
-    Check.notNull(track, "track");
+  private static double[] radii(RadiusTrack track) {
+    double[] radii = new double[track.size()];
+    for (int i = 0; i < radii.length; i++) {
+      radii[i] = track.radius(i);
+    }
+    return radii;
+  }
+
+  private static double centre(double[] times) {
+    return (times[0] + times[times.length - 1]) / 2;
+  }
+
+  private static void requireFrames(double[] times, int needed) {
     Check.argument(
-        track.size() >= needed,
+        times.length >= needed,
         "a wall fit needs at least %s frames: frames=%s; widen the range of times", needed,
-        track.size());
+        times.length);
   }
 
   private static void requireUpward(double curvature) {

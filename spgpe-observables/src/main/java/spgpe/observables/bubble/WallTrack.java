@@ -1,5 +1,7 @@
 package spgpe.observables.bubble;
 
+import java.util.ArrayList;
+import java.util.List;
 import spgpe.internal.check.Check;
 
 /**
@@ -83,6 +85,21 @@ public final class WallTrack {
    */
   public double right(int i) {
     return right[i];
+  }
+
+  /**
+   * Half the distance of the walls against time.
+   *
+   * @return radii; the positions of the centres are on the unrolled ring
+   */
+  public RadiusTrack radii() {
+    List<Extent> extents = new ArrayList<>();
+    for (int i = 0; i < times.length; i++) {
+      double width = right[i] - left[i];
+      Site middle = new Site((left[i] + right[i]) / 2, 0);
+      extents.add(new Extent(width, width / 2, middle, false, false));
+    }
+    return RadiusTrack.of(times, extents);
   }
 
   /**

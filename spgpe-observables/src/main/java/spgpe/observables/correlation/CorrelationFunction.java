@@ -97,7 +97,7 @@ public final class CorrelationFunction {
   /**
    * Length of the ring.
    *
-   * @return period; infinite if there is none
+   * @return period; infinite if there is none, as on a plane
    */
   public double period() {
     return period;

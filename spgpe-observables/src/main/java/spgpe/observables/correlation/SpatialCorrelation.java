@@ -3,26 +3,32 @@ package spgpe.observables.correlation;
 import java.util.function.UnaryOperator;
 import org.jspecify.annotations.Nullable;
 import spgpe.internal.check.Check;
+import spgpe.internal.measure.Correlator;
 import spgpe.internal.measure.PointwiseProfile;
-import spgpe.internal.measure.RingCorrelator;
+
 import spgpe.model.Model;
 import spgpe.observables.Estimates;
 import spgpe.observables.TimeAverage;
 import spgpe.observables.density.Density;
 import spgpe.observables.phase.RelativePhase;
+import spgpe.projector.CoherentRegion;
 import spgpe.projector.Field;
 import spgpe.run.Observable;
 import spgpe.run.Snapshot;
 
 /**
- * Equal-time correlations along a ring, averaged over the ring by Fourier transform. Measures
+ * Equal-time correlations on a ring or a plane, averaged over all origins by Fourier transform.
+ * Measures
  *
- * <pre>C(r) = (1/L) integral over y of A(y) B(y + r),   mean of r and -r,</pre>
+ * <pre>C(r) = (1/V) integral over y of A(y) B(y + r),   mean of r and -r,</pre>
  *
- * <p>at the distances r = 0, dx, ..., floor(N/2) dx, followed for real profiles by the spatial
- * means of A and B. Sum the samples up with {@link TimeAverage} and ask this observable for {@link
+ * <p>on a ring at the distances r = 0, dx, ..., floor(N/2) dx; on a plane as the mean over shells of
+ * |r|, the shortest way around: r = 0 alone, then shells of the width w of the coarser spacing about
+ * w, 2w, ... up to half of the shorter side. Each point of a shell counts once; {@link #distances}
+ * are the means of |r| over the shells and {@link #weights} the numbers of points. For real profiles
+ * the spatial means of A and B follow. Sum the samples up with {@link TimeAverage} and ask this observable for {@link
  * #raw}, {@link #connected}, {@link #relativeToZero} or {@link #relativeToMeans}, with errors
- * across trajectories. Immutable and thread-safe. Line grids only.
+ * across trajectories. Immutable and thread-safe.
  */
 public final class SpatialCorrelation implements Observable {
   @FunctionalInterface
@@ -169,7 +175,6 @@ public final class SpatialCorrelation implements Observable {
   public int size(Model model) {
     PointwiseProfile.requireComponents(model, components, name);
     int points = model.region().grid().points();
-    requireLine(model);
     for (Observable profile : new Observable[] {a, b}) {
       if (profile != null) {
         Check.argument(
@@ -183,27 +188,27 @@ public final class SpatialCorrelation implements Observable {
 
   @Override
   public void measure(Snapshot snapshot, double[] result) {
-    RingCorrelator ring = snapshot.scratch(this, RingCorrelator.class, RingCorrelator::new);
+    Correlator correlator = snapshot.scratch(this, Correlator.class, Correlator::of);
     if (complex != null) {
-      complex.fill(snapshot, ring.first(), ring.second());
-      ring.complexCorrelation(result);
+      complex.fill(snapshot, correlator.first(), correlator.second());
+      correlator.complexCorrelation(result);
       return;
     }
-    measureProfiles(snapshot, ring);
-    ring.realCorrelation(result);
-    result[result.length - 2] = mean(ring.first());
-    result[result.length - 1] = mean(ring.second());
+    measureProfiles(snapshot, correlator);
+    correlator.realCorrelation(result);
+    result[result.length - 2] = mean(correlator.first());
+    result[result.length - 1] = mean(correlator.second());
   }
 
-  private void measureProfiles(Snapshot snapshot, RingCorrelator ring) {
+  private void measureProfiles(Snapshot snapshot, Correlator correlator) {
     if (a == null || b == null) {
       throw new IllegalStateException("a correlation without profiles");
     }
-    a.measure(snapshot, ring.first());
+    a.measure(snapshot, correlator.first());
     if (a == b) {
-      System.arraycopy(ring.first(), 0, ring.second(), 0, ring.first().length);
+      System.arraycopy(correlator.first(), 0, correlator.second(), 0, correlator.first().length);
     } else {
-      b.measure(snapshot, ring.second());
+      b.measure(snapshot, correlator.second());
     }
   }
 
@@ -219,26 +224,26 @@ public final class SpatialCorrelation implements Observable {
    * Distances at which the correlation is measured.
    *
    * @param model the model that is run
-   * @return new array 0, dx, ..., floor(N/2) dx
-   * @throws IllegalArgumentException if the model is two-dimensional
+   * @return new array: 0, dx, ..., floor(N/2) dx on a ring, the mean distances of the shells on a
+   *     plane
    */
   public double[] distances(Model model) {
-    requireLine(Check.notNull(model, "model"));
-    double[] r = new double[distanceCount(model)];
-    for (int i = 0; i < r.length; i++) {
-      r[i] = model.region().grid().axis(0).position(i);
-    }
-    return r;
+    return Correlator.distances(Check.notNull(model, "model").region().grid());
   }
 
-  private static void requireLine(Model model) {
-    Check.argument(
-        model.region().grid().dimension() == 1,
-        "correlations along a ring need a line: grid=%s", model.region().grid());
+  /**
+   * How many points of the grid have each distance: 1, 2, 2, ... on a ring, the points of the shells
+   * on a plane.
+   *
+   * @param model the model that is run
+   * @return new array, as long as {@link #distances}
+   */
+  public int[] weights(Model model) {
+    return Correlator.distanceWeights(Check.notNull(model, "model").region().grid());
   }
 
   private static int distanceCount(Model model) {
-    return model.region().grid().points() / 2 + 1;
+    return Correlator.distances(model.region().grid()).length;
   }
 
   /**
@@ -332,9 +337,19 @@ public final class SpatialCorrelation implements Observable {
         "the average must be of this correlation: correlation=\"%s\", numbers=%s, numbers of the"
             + " average=%s", name, size(model), average.size());
     Estimates estimates = average.derivedVector(function);
-    double length = model.region().grid().axis(0).length();
-    double resolution = length / (2 * model.region().largestMode(0) + 1);
-    return new CorrelationFunction(distances(model), estimates, length, resolution);
+    CoherentRegion region = model.region();
+    double resolution = 0;
+    for (int axis = 0; axis < region.grid().dimension(); axis++) {
+      resolution =
+          Math.max(
+              resolution,
+              region.grid().axis(axis).length() / (2 * region.largestMode(axis) + 1));
+    }
+    double period =
+        region.grid().dimension() == 1
+            ? region.grid().axis(0).length()
+            : Double.POSITIVE_INFINITY;
+    return new CorrelationFunction(distances(model), estimates, period, resolution);
   }
 
   @Override

@@ -53,8 +53,14 @@ public final class PhaseUnwrapping {
     }
   }
 
-  /** Phase step in (-pi, pi]. */
-  static double step(double from, double to) {
+  /**
+   * Phase step by the shorter way.
+   *
+   * @param from phase, radians, finite
+   * @param to phase, radians, finite
+   * @return to - from plus a multiple of 2 pi, in (-pi, pi]
+   */
+  public static double step(double from, double to) {
     double d = Math.IEEEremainder(to - from, TURN);
     return d <= -Math.PI ? d + TURN : d;
   }

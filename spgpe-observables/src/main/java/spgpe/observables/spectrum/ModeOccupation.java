@@ -57,6 +57,15 @@ public final class ModeOccupation implements Observable {
     return new ModeOccupation("mode occupations of the out-of-phase field", 2, 0, -1);
   }
 
+  /**
+   * The same occupations averaged over shells of |k|.
+   *
+   * @return observable with one number for each shell
+   */
+  public ShellOccupation inShells() {
+    return new ShellOccupation(this);
+  }
+
   @Override
   public String name() {
     return name;

@@ -1,7 +1,7 @@
 package spgpe.observables.spectrum;
 
 import spgpe.internal.check.Check;
-import spgpe.internal.measure.RingCorrelator;
+import spgpe.internal.measure.Correlator;
 import spgpe.model.Model;
 import spgpe.observables.Estimates;
 import spgpe.observables.TimeAverage;
@@ -16,14 +16,16 @@ import spgpe.run.Snapshot;
  * <pre>S(k) = ( &lt;|A_k|^2&gt; - |&lt;A_k&gt;|^2 delta_k0 ) / &lt;N&gt;,
  * A_k = integral of A exp(-ikx),</pre>
  *
- * <p>at k = 2 pi n/L, n = 0..floor(N/2). In a uniform system &lt;A_k&gt; = 0 for k not 0; S(0) is
+ * <p>on a ring at k = 2 pi n/L, n = 0..floor(N/2); on a plane as the mean over shells of |k|: k = 0
+ * alone, then shells of the width w of the larger 2 pi/L about w, 2w, ..., each mode counting once.
+ * In a uniform system &lt;A_k&gt; = 0 for k not 0; S(0) is
  * the variance of the number over its mean. A_k of a density contains all pairs of modes: it is
  * free of aliasing for |n| &le; N - 1 - 2 n_max. Measures |A_k|<sup>2</sup>, then A_0 and N.
- * Immutable and thread-safe. Line grids only.
+ * Immutable and thread-safe.
  */
 public final class StructureFactor implements Observable {
   @SuppressWarnings("ArrayRecordComponent") // compared by nobody
-  private record Scratch(RingCorrelator ring, double[] number) {}
+  private record Scratch(Correlator correlator, double[] number) {}
 
   private final Observable profile;
   private final Observable number;
@@ -84,26 +86,25 @@ public final class StructureFactor implements Observable {
   public int size(Model model) {
     int points = model.region().grid().points();
     Check.argument(
-        model.region().grid().dimension() == 1 && profile.size(model) == points
-            && number.size(model) == 1,
-        "a structure factor needs a line, one number for each point and a single divisor:"
-            + " profile=\"%s\" with %s numbers, divisor=\"%s\" with %s numbers, %s",
+        profile.size(model) == points && number.size(model) == 1,
+        "a structure factor needs one number for each point and a single divisor: profile=\"%s\""
+            + " with %s numbers, divisor=\"%s\" with %s numbers, %s",
         profile.name(), profile.size(model), number.name(), number.size(model),
         model.region().grid());
-    return points / 2 + 3;
+    return waveNumbers(model).length + 2;
   }
 
   @Override
   public void measure(Snapshot snapshot, double[] result) {
     Scratch s =
         snapshot.scratch(
-            this, Scratch.class, m -> new Scratch(new RingCorrelator(m), new double[1]));
-    profile.measure(snapshot, s.ring().first());
-    System.arraycopy(s.ring().first(), 0, s.ring().second(), 0, s.ring().first().length);
+            this, Scratch.class, m -> new Scratch(Correlator.of(m), new double[1]));
+    profile.measure(snapshot, s.correlator().first());
+    System.arraycopy(s.correlator().first(), 0, s.correlator().second(), 0, s.correlator().first().length);
     double cell = snapshot.model().region().grid().cellVolume();
-    s.ring().crossSpectrum(cell, result);
+    s.correlator().crossSpectrum(cell, result);
     double sum = 0;
-    for (double value : s.ring().first()) {
+    for (double value : s.correlator().first()) {
       sum += value;
     }
     result[result.length - 2] = sum * cell;
@@ -115,19 +116,20 @@ public final class StructureFactor implements Observable {
    * Wave numbers of {@link #values}.
    *
    * @param model the model that is run
-   * @return new array 0, 2 pi/L, ...
-   * @throws IllegalArgumentException if the model is two-dimensional
+   * @return new array: 0, 2 pi/L, ... on a ring, the mean wave numbers of the shells on a plane
    */
   public double[] waveNumbers(Model model) {
-    Check.notNull(model, "model");
-    Check.argument(
-        model.region().grid().dimension() == 1,
-        "a structure factor needs a line (ring), not a plane: grid=%s", model.region().grid());
-    double[] k = new double[model.region().grid().points() / 2 + 1];
-    for (int n = 0; n < k.length; n++) {
-      k[n] = model.region().grid().axis(0).waveNumber(n);
-    }
-    return k;
+    return Correlator.waveNumbers(Check.notNull(model, "model").region().grid());
+  }
+
+  /**
+   * How many modes of the grid have each wave number.
+   *
+   * @param model the model that is run
+   * @return new array, as long as {@link #waveNumbers}
+   */
+  public int[] weights(Model model) {
+    return Correlator.waveNumberWeights(Check.notNull(model, "model").region().grid());
   }
 
   /**

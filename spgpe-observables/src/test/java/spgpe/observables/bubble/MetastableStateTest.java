@@ -117,7 +117,7 @@ class MetastableStateTest {
     TimeAverage wrong = new TimeAverage(new double[] {0}, 3);
     assertTrue(
         Fields.refusal(() -> MetastableFluctuations.of(wrong, model)).contains("numbers=3"));
-    TimeAverage empty = new TimeAverage(new double[] {0}, 70);
+    TimeAverage empty = new TimeAverage(new double[] {0}, 71);
     assertTrue(
         Fields.refusal(() -> MetastableFluctuations.of(empty, model)).contains("no sample"));
   }

@@ -144,7 +144,7 @@ class NoisyRunsTest {
       for (int i = 0; i < born.size(); i++) {
         assertEquals(expected.get(i).time(), born.get(i).birthTime(), 0.0);
         double apart =
-            Math.IEEEremainder(expected.get(i).site() - born.get(i).birthSite(), LENGTH);
+            Math.IEEEremainder(expected.get(i).site() - born.get(i).birthSite().x(), LENGTH);
         assertEquals(0, apart, 1e-12, "site of bubble " + i + " of " + x.end());
       }
       births += born.size();

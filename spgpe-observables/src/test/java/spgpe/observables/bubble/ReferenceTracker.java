@@ -78,7 +78,7 @@ final class ReferenceTracker {
         }
         now.put(id, regions.get(r));
         if (regions.get(r).size() == smooth.length && filled.add(id)) {
-          events.add(times[s] + " FILLED_RING " + id + " -1");
+          events.add(times[s] + " FILLED " + id + " -1");
         }
       }
       for (int b : before.keySet().stream().sorted().toList()) {

@@ -78,9 +78,9 @@ class SyntheticBubblesTest {
     List<Bubble> born = h.nucleations();
     assertEquals(2, born.size());
     assertEquals(5.0, born.get(0).birthTime());
-    assertEquals(12.0, born.get(0).birthSite(), 1e-9);
+    assertEquals(12.0, born.get(0).birthSite().x(), 1e-9);
     assertEquals(14.0, born.get(1).birthTime());
-    assertEquals(57.0, born.get(1).birthSite(), 1e-9);
+    assertEquals(57.0, born.get(1).birthSite().x(), 1e-9);
     int[] births = h.birthsAt(times());
     assertEquals(1, births[20]);
     assertEquals(1, births[56]);
@@ -94,9 +94,9 @@ class SyntheticBubblesTest {
     assertEquals(0, born.get(1).mergedInto());
     assertEquals(4.0, born.get(1).duration());
     // contact across the seam: 12 - r_1 = 57 + r_2 - 60, near x = 12 - r_1(18)
-    assertEquals(0, Math.abs(Math.IEEEremainder(merger.site() - 7, 60)), 15);
-    assertEquals(1, h.events(e -> e.kind() == BubbleEvent.Kind.FILLED_RING).size());
-    assertEquals(BubbleEvent.Kind.FILLED_RING, born.get(0).fate());
+    assertEquals(0, Math.abs(Math.IEEEremainder(merger.site().x() - 7, 60)), 15);
+    assertEquals(1, h.events(e -> e.kind() == BubbleEvent.Kind.FILLED).size());
+    assertEquals(BubbleEvent.Kind.FILLED, born.get(0).fate());
     assertEquals(0, h.events(e -> e.kind() == BubbleEvent.Kind.COLLAPSED).size());
   }
 
@@ -158,9 +158,9 @@ class SyntheticBubblesTest {
       List<Bubble> born = BubbleDetector.of(careful).find(times(), noisy, LENGTH).nucleations();
       assertEquals(2, born.size());
       assertEquals(5, born.get(0).birthTime(), 1);
-      assertEquals(12, born.get(0).birthSite(), 1);
+      assertEquals(12, born.get(0).birthSite().x(), 1);
       assertEquals(14, born.get(1).birthTime(), 1);
-      assertEquals(57, born.get(1).birthSite(), 1);
+      assertEquals(57, born.get(1).birthSite().x(), 1);
     }
     assertTrue(raw > 20, "the raw detector should see false bubbles here, found " + raw);
   }
@@ -181,16 +181,16 @@ class SyntheticBubblesTest {
   void misuseIsNamed() {
     BubbleDetector d = BubbleDetector.of(BubbleSettings.atLevel(0));
     assertTrue(
-        Fields.refusal(() -> d.find(new double[] {0, 1}, new double[][] {{1}}, 1))
+        Fields.refusal(() -> d.find(new double[] {0, 1}, new double[][] {{1, 1}}, 1))
             .contains("times=2, frames=1"));
     assertTrue(
         Fields.refusal(() -> d.find(new double[] {0}, new double[][] {{1, Double.NaN}}, 1))
             .contains("point=1, value=NaN"));
     assertTrue(
-        Fields.refusal(() -> d.find(new double[] {1, 1}, new double[][] {{1}, {1}}, 1))
+        Fields.refusal(() -> d.find(new double[] {1, 1}, new double[][] {{1, 1}, {1, 1}}, 1))
             .contains("times[1]=1.0"));
     assertTrue(
-        Fields.refusal(() -> d.find(new double[] {1}, new double[][] {{1}}, Double.NaN))
+        Fields.refusal(() -> d.find(new double[] {1}, new double[][] {{1, 1}}, Double.NaN))
             .contains("length"));
     assertTrue(
         Fields.refusal(() -> BubbleSettings.atLevel(0).withHysteresis(-1, 0))

@@ -72,7 +72,7 @@ class TrackerAgainstReferenceTest {
       all.append(events(h));
       for (Bubble b : h.bubbles()) {
         assertTrue(b.endTime() >= b.birthTime());
-        assertTrue(b.birthSite() >= 0 && b.birthSite() < LENGTH);
+        assertTrue(b.birthSite().x() >= 0 && b.birthSite().x() < LENGTH);
         assertTrue(b.largestWidth() > 0 && b.largestWidth() <= LENGTH);
         for (int i = 0; i < b.walls().size(); i++) {
           double width = b.walls().right(i) - b.walls().left(i);
@@ -112,7 +112,7 @@ class TrackerAgainstReferenceTest {
             x ->
                 x.birthTime() + " " + x.origin() + " " + x.endTime() + " " + x.fate() + " "
                     + Math.round(1e6 * x.largestWidth()) + " "
-                    + Math.round(1e4 * ((x.birthSite() + turn + 1e-7) % LENGTH)))
+                    + Math.round(1e4 * ((x.birthSite().x() + turn + 1e-7) % LENGTH)))
         .sorted().toList();
   }
 

@@ -1,0 +1,5 @@
+/** A two-dimensional example as a command: decay of a metastable relative phase in an oblate gas. */
+@NullMarked
+package spgpe.examples.oblate;
+
+import org.jspecify.annotations.NullMarked;
