@@ -71,7 +71,7 @@ public final class RingCorrelator {
       data[2 * m + 1] = 0;
     }
     fourier.inverse(data, 0);
-    takeReal(result);
+    take(0, result);
   }
 
   /**
@@ -87,24 +87,51 @@ public final class RingCorrelator {
       data[k + 1] = 0;
     }
     fourier.inverse(data, 0);
-    takeReal(result);
+    take(0, result);
   }
 
   /**
-   * Re A_k^* B_k for n = 0..N/2, A_k = dx sum of a exp(-ikx), of the scratch arrays.
+   * C(r) of {@link #first} with itself and of {@link #second} with itself, two real profiles by one
+   * transform there and one back.
    *
-   * @param cell spacing dx
-   * @param result overwritten from index 0 with N/2 + 1 numbers
+   * @param ofFirst overwritten from index 0 with N/2 + 1 numbers
+   * @param ofSecond overwritten from index 0 with N/2 + 1 numbers
    */
-  public void crossSpectrum(double cell, double[] result) {
+  public void ownCorrelations(double[] ofFirst, double[] ofSecond) {
     int n = first.length;
     spectra();
     for (int k = 0; k <= n / 2; k++) {
       int m = (n - k) % n;
-      double cross =
-          ((data[2 * k] + data[2 * m]) * (data[2 * k + 1] + data[2 * m + 1])
-              - (data[2 * k + 1] - data[2 * m + 1]) * (data[2 * k] - data[2 * m])) / 4;
-      result[k] = cell * cell * cross;
+      double re = data[2 * k];
+      double im = data[2 * k + 1];
+      double reM = data[2 * m];
+      double imM = data[2 * m + 1];
+      // a_k = (z_k + z_-k^*)/2, b_k = (z_k - z_-k^*)/(2i); both powers are even in k
+      double a = ((re + reM) * (re + reM) + (im - imM) * (im - imM)) / 4;
+      double b = ((im + imM) * (im + imM) + (re - reM) * (re - reM)) / 4;
+      data[2 * k] = a;
+      data[2 * m] = a;
+      data[2 * k + 1] = b;
+      data[2 * m + 1] = b;
+    }
+    fourier.inverse(data, 0);
+    take(0, ofFirst);
+    take(1, ofSecond);
+  }
+
+  /**
+   * |A_k|^2 for n = 0..N/2, A_k = dx sum of a exp(-ikx), a = {@link #first}.
+   *
+   * @param cell spacing dx
+   * @param result overwritten from index 0 with N/2 + 1 numbers
+   */
+  public void powerSpectrum(double cell, double[] result) {
+    java.util.Arrays.fill(second, 0);
+    spectra();
+    for (int k = 0; k <= first.length / 2; k++) {
+      double re = cell * data[2 * k];
+      double im = cell * data[2 * k + 1];
+      result[k] = re * re + im * im;
     }
   }
 
@@ -116,10 +143,10 @@ public final class RingCorrelator {
     fourier.forward(data, 0);
   }
 
-  private void takeReal(double[] result) {
+  private void take(int part, double[] result) {
     double n = first.length;
     for (int r = 0; r <= first.length / 2; r++) {
-      result[r] = data[2 * r] / (n * n);
+      result[r] = data[2 * r + part] / (n * n);
     }
   }
 }

@@ -1,10 +1,12 @@
 package spgpe.observables.bubble;
 
+import java.util.Arrays;
 import spgpe.internal.check.Check;
+import spgpe.internal.measure.PairProfiles;
+import spgpe.internal.measure.RingCorrelator;
 import spgpe.model.Model;
 import spgpe.observables.TimeAverage;
 import spgpe.observables.correlation.SpatialCorrelation;
-import spgpe.observables.phase.RelativePhase;
 import spgpe.run.Observable;
 import spgpe.run.Snapshot;
 
@@ -39,8 +41,6 @@ public final class MetastableFluctuations {
    * @return the observable
    */
   public static Observable observable() {
-    SpatialCorrelation cosine = SpatialCorrelation.cosine();
-    SpatialCorrelation sine = SpatialCorrelation.of(RelativePhase.sine());
     return new Observable() {
       @Override
       public String name() {
@@ -49,19 +49,38 @@ public final class MetastableFluctuations {
 
       @Override
       public int size(Model model) {
-        return cosine.size(model) + sine.size(model);
+        return 2 * SpatialCorrelation.cosine().size(model);
       }
 
       @Override
       public void measure(Snapshot snapshot, double[] result) {
-        double[] half =
-            snapshot.scratch(this, double[].class, m -> new double[cosine.size(m)]);
-        sine.measure(snapshot, half);
-        System.arraycopy(half, 0, result, half.length, half.length);
-        cosine.measure(snapshot, half);
-        System.arraycopy(half, 0, result, 0, half.length);
+        Scratch s = snapshot.scratch(this, Scratch.class, Scratch::of);
+        PairProfiles pair = PairProfiles.of(snapshot);
+        int half = result.length / 2;
+        System.arraycopy(pair.cosine(), 0, s.ring().first(), 0, s.ring().first().length);
+        System.arraycopy(pair.sine(), 0, s.ring().second(), 0, s.ring().second().length);
+        s.ring().ownCorrelations(result, s.ofSine());
+        Arrays.fill(result, half - 2, half, mean(pair.cosine()));
+        System.arraycopy(s.ofSine(), 0, result, half, half - 2);
+        Arrays.fill(result, 2 * half - 2, 2 * half, mean(pair.sine()));
       }
     };
+  }
+
+  @SuppressWarnings("ArrayRecordComponent") // compared by nobody
+  private record Scratch(RingCorrelator ring, double[] ofSine) {
+    static Scratch of(Model model) {
+      return new Scratch(
+          new RingCorrelator(model), new double[model.region().grid().points() / 2 + 1]);
+    }
+  }
+
+  private static double mean(double[] profile) {
+    double sum = 0;
+    for (double value : profile) {
+      sum += value;
+    }
+    return sum / profile.length;
   }
 
   /**

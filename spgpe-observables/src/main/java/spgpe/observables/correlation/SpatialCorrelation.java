@@ -1,8 +1,10 @@
 package spgpe.observables.correlation;
 
+import java.util.Arrays;
 import java.util.function.UnaryOperator;
 import org.jspecify.annotations.Nullable;
 import spgpe.internal.check.Check;
+import spgpe.internal.measure.PairProfiles;
 import spgpe.internal.measure.PointwiseProfile;
 import spgpe.internal.measure.RingCorrelator;
 import spgpe.model.Model;
@@ -10,7 +12,6 @@ import spgpe.observables.Estimates;
 import spgpe.observables.TimeAverage;
 import spgpe.observables.density.Density;
 import spgpe.observables.phase.RelativePhase;
-import spgpe.projector.Field;
 import spgpe.run.Observable;
 import spgpe.run.Snapshot;
 
@@ -108,13 +109,12 @@ public final class SpatialCorrelation implements Observable {
    * @return the observable
    */
   public static SpatialCorrelation phaseDifference() {
-    Observable cosine = RelativePhase.cosine();
-    Observable sine = RelativePhase.sine();
     return new SpatialCorrelation(
         "correlation of the relative phase factor", null, null,
         (snapshot, re, im) -> {
-          cosine.measure(snapshot, re);
-          sine.measure(snapshot, im);
+          PairProfiles pair = PairProfiles.of(snapshot);
+          System.arraycopy(pair.cosine(), 0, re, 0, re.length);
+          System.arraycopy(pair.sine(), 0, im, 0, im.length);
         },
         2);
   }
@@ -151,11 +151,9 @@ public final class SpatialCorrelation implements Observable {
     return new SpatialCorrelation(
         "correlation of the coherence", null, null,
         (snapshot, re, im) -> {
-          Field f = snapshot.field();
-          for (int i = 0; i < re.length; i++) {
-            re[i] = f.re(0)[i] * f.re(1)[i] + f.im(0)[i] * f.im(1)[i];
-            im[i] = f.im(0)[i] * f.re(1)[i] - f.re(0)[i] * f.im(1)[i];
-          }
+          PairProfiles pair = PairProfiles.of(snapshot);
+          System.arraycopy(pair.re(), 0, re, 0, re.length);
+          System.arraycopy(pair.im(), 0, im, 0, im.length);
         },
         2);
   }
@@ -189,21 +187,20 @@ public final class SpatialCorrelation implements Observable {
       ring.complexCorrelation(result);
       return;
     }
-    measureProfiles(snapshot, ring);
-    ring.realCorrelation(result);
-    result[result.length - 2] = mean(ring.first());
-    result[result.length - 1] = mean(ring.second());
-  }
-
-  private void measureProfiles(Snapshot snapshot, RingCorrelator ring) {
     if (a == null || b == null) {
       throw new IllegalStateException("a correlation without profiles");
     }
     a.measure(snapshot, ring.first());
+    double mean = mean(ring.first());
+    result[result.length - 2] = mean;
     if (a == b) {
-      System.arraycopy(ring.first(), 0, ring.second(), 0, ring.first().length);
+      Arrays.fill(ring.second(), 0);
+      ring.complexCorrelation(result);
+      result[result.length - 1] = mean;
     } else {
       b.measure(snapshot, ring.second());
+      ring.realCorrelation(result);
+      result[result.length - 1] = mean(ring.second());
     }
   }
 
@@ -252,7 +249,7 @@ public final class SpatialCorrelation implements Observable {
    */
   public CorrelationFunction raw(TimeAverage average, Model model) {
     int count = distanceCount(Check.notNull(model, "model"));
-    return derived(average, model, v -> java.util.Arrays.copyOf(v, count));
+    return derived(average, model, v -> Arrays.copyOf(v, count));
   }
 
   /**
@@ -271,7 +268,7 @@ public final class SpatialCorrelation implements Observable {
     return derived(
         average, model,
         v -> {
-          double[] c = java.util.Arrays.copyOf(v, count);
+          double[] c = Arrays.copyOf(v, count);
           for (int i = 0; i < count; i++) {
             c[i] -= v[count] * v[count + 1];
           }
@@ -310,7 +307,7 @@ public final class SpatialCorrelation implements Observable {
   }
 
   private static double[] quotients(double[] v, int count, double divisor) {
-    double[] c = java.util.Arrays.copyOf(v, count);
+    double[] c = Arrays.copyOf(v, count);
     for (int i = 0; i < count; i++) {
       c[i] /= divisor;
     }

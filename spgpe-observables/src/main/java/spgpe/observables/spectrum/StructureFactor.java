@@ -99,9 +99,8 @@ public final class StructureFactor implements Observable {
         snapshot.scratch(
             this, Scratch.class, m -> new Scratch(new RingCorrelator(m), new double[1]));
     profile.measure(snapshot, s.ring().first());
-    System.arraycopy(s.ring().first(), 0, s.ring().second(), 0, s.ring().first().length);
     double cell = snapshot.model().region().grid().cellVolume();
-    s.ring().crossSpectrum(cell, result);
+    s.ring().powerSpectrum(cell, result);
     double sum = 0;
     for (double value : s.ring().first()) {
       sum += value;
