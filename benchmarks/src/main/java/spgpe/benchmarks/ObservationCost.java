@@ -1,6 +1,7 @@
 package spgpe.benchmarks;
 
 import java.lang.management.ManagementFactory;
+import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
@@ -40,14 +41,18 @@ import spgpe.run.Recording;
 import spgpe.run.Schedule;
 
 /**
- * What observing costs: the CPU time of ensembles with all observables every 5 time units against
- * the same ensembles without, in alternating runs on one thread; prints the median of the ratios of
- * neighbouring runs with its quartiles, and the ratio of the fastest runs, which a busy machine
- * disturbs least.
+ * What observing costs: the CPU time of ensembles that are looked at against that of the same
+ * ensembles without, in alternating runs on one thread. Prints for each group of observables
+ *
+ * <ul>
+ *   <li>the median of the ratios of neighbouring runs with its quartiles, and the ratio of the
+ *       fastest runs, which a busy machine disturbs least, when all is observed every 5 time units;
+ *   <li>the cost of one look in time steps of the scheme, from runs that are looked at in every
+ *       step.
+ * </ul>
  */
 public final class ObservationCost {
-  private static final double LENGTH = 48;
-  private static final Schedule SCHEDULE = Schedule.every(5).startingAt(5);
+  private static final double STEP = 0.1;
 
   private ObservationCost() {}
 
@@ -79,33 +84,61 @@ public final class ObservationCost {
         DynamicalTemperature.inverseAtFixedNumber());
   }
 
-  private static Ensemble plain(long trajectories, double until) {
+  /** A pair on a ring of spacing 0.48, its largest mode just below a quarter of the points. */
+  private static Ensemble plain(int points, long trajectories, double until) {
     Model model =
         Model.of(
-            Projector.modesUpTo(24).on(PeriodicGrid.of(Axis.of(100, LENGTH))),
+            Projector.modesUpTo(points / 4 - 1)
+                .on(PeriodicGrid.of(Axis.of(points, length(points)))),
             Hamiltonian.pair(1, 0).with(CoherentCoupling.constant(0.1))
                 .with(BiquadraticCoupling.of(0.225)),
             Reservoir.of(0.0516, 1.1, 0.1));
     return Ensemble.of(model).startingFrom(InitialState.uniform(1, -1))
-        .integratedBy(OuRk4.ofStep(0.1)).trajectories(trajectories).seed(1).until(until);
+        .integratedBy(OuRk4.ofStep(STEP)).trajectories(trajectories).seed(1).until(until);
   }
 
-  private static Ensemble recording(Ensemble plan, List<Observable> observables) {
-    Ensemble result = plan;
-    for (Observable observable : observables) {
-      result = result.record(Recording.of(observable, SCHEDULE, TimeAverage::new));
+  private static double length(int points) {
+    return 0.48 * points;
+  }
+
+  /** What is recorded in a run. */
+  private record Group(String name, List<Observable> observables, boolean trackers) {
+    Ensemble recordedBy(Ensemble plan, int points, double interval) {
+      Schedule schedule = Schedule.every(interval).startingAt(interval);
+      Ensemble result = plan;
+      for (Observable observable : observables) {
+        result = result.record(Recording.of(observable, schedule, TimeAverage::new));
+      }
+      if (trackers) {
+        BubbleSettings settings =
+            BubbleSettings.atLevel(0).withSmoothing(1.5).withHysteresis(0, -0.75);
+        result =
+            result
+                .record(
+                    Recording.of(
+                        RelativePhase.cosine(), schedule,
+                        BubbleDetector.of(settings).census(length(points))))
+                .record(Recording.of(ComponentPhase.winding(0), schedule, PhaseSlips::new));
+      }
+      return result;
     }
-    return result;
   }
 
-  private static Ensemble withTrackers(Ensemble plan) {
-    BubbleSettings settings =
-        BubbleSettings.atLevel(0).withSmoothing(1.5).withHysteresis(0, -0.75);
-    return plan
-        .record(
-            Recording.of(
-                RelativePhase.cosine(), SCHEDULE, BubbleDetector.of(settings).census(LENGTH)))
-        .record(Recording.of(ComponentPhase.winding(0), SCHEDULE, PhaseSlips::new));
+  private static List<Group> groups(boolean single) {
+    List<Observable> everything = new ArrayList<>(everyday());
+    everything.addAll(thermometers());
+    List<Group> groups = new ArrayList<>();
+    groups.add(new Group("nothing but the look", List.of(Observable.scalar("0", s -> 0)), false));
+    groups.add(new Group("averages of the metastable state", metastable(), false));
+    groups.add(new Group("all but curvature thermometers", everyday(), true));
+    groups.add(new Group("all", everything, true));
+    if (single) {
+      groups.add(new Group("bubble census and phase slips", List.of(), true));
+      for (Observable observable : everything) {
+        groups.add(new Group(observable.name(), List.of(observable), false));
+      }
+    }
+    return groups;
   }
 
   private static double seconds(Ensemble plan) {
@@ -114,7 +147,8 @@ public final class ObservationCost {
     return (ManagementFactory.getThreadMXBean().getCurrentThreadCpuTime() - begin) * 1e-9;
   }
 
-  private static void compare(String name, Ensemble plain, Ensemble observed, int pairs) {
+  /** Quartiles of the ratios, then the ratio of the fastest runs. */
+  private static double[] compare(Ensemble plain, Ensemble observed, int pairs) {
     double[] ratios = new double[pairs];
     double fastest = Double.POSITIVE_INFINITY;
     double fastestObserved = Double.POSITIVE_INFINITY;
@@ -128,34 +162,36 @@ public final class ObservationCost {
       }
     }
     Arrays.sort(ratios);
-    System.out.printf(
-        Locale.ROOT, "%-34s median ratio %.3f [%.3f, %.3f], of the fastest %.3f (%.3f s)%n", name,
-        ratios[pairs / 2], ratios[pairs / 4], ratios[pairs - 1 - pairs / 4],
-        fastestObserved / fastest, fastest);
+    return new double[] {
+      ratios[pairs / 4], ratios[pairs / 2], ratios[pairs - 1 - pairs / 4],
+      fastestObserved / fastest
+    };
   }
 
   /**
    * Runs the comparison.
    *
-   * @param arguments pairs of runs (default 41), trajectories (default 8), end time (default 100),
-   *     anything as a fourth to time each observable alone
+   * @param arguments grid points (default 256), pairs of runs (default 25), trajectories (default
+   *     8), end time (default 50); anything as a fifth to time each observable alone
    */
   public static void main(String[] arguments) {
-    int pairs = arguments.length > 0 ? Integer.parseInt(arguments[0]) : 41;
-    long trajectories = arguments.length > 1 ? Long.parseLong(arguments[1]) : 8;
-    double until = arguments.length > 2 ? Double.parseDouble(arguments[2]) : 100;
-    Ensemble plain = plain(trajectories, until);
-    Ensemble all = withTrackers(recording(plain, everyday()));
-    compare("nothing", plain, plain(trajectories, until), pairs);
-    compare("averages of the metastable state", plain, recording(plain, metastable()), pairs);
-    compare("all but dynamical temperatures", plain, all, pairs);
-    compare("all", plain, recording(all, thermometers()), pairs);
-    if (arguments.length > 3) {
-      for (List<Observable> group : List.of(everyday(), thermometers())) {
-        for (Observable observable : group) {
-          compare(observable.name(), plain, recording(plain, List.of(observable)), pairs);
-        }
+    int points = arguments.length > 0 ? Integer.parseInt(arguments[0]) : 256;
+    int pairs = arguments.length > 1 ? Integer.parseInt(arguments[1]) : 25;
+    long trajectories = arguments.length > 2 ? Long.parseLong(arguments[2]) : 8;
+    double until = arguments.length > 3 ? Double.parseDouble(arguments[3]) : 50;
+    Ensemble plain = plain(points, trajectories, until);
+    Ensemble brief = plain(points, trajectories, until / 10);
+    for (Group group : groups(arguments.length > 4)) {
+      if (arguments.length <= 4) {
+        double[] often = compare(plain, group.recordedBy(plain, points, 5), pairs);
+        System.out.printf(
+            Locale.ROOT, "%-46s every 5: median ratio %.3f [%.3f, %.3f], of the fastest %.3f%n",
+            group.name(), often[1], often[0], often[2], often[3]);
       }
+      double[] always = compare(brief, group.recordedBy(brief, points, STEP), pairs);
+      System.out.printf(
+          Locale.ROOT, "%-46s a look costs %.2f [%.2f, %.2f] steps, fastest %.2f%n",
+          group.name(), always[1] - 1, always[0] - 1, always[2] - 1, always[3] - 1);
     }
   }
 }

@@ -71,14 +71,43 @@ public final class EnergyMeter {
    * @throws IllegalArgumentException if the time is not finite or the shape does not fit
    */
   public double[] byTerm(double time, Amplitudes amplitudes) {
+    check(time, amplitudes);
+    transform.toPosition(amplitudes, psi);
+    return energies(time, amplitudes);
+  }
+
+  /**
+   * Energy of each term of a state whose field is known already.
+   *
+   * @param time time
+   * @param amplitudes state with one lane
+   * @param field the same state at the grid points
+   * @return energies in the order of {@link #names}
+   * @throws TermFailedException if a term throws
+   * @throws IllegalArgumentException if the time is not finite or a shape does not fit
+   */
+  public double[] byTerm(double time, Amplitudes amplitudes, Field field) {
+    check(time, amplitudes);
+    Check.notNull(field, "field").requireShape(psi.grid(), model.components(), 1);
+    for (int c = 0; c < model.components(); c++) {
+      System.arraycopy(field.re(c), 0, psi.re(c), 0, field.re(c).length);
+      System.arraycopy(field.im(c), 0, psi.im(c), 0, field.im(c).length);
+    }
+    return energies(time, amplitudes);
+  }
+
+  private void check(double time, Amplitudes amplitudes) {
     Check.finite(time, "time");
     Check.notNull(amplitudes, "amplitudes").requireShape(model.region(), model.components(), 1);
+  }
+
+  /** Of the amplitudes and of {@link #psi}. */
+  private double[] energies(double time, Amplitudes amplitudes) {
     double[] energies = new double[names.size()];
     int next = 0;
     for (ModeMatrix matrix : matrices) {
       energies[next++] = quadraticForm(matrix, amplitudes);
     }
-    transform.toPosition(amplitudes, psi);
     double cell = model.region().grid().cellVolume();
     for (LocalTerm term : model.localTerms()) {
       java.util.Arrays.fill(density, 0);

@@ -1,6 +1,7 @@
 package spgpe.run;
 
 import java.util.IdentityHashMap;
+import java.util.function.BiConsumer;
 import java.util.function.Function;
 import spgpe.internal.check.Check;
 import spgpe.model.EnergyMeter;
@@ -16,11 +17,23 @@ import spgpe.projector.ModeTransform;
  * position space is computed when it is first asked for.
  */
 public final class Snapshot {
+  /** Scratch of an owner, and whether it was computed for the state that is shown. */
+  private static final class Kept {
+    final Object value;
+    boolean current;
+
+    Kept(Object value) {
+      this.value = value;
+    }
+  }
+
   private final Model model;
   private final ModeTransform transform;
   private final EnergyMeter meter;
   private final Field field;
-  private final IdentityHashMap<Object, Object> scratch = new IdentityHashMap<>();
+  private final IdentityHashMap<Object, Kept> scratch = new IdentityHashMap<>();
+  private final double[] energies;
+  private boolean energiesAreCurrent;
   private Amplitudes amplitudes;
   private boolean fieldIsCurrent;
   private double time;
@@ -31,6 +44,7 @@ public final class Snapshot {
     this.model = model;
     this.transform = model.region().transform(model.components(), 1, model.fourierProvider());
     this.meter = new EnergyMeter(model);
+    this.energies = new double[meter.names().size()];
     this.field = new Field(model.region().grid(), model.components(), 1);
     this.amplitudes = new Amplitudes(model.region(), model.components(), 1);
   }
@@ -59,6 +73,10 @@ public final class Snapshot {
     step = atStep;
     trajectory = ofTrajectory;
     fieldIsCurrent = false;
+    energiesAreCurrent = false;
+    for (Kept kept : scratch.values()) {
+      kept.current = false;
+    }
   }
 
   /**
@@ -125,7 +143,11 @@ public final class Snapshot {
    * @return new array
    */
   public double[] energies() {
-    return meter.byTerm(time, amplitudes);
+    if (!energiesAreCurrent) {
+      System.arraycopy(meter.byTerm(time, amplitudes, field()), 0, energies, 0, energies.length);
+      energiesAreCurrent = true;
+    }
+    return energies.clone();
   }
 
   /**
@@ -134,7 +156,14 @@ public final class Snapshot {
    * @return K
    */
   public double grandCanonicalEnergy() {
-    return meter.grandCanonical(time, amplitudes);
+    double k = 0;
+    for (double energy : energies()) {
+      k += energy;
+    }
+    for (int c = 0; c < model.components(); c++) {
+      k -= model.reservoir().chemicalPotential(c) * amplitudes.atomNumber(c, 0);
+    }
+    return k;
   }
 
   /**
@@ -152,15 +181,45 @@ public final class Snapshot {
    * @throws IllegalArgumentException if the owner has asked for another type before
    */
   public <W> W scratch(Object owner, Class<W> type, Function<? super Model, ? extends W> maker) {
-    Object kept = scratch.get(owner);
+    return type.cast(kept(owner, type, maker).value);
+  }
+
+  private Kept kept(Object owner, Class<?> type, Function<? super Model, ?> maker) {
+    Kept kept = scratch.get(owner);
     if (kept == null) {
-      kept = Check.notNull(maker.apply(model), "scratch");
+      kept = new Kept(Check.notNull(maker.apply(model), "scratch"));
       scratch.put(owner, kept);
     }
-    Check.argument(
-        type.isInstance(kept),
-        "scratch of an owner must keep its type: asked=%s, kept=%s",
-        type.getName(), kept.getClass().getName());
-    return type.cast(kept);
+    if (!type.isInstance(kept.value)) {
+      throw new IllegalArgumentException(
+          "scratch of an owner must keep its type: asked=" + type.getName() + ", kept="
+              + kept.value.getClass().getName());
+    }
+    return kept;
+  }
+
+  /**
+   * What several observables need of the same state, like {@link #field}: scratch memory that is
+   * filled when it is first asked for and stays as it is until another state is shown.
+   *
+   * @param owner whose it is, usually a class that the observables share; compared by identity
+   * @param type class of the scratch
+   * @param maker makes it for the model
+   * @param computer fills it from this snapshot; must overwrite all of it
+   * @param <W> type of the scratch
+   * @return the same object at every call for this owner, filled for the state that is shown; read
+   *     only
+   * @throws IllegalArgumentException if the owner has asked for another type before
+   */
+  public <W> W computed(
+      Object owner, Class<W> type, Function<? super Model, ? extends W> maker,
+      BiConsumer<? super Snapshot, ? super W> computer) {
+    Kept kept = kept(owner, type, maker);
+    W value = type.cast(kept.value);
+    if (!kept.current) {
+      Check.notNull(computer, "computer").accept(this, value);
+      kept.current = true;
+    }
+    return value;
   }
 }

@@ -111,9 +111,10 @@ public final class TimeAverage implements Accumulator<TimeAverage> {
       squares = new double[size];
     }
     count++;
+    double share = 1.0 / count;
     for (int i = 0; i < size; i++) {
       double delta = values[i] - mean[i];
-      mean[i] += delta / count;
+      mean[i] += delta * share;
       squares[i] += delta * (values[i] - mean[i]);
     }
   }

@@ -116,13 +116,23 @@ public final class ClusterMoments {
     if (t == null) {
       return;
     }
-    int e = 0;
+    int row = 0;
     for (int i = 0; i < shift.length; i++) {
-      for (int j = 0; j <= i; j++, e++) {
-        double own = part.triangle == null ? 0 : part.triangle[e];
-        t[e] +=
-            own - part.first[i] * shift[j] - shift[i] * part.first[j] + w2 * shift[i] * shift[j];
+      addRow(t, row, i + 1, w2 * shift[i] - part.first[i], shift, -shift[i], part.first);
+      row += i + 1;
+    }
+    if (part.triangle != null) {
+      for (int e = 0; e < t.length; e++) {
+        t[e] += part.triangle[e];
       }
+    }
+  }
+
+  /** target += a x + b y, from a place on. */
+  private static void addRow(
+      double[] target, int from, int length, double a, double[] x, double b, double[] y) {
+    for (int j = 0; j < length; j++) {
+      target[from + j] += a * x[j] + b * y[j];
     }
   }
 

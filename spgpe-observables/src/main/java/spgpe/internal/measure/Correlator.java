@@ -1,5 +1,6 @@
 package spgpe.internal.measure;
 
+import java.util.Arrays;
 import spgpe.fourier.FourierTransform;
 import spgpe.grid.Axis;
 import spgpe.grid.PeriodicGrid;
@@ -121,10 +122,53 @@ public abstract class Correlator {
    */
   public final void realCorrelation(double[] result) {
     spectra();
-    crossSpectra();
+    for (int k = 0; k < first.length; k++) {
+      int m = mirror(k);
+      if (m >= k) {
+        double re = data[2 * k];
+        double im = data[2 * k + 1];
+        double reM = data[2 * m];
+        double imM = data[2 * m + 1];
+        // a_k = (z_k + z_-k^*)/2, b_k = (z_k - z_-k^*)/(2i), and Re a_k^* b_k is even in k
+        setEven(k, m, ((re + reM) * (im + imM) - (im - imM) * (re - reM)) / 4, 0);
+      }
+    }
     inverse();
-    byDistance(result);
-    scale(result, distanceCount(), 1 / ((double) first.length * first.length));
+    correlation(0, result);
+  }
+
+  /**
+   * C(r) of {@link #first} with itself and of {@link #second} with itself, two real profiles by one
+   * transform there and one back.
+   *
+   * @param ofFirst overwritten from index 0 with a number for each distance
+   * @param ofSecond overwritten from index 0 with a number for each distance
+   */
+  public final void ownCorrelations(double[] ofFirst, double[] ofSecond) {
+    spectra();
+    for (int k = 0; k < first.length; k++) {
+      int m = mirror(k);
+      if (m >= k) {
+        double re = data[2 * k];
+        double im = data[2 * k + 1];
+        double reM = data[2 * m];
+        double imM = data[2 * m + 1];
+        // a_k and b_k as above; both powers are even in k
+        setEven(
+            k, m, ((re + reM) * (re + reM) + (im - imM) * (im - imM)) / 4,
+            ((im + imM) * (im + imM) + (re - reM) * (re - reM)) / 4);
+      }
+    }
+    inverse();
+    correlation(0, ofFirst);
+    correlation(1, ofSecond);
+  }
+
+  private void setEven(int k, int mirror, double re, double im) {
+    data[2 * k] = re;
+    data[2 * k + 1] = im;
+    data[2 * mirror] = re;
+    data[2 * mirror + 1] = im;
   }
 
   /**
@@ -135,24 +179,27 @@ public abstract class Correlator {
    */
   public final void complexCorrelation(double[] result) {
     spectra();
-    for (int k = 0; k < data.length; k += 2) {
-      data[k] = data[k] * data[k] + data[k + 1] * data[k + 1];
-      data[k + 1] = 0;
-    }
+    takePowers();
     inverse();
-    byDistance(result);
+    correlation(0, result);
+  }
+
+  private void correlation(int part, double[] result) {
+    byDistance(part, result);
     scale(result, distanceCount(), 1 / ((double) first.length * first.length));
   }
 
   /**
-   * Re A_k^* B_k, A_k = cell volume times sum of a exp(-ikx), of the scratch arrays.
+   * |A_k|<sup>2</sup>, A_k = cell volume times sum of a exp(-ikx), a = {@link #first}; overwrites
+   * {@link #second}.
    *
    * @param cell volume of a cell
    * @param result overwritten from index 0 with a number for each wave number
    */
-  public final void crossSpectrum(double cell, double[] result) {
+  public final void powerSpectrum(double cell, double[] result) {
+    Arrays.fill(second, 0);
     spectra();
-    crossSpectra();
+    takePowers();
     byWaveNumber(result);
     scale(result, waveNumberCount(), cell * cell);
   }
@@ -171,22 +218,10 @@ public abstract class Correlator {
     forward();
   }
 
-  private void crossSpectra() {
-    for (int k = 0; k < first.length; k++) {
-      int m = mirror(k);
-      if (m < k) {
-        continue;
-      }
-      double re = data[2 * k];
-      double im = data[2 * k + 1];
-      double reM = data[2 * m];
-      double imM = data[2 * m + 1];
-      // a_k = (z_k + z_-k^*)/2, b_k = (z_k - z_-k^*)/(2i), and Re a_k^* b_k is even in k
-      double cross = ((re + reM) * (im + imM) - (im - imM) * (re - reM)) / 4;
-      data[2 * k] = cross;
-      data[2 * m] = cross;
-      data[2 * k + 1] = 0;
-      data[2 * m + 1] = 0;
+  private void takePowers() {
+    for (int k = 0; k < data.length; k += 2) {
+      data[k] = data[k] * data[k] + data[k + 1] * data[k + 1];
+      data[k + 1] = 0;
     }
   }
 
@@ -201,8 +236,8 @@ public abstract class Correlator {
 
   abstract int waveNumberCount();
 
-  /** Picks or averages the real parts of the data, points. */
-  abstract void byDistance(double[] result);
+  /** Picks or averages the real (0) or imaginary (1) parts of the data, points. */
+  abstract void byDistance(int part, double[] result);
 
   /** Picks or averages the real parts of the data, modes. */
   abstract void byWaveNumber(double[] result);
@@ -243,15 +278,15 @@ public abstract class Correlator {
     }
 
     @Override
-    void byDistance(double[] result) {
+    void byDistance(int part, double[] result) {
       for (int i = 0; i <= points / 2; i++) {
-        result[i] = data[2 * i];
+        result[i] = data[2 * i + part];
       }
     }
 
     @Override
     void byWaveNumber(double[] result) {
-      byDistance(result);
+      byDistance(0, result);
     }
   }
 
@@ -331,13 +366,13 @@ public abstract class Correlator {
     }
 
     @Override
-    void byDistance(double[] result) {
-      distances.average(data, 2, result);
+    void byDistance(int part, double[] result) {
+      distances.average(data, 2, part, result);
     }
 
     @Override
     void byWaveNumber(double[] result) {
-      waveNumbers.average(data, 2, result);
+      waveNumbers.average(data, 2, 0, result);
     }
   }
 }

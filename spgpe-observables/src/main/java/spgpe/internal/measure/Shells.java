@@ -145,15 +145,16 @@ public final class Shells {
   /**
    * Averages over each shell.
    *
-   * @param values for each point, values[stride * point]
+   * @param values for each point, values[stride * point + first]
    * @param stride distance between the values
+   * @param first index of the first value
    * @param result overwritten from index 0 with a number for each shell
    */
-  public void average(double[] values, int stride, double[] result) {
+  public void average(double[] values, int stride, int first, double[] result) {
     Arrays.fill(result, 0, weights.length, 0);
     for (int i = 0; i < shell.length; i++) {
       if (shell[i] >= 0) {
-        result[shell[i]] += values[stride * i];
+        result[shell[i]] += values[stride * i + first];
       }
     }
     for (int s = 0; s < weights.length; s++) {

@@ -1,12 +1,14 @@
 package spgpe.observables.bubble;
 
+import java.util.Arrays;
 import spgpe.grid.PeriodicGrid;
 import spgpe.internal.check.Check;
+import spgpe.internal.measure.Correlator;
+import spgpe.internal.measure.PairProfiles;
 import spgpe.internal.measure.Shells;
 import spgpe.model.Model;
 import spgpe.observables.TimeAverage;
 import spgpe.observables.correlation.SpatialCorrelation;
-import spgpe.observables.phase.RelativePhase;
 import spgpe.projector.CoherentRegion;
 import spgpe.run.Observable;
 import spgpe.run.Snapshot;
@@ -44,8 +46,6 @@ public final class MetastableFluctuations {
    * @return the observable
    */
   public static Observable observable() {
-    SpatialCorrelation cosine = SpatialCorrelation.cosine();
-    SpatialCorrelation sine = SpatialCorrelation.of(RelativePhase.sine());
     return new Observable() {
       @Override
       public String name() {
@@ -54,21 +54,42 @@ public final class MetastableFluctuations {
 
       @Override
       public int size(Model model) {
-        return cosine.size(model) + sine.size(model) + 1;
+        return 2 * SpatialCorrelation.cosine().size(model) + 1;
       }
 
       @Override
       public void measure(Snapshot snapshot, double[] result) {
-        double[] half =
-            snapshot.scratch(this, double[].class, m -> new double[cosine.size(m)]);
-        sine.measure(snapshot, half);
-        System.arraycopy(half, 0, result, half.length, half.length);
-        double sineMean = half[half.length - 1];
-        result[2 * half.length] = sineMean * sineMean;
-        cosine.measure(snapshot, half);
-        System.arraycopy(half, 0, result, 0, half.length);
+        Scratch s = snapshot.scratch(this, Scratch.class, Scratch::of);
+        PairProfiles pair = PairProfiles.of(snapshot);
+        int points = pair.cosine().length;
+        System.arraycopy(pair.cosine(), 0, s.correlator().first(), 0, points);
+        System.arraycopy(pair.sine(), 0, s.correlator().second(), 0, points);
+        s.correlator().ownCorrelations(result, s.ofSine());
+        int half = s.ofSine().length + 2;
+        double sineMean = mean(pair.sine());
+        Arrays.fill(result, half - 2, half, mean(pair.cosine()));
+        System.arraycopy(s.ofSine(), 0, result, half, half - 2);
+        Arrays.fill(result, 2 * half - 2, 2 * half, sineMean);
+        result[2 * half] = sineMean * sineMean;
       }
     };
+  }
+
+  @SuppressWarnings("ArrayRecordComponent") // compared by nobody
+  private record Scratch(Correlator correlator, double[] ofSine) {
+    static Scratch of(Model model) {
+      return new Scratch(
+          Correlator.of(model),
+          new double[Correlator.distances(model.region().grid()).length]);
+    }
+  }
+
+  private static double mean(double[] profile) {
+    double sum = 0;
+    for (double value : profile) {
+      sum += value;
+    }
+    return sum / profile.length;
   }
 
   /**
@@ -188,7 +209,7 @@ public final class MetastableFluctuations {
     }
     Shells shells = Shells.ofPoints(grid);
     double[] mean = new double[shells.size()];
-    shells.average(weights, 1, mean);
+    shells.average(weights, 1, 0, mean);
     int[] count = shells.weights();
     double sum = 0;
     for (int s = 0; s < mean.length; s++) {

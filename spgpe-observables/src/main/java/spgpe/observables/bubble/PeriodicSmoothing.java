@@ -10,6 +10,8 @@ final class PeriodicSmoothing {
   private final int points;
   private final int reach;
   private final double[] weights;
+  /** The profile with its ends repeated on both sides. */
+  private final double[] wrapped;
 
   PeriodicSmoothing(int points, double spacing, double smoothing) {
     double[] kernel = kernel(points, spacing, smoothing);
@@ -20,6 +22,7 @@ final class PeriodicSmoothing {
     this.points = points;
     this.reach = far;
     this.weights = kernel;
+    this.wrapped = new double[points + 2 * far];
   }
 
   /** Weights by distance around the ring, index 0..points-1, with sum 1. */
@@ -42,17 +45,22 @@ final class PeriodicSmoothing {
   }
 
   void apply(double[] profile, double[] result) {
+    System.arraycopy(profile, points - reach, wrapped, 0, reach);
+    System.arraycopy(profile, 0, wrapped, reach, points);
+    System.arraycopy(profile, 0, wrapped, reach + points, reach);
     for (int i = 0; i < points; i++) {
-      double sum = weights[0] * profile[i];
-      for (int r = 1; r <= reach; r++) {
-        int ahead = i + r < points ? i + r : i + r - points;
-        int behind = i >= r ? i - r : i - r + points;
-        sum +=
-            2 * r == points
-                ? weights[r] * profile[ahead]
-                : weights[r] * (profile[ahead] + profile[behind]);
-      }
-      result[i] = sum;
+      result[i] = weights[0] * profile[i];
+    }
+    for (int r = 1; r <= reach; r++) {
+      // the point opposite on the ring is reached from both sides
+      double weight = 2 * r == points ? weights[r] / 2 : weights[r];
+      add(weight, reach - r, reach + r, result);
+    }
+  }
+
+  private void add(double weight, int behind, int ahead, double[] result) {
+    for (int i = 0; i < points; i++) {
+      result[i] += weight * (wrapped[i + behind] + wrapped[i + ahead]);
     }
   }
 }

@@ -1,18 +1,18 @@
 package spgpe.observables.correlation;
 
+import java.util.Arrays;
 import java.util.function.UnaryOperator;
 import org.jspecify.annotations.Nullable;
 import spgpe.internal.check.Check;
 import spgpe.internal.measure.Correlator;
+import spgpe.internal.measure.PairProfiles;
 import spgpe.internal.measure.PointwiseProfile;
-
 import spgpe.model.Model;
 import spgpe.observables.Estimates;
 import spgpe.observables.TimeAverage;
 import spgpe.observables.density.Density;
 import spgpe.observables.phase.RelativePhase;
 import spgpe.projector.CoherentRegion;
-import spgpe.projector.Field;
 import spgpe.run.Observable;
 import spgpe.run.Snapshot;
 
@@ -157,11 +157,9 @@ public final class SpatialCorrelation implements Observable {
     return new SpatialCorrelation(
         "correlation of the coherence", null, null,
         (snapshot, re, im) -> {
-          Field f = snapshot.field();
-          for (int i = 0; i < re.length; i++) {
-            re[i] = f.re(0)[i] * f.re(1)[i] + f.im(0)[i] * f.im(1)[i];
-            im[i] = f.im(0)[i] * f.re(1)[i] - f.re(0)[i] * f.im(1)[i];
-          }
+          PairProfiles pair = PairProfiles.of(snapshot);
+          System.arraycopy(pair.re(), 0, re, 0, re.length);
+          System.arraycopy(pair.im(), 0, im, 0, im.length);
         },
         2);
   }
@@ -194,21 +192,20 @@ public final class SpatialCorrelation implements Observable {
       correlator.complexCorrelation(result);
       return;
     }
-    measureProfiles(snapshot, correlator);
-    correlator.realCorrelation(result);
-    result[result.length - 2] = mean(correlator.first());
-    result[result.length - 1] = mean(correlator.second());
-  }
-
-  private void measureProfiles(Snapshot snapshot, Correlator correlator) {
     if (a == null || b == null) {
       throw new IllegalStateException("a correlation without profiles");
     }
     a.measure(snapshot, correlator.first());
+    double mean = mean(correlator.first());
+    result[result.length - 2] = mean;
     if (a == b) {
-      System.arraycopy(correlator.first(), 0, correlator.second(), 0, correlator.first().length);
+      Arrays.fill(correlator.second(), 0);
+      correlator.complexCorrelation(result);
+      result[result.length - 1] = mean;
     } else {
       b.measure(snapshot, correlator.second());
+      correlator.realCorrelation(result);
+      result[result.length - 1] = mean(correlator.second());
     }
   }
 

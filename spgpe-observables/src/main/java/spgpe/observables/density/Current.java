@@ -18,12 +18,17 @@ import spgpe.run.Snapshot;
 public final class Current {
   private static final class Scratch {
     final double[] masses;
+    final double[] waveNumbers;
     final Amplitudes gradientModes;
     final Field gradient;
     final ModeTransform transform;
 
-    Scratch(Model model) {
+    Scratch(Model model, int axis) {
       masses = Masses.of(model);
+      waveNumbers = new double[model.region().modes()];
+      for (int m = 0; m < waveNumbers.length; m++) {
+        waveNumbers[m] = model.region().waveNumber(axis, m);
+      }
       gradientModes = new Amplitudes(model.region(), model.components(), 1);
       gradient = new Field(model.region().grid(), model.components(), 1);
       transform = model.region().transform(model.components(), 1, model.fourierProvider());
@@ -83,11 +88,11 @@ public final class Current {
   private static void fill(
       Snapshot snapshot, Object key, int axis, java.util.function.IntUnaryOperator sign,
       double[] result) {
-    Scratch s = snapshot.scratch(key, Scratch.class, Scratch::new);
+    Scratch s = snapshot.scratch(key, Scratch.class, m -> new Scratch(m, axis));
     Amplitudes a = snapshot.amplitudes();
     for (int c = 0; c < a.components(); c++) {
       for (int m = 0; m < a.re(c).length; m++) {
-        double k = a.region().waveNumber(axis, m);
+        double k = s.waveNumbers[m];
         s.gradientModes.re(c)[m] = -k * a.im(c)[m];
         s.gradientModes.im(c)[m] = k * a.re(c)[m];
       }

@@ -35,15 +35,12 @@ public final class ComponentPhase {
   public static Observable winding(int component) {
     Check.inRange(component, 0, 254, "component");
     String name = "winding number of component " + component;
-    Object key = new Object();
     return new ScalarMeasure(
         name, component + 1,
         snapshot -> {
           PhaseUnwrapping.requireLine(snapshot.model(), name);
-          double[] angles =
-              snapshot.scratch(key, double[].class, m -> new double[m.region().grid().points()]);
-          fill(snapshot, component, angles);
-          return PhaseUnwrapping.winding(angles);
+          Field field = snapshot.field();
+          return PhaseUnwrapping.winding(field.re(component), field.im(component));
         });
   }
 

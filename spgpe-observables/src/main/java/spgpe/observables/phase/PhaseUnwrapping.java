@@ -44,6 +44,38 @@ public final class PhaseUnwrapping {
     return (int) Math.rint(sum / TURN);
   }
 
+  /**
+   * The same of arg(re + i im) without its angles: the crossings of the cut on the negative real
+   * axis, with their signs. Where the field vanishes its angle counts as 0.
+   */
+  static int winding(double[] re, double[] im) {
+    int turns = 0;
+    int last = re.length - 1;
+    boolean upperBefore = im[last] >= 0;
+    for (int i = 0; i <= last; i++) {
+      boolean upper = im[i] >= 0;
+      if (upper != upperBefore) {
+        turns += crossing(re, im, i == 0 ? last : i - 1, i);
+      }
+      upperBefore = upper;
+    }
+    return turns;
+  }
+
+  /** Of a step from one half plane to the other; the upper one is closed. */
+  private static int crossing(double[] re, double[] im, int from, int to) {
+    boolean fromUpper = im[from] >= 0;
+    int upper = fromUpper ? from : to;
+    if (im[upper] == 0 && re[upper] == 0) {
+      return 0; // of angle 0
+    }
+    double turn = re[from] * im[to] - im[from] * re[to];
+    if (fromUpper) {
+      return turn >= 0 ? 1 : 0; // a step by exactly pi goes forward
+    }
+    return turn < 0 ? -1 : 0;
+  }
+
   static void unwrapInPlace(double[] phases) {
     double previous = phases[0];
     for (int i = 1; i < phases.length; i++) {
@@ -61,7 +93,11 @@ public final class PhaseUnwrapping {
    * @return to - from plus a multiple of 2 pi, in (-pi, pi]
    */
   public static double step(double from, double to) {
-    double d = Math.IEEEremainder(to - from, TURN);
+    double difference = to - from;
+    if (Math.abs(difference) < Math.PI) {
+      return difference; // what the slow remainder gives
+    }
+    double d = Math.IEEEremainder(difference, TURN);
     return d <= -Math.PI ? d + TURN : d;
   }
 

@@ -1,11 +1,10 @@
 package spgpe.observables.phase;
 
 import spgpe.internal.check.Check;
+import spgpe.internal.measure.PairProfiles;
 import spgpe.internal.measure.PointwiseProfile;
 import spgpe.internal.measure.ScalarMeasure;
-import spgpe.projector.Field;
 import spgpe.run.Observable;
-import spgpe.run.Snapshot;
 
 /**
  * Relative phase of the components 0 and 1, phi = arg(psi_1 psi_2<sup>*</sup>) = theta_1 - theta_2,
@@ -30,16 +29,12 @@ public final class RelativePhase {
     return new ScalarMeasure(
         "mean cosine of the relative phase", 2,
         snapshot -> {
-          Field field = snapshot.field();
-          double[] re1 = field.re(0);
-          double[] im1 = field.im(0);
-          double[] re2 = field.re(1);
-          double[] im2 = field.im(1);
+          double[] cosine = PairProfiles.of(snapshot).cosine();
           double sum = 0;
-          for (int i = 0; i < re1.length; i++) {
-            sum += cosine(re1[i], im1[i], re2[i], im2[i]);
+          for (double value : cosine) {
+            sum += value;
           }
-          return sum / re1.length;
+          return sum / cosine.length;
         });
   }
 
@@ -51,12 +46,7 @@ public final class RelativePhase {
   public static Observable cosine() {
     return new PointwiseProfile(
         "cosine of the relative phase", 2,
-        (snapshot, result) -> {
-          Field f = snapshot.field();
-          for (int i = 0; i < result.length; i++) {
-            result[i] = cosine(f.re(0)[i], f.im(0)[i], f.re(1)[i], f.im(1)[i]);
-          }
-        });
+        (snapshot, result) -> copy(PairProfiles.of(snapshot).cosine(), result));
   }
 
   /**
@@ -67,15 +57,7 @@ public final class RelativePhase {
   public static Observable sine() {
     return new PointwiseProfile(
         "sine of the relative phase", 2,
-        (snapshot, result) -> {
-          Field f = snapshot.field();
-          for (int i = 0; i < result.length; i++) {
-            double re = f.re(0)[i] * f.re(1)[i] + f.im(0)[i] * f.im(1)[i];
-            double im = f.im(0)[i] * f.re(1)[i] - f.re(0)[i] * f.im(1)[i];
-            double size = Math.hypot(re, im);
-            result[i] = size == 0 ? 0 : im / size;
-          }
-        });
+        (snapshot, result) -> copy(PairProfiles.of(snapshot).sine(), result));
   }
 
   /**
@@ -97,13 +79,41 @@ public final class RelativePhase {
    */
   public static Observable wrappedAbout(double reference) {
     Check.finite(reference, "reference angle (radians)");
-    // exact at the two angles that matter most: sin(pi) in doubles is not 0
-    double cos = reference == Math.PI || reference == -Math.PI ? -1 : Math.cos(reference);
-    double sin = reference == Math.PI || reference == -Math.PI ? 0 : Math.sin(reference);
     String name =
         reference == 0 ? "relative phase" : "relative phase measured from " + reference;
+    if (reference == 0) {
+      return new PointwiseProfile(
+          name, 2, (snapshot, result) -> copy(PairProfiles.of(snapshot).angle(), result));
+    }
+    if (Math.abs(reference) == Math.PI) {
+      return new PointwiseProfile(
+          name, 2, (snapshot, result) -> fillFromOpposite(PairProfiles.of(snapshot), result));
+    }
+    double cos = Math.cos(reference);
+    double sin = Math.sin(reference);
     return new PointwiseProfile(
-        name, 2, (snapshot, result) -> fillAngles(snapshot, result, cos, sin));
+        name, 2, (snapshot, result) -> fillTurned(PairProfiles.of(snapshot), cos, sin, result));
+  }
+
+  private static void copy(double[] profile, double[] result) {
+    System.arraycopy(profile, 0, result, 0, result.length);
+  }
+
+  private static void fillTurned(PairProfiles pair, double cos, double sin, double[] result) {
+    double[] x = pair.re();
+    double[] y = pair.im();
+    for (int i = 0; i < result.length; i++) {
+      result[i] = PhaseUnwrapping.angle(x[i] * cos + y[i] * sin, y[i] * cos - x[i] * sin);
+    }
+  }
+
+  /** arg(-X) from arg X, in (-pi, pi]. */
+  private static void fillFromOpposite(PairProfiles pair, double[] result) {
+    double[] angle = pair.angle();
+    for (int i = 0; i < result.length; i++) {
+      boolean vanishes = angle[i] == 0 && pair.re()[i] == 0;
+      result[i] = vanishes ? 0 : angle[i] > 0 ? angle[i] - Math.PI : angle[i] + Math.PI;
+    }
   }
 
   /**
@@ -116,8 +126,8 @@ public final class RelativePhase {
     return new PointwiseProfile(
         "unwrapped relative phase", 2,
         (snapshot, result) -> {
-          fillAngles(snapshot, result, 1, 0);
           PhaseUnwrapping.requireLine(snapshot.model(), "unwrapped relative phase");
+          copy(PairProfiles.of(snapshot).angle(), result);
           PhaseUnwrapping.unwrapInPlace(result);
         });
   }
@@ -128,35 +138,12 @@ public final class RelativePhase {
    * @return observable of a single whole number
    */
   public static Observable winding() {
-    Object key = new Object();
     return new ScalarMeasure(
         "winding number of the relative phase", 2,
         snapshot -> {
           PhaseUnwrapping.requireLine(snapshot.model(), "winding number of the relative phase");
-          double[] angles =
-              snapshot.scratch(key, double[].class, m -> new double[m.region().grid().points()]);
-          fillAngles(snapshot, angles, 1, 0);
-          return PhaseUnwrapping.winding(angles);
+          PairProfiles pair = PairProfiles.of(snapshot);
+          return PhaseUnwrapping.winding(pair.re(), pair.im());
         });
-  }
-
-  private static void fillAngles(Snapshot snapshot, double[] result, double cos, double sin) {
-    Field f = snapshot.field();
-    for (int i = 0; i < result.length; i++) {
-      double re = f.re(0)[i] * f.re(1)[i] + f.im(0)[i] * f.im(1)[i];
-      double im = f.im(0)[i] * f.re(1)[i] - f.re(0)[i] * f.im(1)[i];
-      result[i] = PhaseUnwrapping.angle(re * cos + im * sin, im * cos - re * sin);
-    }
-  }
-
-  private static double cosine(double re1, double im1, double re2, double im2) {
-    double re = re1 * re2 + im1 * im2;
-    double im = im1 * re2 - re1 * im2;
-    double square = re * re + im * im;
-    if (square > Double.MIN_NORMAL && square < Double.POSITIVE_INFINITY) {
-      return re / Math.sqrt(square);
-    }
-    double size = Math.hypot(re, im); // slow, but right where the squares leave the range
-    return size == 0 ? 0 : re / size;
   }
 }

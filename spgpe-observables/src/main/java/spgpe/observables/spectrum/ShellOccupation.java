@@ -38,7 +38,7 @@ public final class ShellOccupation implements Observable {
         snapshot.scratch(
             this, Scratch.class, m -> new Scratch(shells(m), new double[m.region().modes()]));
     occupation.measure(snapshot, s.occupations());
-    s.shells().average(s.occupations(), 1, result);
+    s.shells().average(s.occupations(), 1, 0, result);
   }
 
   /**

@@ -100,9 +100,8 @@ public final class StructureFactor implements Observable {
         snapshot.scratch(
             this, Scratch.class, m -> new Scratch(Correlator.of(m), new double[1]));
     profile.measure(snapshot, s.correlator().first());
-    System.arraycopy(s.correlator().first(), 0, s.correlator().second(), 0, s.correlator().first().length);
     double cell = snapshot.model().region().grid().cellVolume();
-    s.correlator().crossSpectrum(cell, result);
+    s.correlator().powerSpectrum(cell, result);
     double sum = 0;
     for (double value : s.correlator().first()) {
       sum += value;

@@ -29,22 +29,20 @@ import spgpe.run.Snapshot;
  */
 public final class DynamicalTemperature {
   private static final class Scratch {
-    final CurvatureMeter meter;
     final Amplitudes energyGradient;
     final Amplitudes hGradient;
     final Amplitudes hNumber;
 
     Scratch(Model model) {
-      meter = new CurvatureMeter(model);
-      energyGradient = meter.vector();
-      hGradient = meter.vector();
-      hNumber = meter.vector();
+      energyGradient = new Amplitudes(model.region(), model.components(), 1);
+      hGradient = new Amplitudes(model.region(), model.components(), 1);
+      hNumber = new Amplitudes(model.region(), model.components(), 1);
     }
   }
 
   @FunctionalInterface
   private interface Estimator {
-    void measure(Snapshot snapshot, Scratch scratch, double[] result);
+    void measure(Snapshot snapshot, CurvatureMeter meter, double[] result);
   }
 
   private DynamicalTemperature() {}
@@ -76,10 +74,9 @@ public final class DynamicalTemperature {
   public static Observable gradientAndCurvature() {
     return observable(
         "gradient and curvature of K", 2,
-        (snapshot, s, result) -> {
-          s.meter.goTo(snapshot.time(), snapshot.amplitudes());
-          result[0] = CurvatureMeter.dot(s.meter.gradient(), s.meter.gradient());
-          result[1] = s.meter.trace();
+        (snapshot, meter, result) -> {
+          result[0] = CurvatureMeter.dot(meter.gradient(), meter.gradient());
+          result[1] = meter.trace();
         });
   }
 
@@ -145,8 +142,7 @@ public final class DynamicalTemperature {
 
       @Override
       public void measure(Snapshot snapshot, double[] result) {
-        Scratch scratch = snapshot.scratch(this, Scratch.class, Scratch::new);
-        estimator.measure(snapshot, scratch, result);
+        estimator.measure(snapshot, CurvatureMeter.at(snapshot), result);
         for (int i = 0; i < size; i++) {
           if (!Double.isFinite(result[i])) {
             throw new IllegalStateException(
@@ -158,32 +154,36 @@ public final class DynamicalTemperature {
     };
   }
 
-  private static void free(Snapshot snapshot, Scratch s, double[] result) {
-    s.meter.goTo(snapshot.time(), snapshot.amplitudes());
-    Amplitudes f = s.meter.gradient();
-    s.meter.hessian(f, s.hGradient);
+  private static void free(Snapshot snapshot, CurvatureMeter meter, double[] result) {
+    Amplitudes f = meter.gradient();
     double square = CurvatureMeter.dot(f, f);
     result[0] =
-        s.meter.trace() / square - 2 * CurvatureMeter.dot(f, s.hGradient) / square / square;
+        meter.trace() / square
+            - 2 * CurvatureMeter.dot(f, meter.alongGradient()) / square / square;
   }
 
   /**
    * The divergences written out with A = grad E, B = grad N = (q, p), H the Hessian of E, d the
    * dimension: only H A, H B and tr H are needed.
    */
-  private static void constrained(Snapshot snapshot, Scratch s, double[] result) {
+  private static void constrained(Snapshot snapshot, CurvatureMeter meter, double[] result) {
     Model model = snapshot.model();
+    Scratch s = snapshot.scratch(Scratch.class, Scratch.class, Scratch::new);
     Amplitudes b = snapshot.amplitudes();
-    s.meter.goTo(snapshot.time(), b);
     Amplitudes a = s.energyGradient;
-    a.set(s.meter.gradient());
+    a.set(meter.gradient());
     addPotential(model, b, a);
-    s.meter.hessian(a, s.hGradient);
+    s.hNumber.set(meter.alongState());
+    if (hasOnePotential(model)) { // A = F + mu a, and the product with H is linear
+      s.hGradient.set(meter.alongGradient());
+      addPotential(model, s.hNumber, s.hGradient);
+    } else {
+      meter.hessian(a, s.hGradient);
+    }
     addPotential(model, a, s.hGradient);
-    s.meter.hessian(b, s.hNumber);
     addPotential(model, b, s.hNumber);
-    double d = s.meter.dimension();
-    double trace = s.meter.trace();
+    double d = meter.dimension();
+    double trace = meter.trace();
     for (int c = 0; c < model.components(); c++) {
       trace += 2 * model.region().modes() * model.reservoir().chemicalPotential(c);
     }
@@ -205,6 +205,16 @@ public final class DynamicalTemperature {
     double slope = ahb / aa + 1 - 2 * e * aha / aa; // A . grad e
     double divergence = (d - 2 - slope - e * trace) / qq + 2 * e * qhq / qq / qq;
     result[1] = -divergence;
+  }
+
+  private static boolean hasOnePotential(Model model) {
+    double first = model.reservoir().chemicalPotential(0);
+    for (int c = 1; c < model.components(); c++) {
+      if (model.reservoir().chemicalPotential(c) != first) {
+        return false;
+      }
+    }
+    return true;
   }
 
   /** target_j += mu_j v_j: from K to E. */

@@ -1,8 +1,8 @@
 package spgpe.observables.thermometry;
 
 import spgpe.internal.check.Check;
+import spgpe.internal.measure.CurvatureMeter;
 import spgpe.internal.measure.CurveFit;
-import spgpe.model.ForceEvaluator;
 import spgpe.model.Model;
 import spgpe.observables.Estimates;
 import spgpe.statistics.Estimate;
@@ -30,14 +30,10 @@ public final class Equipartition implements Observable {
   private static final int ITERATIONS = 6;
 
   private static final class Scratch {
-    final ForceEvaluator evaluator;
-    final Amplitudes force;
     final int[] band;
     final int[] count;
 
     Scratch(Model model, double[] edges) {
-      evaluator = model.evaluator(1);
-      force = new Amplitudes(model.region(), model.components(), 1);
       band = bands(model.region(), edges);
       count = new int[edges.length - 1];
       for (int b : band) {
@@ -131,7 +127,7 @@ public final class Equipartition implements Observable {
   public void measure(Snapshot snapshot, double[] result) {
     Scratch s = snapshot.scratch(this, Scratch.class, m -> new Scratch(m, edges));
     Amplitudes a = snapshot.amplitudes();
-    s.evaluator.force(snapshot.time(), a, s.force);
+    Amplitudes force = CurvatureMeter.at(snapshot).gradient();
     java.util.Arrays.fill(result, 0);
     int bands = bands();
     for (int c = 0; c < a.components(); c++) {
@@ -143,7 +139,7 @@ public final class Equipartition implements Observable {
         }
         double re = a.re(c)[m];
         double im = a.im(c)[m];
-        double work = re * s.force.re(c)[m] + im * s.force.im(c)[m];
+        double work = re * force.re(c)[m] + im * force.im(c)[m];
         double n = re * re + im * im;
         result[b] += work / s.count[b];
         result[bands + b] += (work + mu * n) / s.count[b];

@@ -3,9 +3,10 @@ package spgpe.observables.topology;
 import java.util.ArrayList;
 import java.util.List;
 import spgpe.internal.check.Check;
+import spgpe.internal.measure.PairProfiles;
+import spgpe.internal.measure.PointwiseProfile;
 import spgpe.model.Model;
 import spgpe.observables.phase.PhaseUnwrapping;
-import spgpe.observables.phase.RelativePhase;
 import spgpe.run.Observable;
 import spgpe.run.Snapshot;
 
@@ -71,7 +72,6 @@ public final class Kinks {
    * @return observable of a single number
    */
   public static Observable count() {
-    Observable wrapped = RelativePhase.wrapped();
     return new Observable() {
       @Override
       public String name() {
@@ -83,17 +83,28 @@ public final class Kinks {
         Check.argument(
             model.region().grid().dimension() == 1,
             "kinks need a line (ring): %s", model.region().grid());
-        wrapped.size(model);
+        PointwiseProfile.requireComponents(model, 2, name());
         return 1;
       }
 
       @Override
       public void measure(Snapshot snapshot, double[] result) {
-        double[] phases =
-            snapshot.scratch(this, double[].class, m -> new double[m.region().grid().points()]);
-        wrapped.measure(snapshot, phases);
-        result[0] = find(phases, snapshot.model().region().grid().axis(0).length()).size();
+        PairProfiles pair = PairProfiles.of(snapshot);
+        result[0] =
+            hasValley(pair.re())
+                ? find(pair.angle(), snapshot.model().region().grid().axis(0).length()).size()
+                : 0;
       }
     };
+  }
+
+  /** Whether cos phi is positive anywhere: without, there is no valley to start from. */
+  private static boolean hasValley(double[] coherence) {
+    for (double re : coherence) {
+      if (re > 0) {
+        return true;
+      }
+    }
+    return false;
   }
 }

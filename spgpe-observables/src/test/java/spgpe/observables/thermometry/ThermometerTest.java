@@ -145,8 +145,7 @@ class ThermometerTest {
     for (int i = 0; i < x.length; i++) {
       x[i] = random.nextGaussian();
     }
-    CurvatureMeter meter = new CurvatureMeter(small);
-    meter.goTo(0, amplitudes(small, x));
+    CurvatureMeter meter = CurvatureMeter.at(Snapshot.of(small, amplitudes(small, x), 0));
     double[][] h = new double[20][];
     double trace = 0;
     for (int i = 0; i < 20; i++) {
