@@ -101,10 +101,11 @@ public final class PhaseUnwrapping {
   }
 
   static void requireLine(Model model, String name) {
-    Check.argument(
-        model.region().grid().dimension() == 1,
-        "this observable needs a line (ring): observable=\"%s\", grid=%s",
-        name, model.region().grid());
+    if (model.region().grid().dimension() != 1) { // a measurement allocates nothing
+      throw new IllegalArgumentException(
+          "this observable needs a line (ring): observable=\"" + name + "\", grid="
+              + model.region().grid());
+    }
   }
 
   private static void requireFinite(double[] phases) {
