@@ -28,6 +28,7 @@ import spgpe.observables.phase.ComponentPhase;
 import spgpe.observables.phase.RelativePhase;
 import spgpe.observables.spectrum.ModeOccupation;
 import spgpe.observables.spectrum.StructureFactor;
+import spgpe.observables.standard.StandardObservables;
 import spgpe.observables.thermometry.DynamicalTemperature;
 import spgpe.observables.thermometry.Equipartition;
 import spgpe.observables.topology.Kinks;
@@ -69,13 +70,6 @@ public final class ObservationCost {
         ModeOccupation.ofComponent(0), ModeOccupation.inPhase(), ModeOccupation.outOfPhase(),
         StructureFactor.ofDensity(), StructureFactor.ofSpin(Density.SpinAxis.Z),
         Equipartition.overall(), Kinks.count());
-  }
-
-  /** What an average over the metastable state needs. */
-  private static List<Observable> metastable() {
-    return List.of(
-        PairMoment.all(), RelativePhase.meanCosine(), SpatialMean.ofSquare(RelativePhase.sine()),
-        SpatialCorrelation.phaseDeviation(Math.PI), MetastableFluctuations.observable());
   }
 
   private static List<Observable> thermometers() {
@@ -129,9 +123,9 @@ public final class ObservationCost {
     everything.addAll(thermometers());
     List<Group> groups = new ArrayList<>();
     groups.add(new Group("nothing but the look", List.of(Observable.scalar("0", s -> 0)), false));
-    groups.add(new Group("averages of the metastable state", metastable(), false));
-    groups.add(new Group("all but curvature thermometers", everyday(), true));
-    groups.add(new Group("all", everything, true));
+    groups.add(new Group("the default list", StandardObservables.ofPair(), false));
+    groups.add(new Group("29 observables, bubbles, slips", everyday(), true));
+    groups.add(new Group("the same and three thermometers", everything, true));
     if (single) {
       groups.add(new Group("bubble census and phase slips", List.of(), true));
       for (Observable observable : everything) {

@@ -17,10 +17,10 @@ import spgpe.projector.ModeTransform;
  * position space is computed when it is first asked for.
  */
 public final class Snapshot {
-  /** Scratch of an owner, and whether it was computed for the state that is shown. */
+  /** Scratch of an owner, and for which look it was computed. */
   private static final class Kept {
     final Object value;
-    boolean current;
+    long look;
 
     Kept(Object value) {
       this.value = value;
@@ -34,6 +34,7 @@ public final class Snapshot {
   private final IdentityHashMap<Object, Kept> scratch = new IdentityHashMap<>();
   private final double[] energies;
   private boolean energiesAreCurrent;
+  private long look;
   private Amplitudes amplitudes;
   private boolean fieldIsCurrent;
   private double time;
@@ -74,9 +75,7 @@ public final class Snapshot {
     trajectory = ofTrajectory;
     fieldIsCurrent = false;
     energiesAreCurrent = false;
-    for (Kept kept : scratch.values()) {
-      kept.current = false;
-    }
+    look++;
   }
 
   /**
@@ -216,9 +215,9 @@ public final class Snapshot {
       BiConsumer<? super Snapshot, ? super W> computer) {
     Kept kept = kept(owner, type, maker);
     W value = type.cast(kept.value);
-    if (!kept.current) {
+    if (kept.look != look) {
       Check.notNull(computer, "computer").accept(this, value);
-      kept.current = true;
+      kept.look = look;
     }
     return value;
   }

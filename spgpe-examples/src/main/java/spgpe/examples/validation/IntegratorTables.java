@@ -1,5 +1,6 @@
 package spgpe.examples.validation;
 
+import java.nio.file.Path;
 import java.util.List;
 import java.util.Locale;
 import spgpe.grid.Axis;
@@ -34,7 +35,8 @@ import spgpe.run.Trajectory;
  *
  * <p>Without arguments the orders and the exact tables of the linearised mode (a minute). With the
  * arguments "ensemble TRAJECTORIES TIME [SCHEME ...]" the runs of the whole interacting field too,
- * of all schemes or of those named.
+ * of all schemes or of those named. With the arguments "figure FILE" only the bias against the work,
+ * at gamma = 1e-3, as a PNG file.
  */
 public final class IntegratorTables {
   private static final double LENGTH = 32;
@@ -44,11 +46,18 @@ public final class IntegratorTables {
   private IntegratorTables() {}
 
   /**
-   * Prints the tables.
+   * Prints the tables or draws the figure.
    *
-   * @param args nothing, or "ensemble", number of trajectories, time of each, names of schemes
+   * @param args nothing, or "ensemble", number of trajectories, time of each, names of schemes, or
+   *     "figure", file
    */
   public static void main(String[] args) {
+    if (args.length == 2 && args[0].equals("figure")) {
+      WorkPrecisionFigure.write(
+          Path.of(args[1]), EquilibriumBias.onRing(LENGTH, CUTOFF, 1, 1e-3), schemes(),
+          "Equilibrium bias against work, gamma = 0.001, gn = 1, eps up to 18.5");
+      return;
+    }
     printOrderTable();
     printLinearTables();
     if (args.length >= 3 && args[0].equals("ensemble")) {

@@ -1,6 +1,7 @@
 package spgpe.internal.measure;
 
 import java.util.Arrays;
+import java.util.List;
 import spgpe.hamiltonian.LocalTerm;
 import spgpe.hamiltonian.ModeMatrix;
 import spgpe.internal.check.Check;
@@ -23,6 +24,7 @@ public final class CurvatureMeter {
   private static final double STEP = 1e-3;
 
   private final Model model;
+  private final List<LocalTerm> terms;
   private final ModeTransform transform;
   private final Amplitudes gradient;
   private final Amplitudes gradientTurned;
@@ -42,6 +44,7 @@ public final class CurvatureMeter {
 
   private CurvatureMeter(Model model) {
     this.model = model;
+    this.terms = model.localTerms();
     this.transform = model.region().transform(model.components(), 1, model.fourierProvider());
     this.gradient = vector();
     this.gradientTurned = vector();
@@ -98,14 +101,14 @@ public final class CurvatureMeter {
   }
 
   private boolean hasLocalTerms() {
-    return !model.localTerms().isEmpty();
+    return !terms.isEmpty();
   }
 
   /** Of the local terms at {@link #shifted}. */
   private void computeForce() {
     clear(force);
-    for (LocalTerm term : model.localTerms()) {
-      term.addForce(time, block);
+    for (int t = 0; t < terms.size(); t++) { // without an iterator: allocates nothing
+      terms.get(t).addForce(time, block);
     }
   }
 

@@ -1,5 +1,7 @@
 package spgpe.observables.density;
 
+import java.util.function.Function;
+import java.util.function.IntUnaryOperator;
 import spgpe.internal.check.Check;
 import spgpe.internal.measure.Masses;
 import spgpe.internal.measure.PointwiseProfile;
@@ -77,18 +79,17 @@ public final class Current {
   }
 
   private static Observable profile(
-      String name, int components, int axis, java.util.function.IntUnaryOperator sign) {
+      String name, int components, int axis, IntUnaryOperator sign) {
     Check.inRange(axis, 0, 1, "axis");
-    Object key = new Object();
+    Function<Model, Scratch> maker = model -> new Scratch(model, axis);
     return new PointwiseProfile(
         name, components,
-        (snapshot, result) -> fill(snapshot, key, axis, sign, result));
+        (snapshot, result) -> fill(snapshot, maker, sign, result));
   }
 
   private static void fill(
-      Snapshot snapshot, Object key, int axis, java.util.function.IntUnaryOperator sign,
-      double[] result) {
-    Scratch s = snapshot.scratch(key, Scratch.class, m -> new Scratch(m, axis));
+      Snapshot snapshot, Function<Model, Scratch> maker, IntUnaryOperator sign, double[] result) {
+    Scratch s = snapshot.scratch(maker, Scratch.class, maker);
     Amplitudes a = snapshot.amplitudes();
     for (int c = 0; c < a.components(); c++) {
       for (int m = 0; m < a.re(c).length; m++) {

@@ -73,12 +73,20 @@ public enum PairMoment {
 
   private static void addUp(Field f, double[] result) {
     java.util.Arrays.fill(result, 0);
-    int points = f.grid().points();
-    for (int i = 0; i < points; i++) {
-      double re1 = f.re(0)[i];
-      double im1 = f.im(0)[i];
-      double re2 = f.re(1)[i];
-      double im2 = f.im(1)[i];
+    addUp(f.re(0), f.im(0), f.re(1), f.im(1), result);
+    for (int i = 0; i < result.length; i++) {
+      result[i] /= f.grid().points();
+    }
+  }
+
+  private static void addUp(
+      double[] reals1, double[] imaginary1, double[] reals2, double[] imaginary2,
+      double[] result) {
+    for (int i = 0; i < reals1.length; i++) {
+      double re1 = reals1[i];
+      double im1 = imaginary1[i];
+      double re2 = reals2[i];
+      double im2 = imaginary2[i];
       double n1 = re1 * re1 + im1 * im1;
       double n2 = re2 * re2 + im2 * im2;
       double re = re1 * re2 + im1 * im2;
@@ -92,9 +100,6 @@ public enum PairMoment {
       result[DENSITY_2_SQUARED.index] += n2 * n2;
       result[DENSITY_PRODUCT.index] += n1 * n2;
       result[SPIN_Z_SQUARED.index] += (n1 - n2) * (n1 - n2);
-    }
-    for (int i = 0; i < result.length; i++) {
-      result[i] /= points;
     }
   }
 }

@@ -54,7 +54,7 @@ public final class PhaseUnwrapping {
     boolean upperBefore = im[last] >= 0;
     for (int i = 0; i <= last; i++) {
       boolean upper = im[i] >= 0;
-      if (upper != upperBefore) {
+      if (upper != upperBefore || im[i] == 0) {
         turns += crossing(re, im, i == 0 ? last : i - 1, i);
       }
       upperBefore = upper;
@@ -62,16 +62,20 @@ public final class PhaseUnwrapping {
     return turns;
   }
 
-  /** Of a step from one half plane to the other; the upper one is closed. */
+  /** Of one step; a step by exactly pi goes forward. The upper half plane is closed. */
   private static int crossing(double[] re, double[] im, int from, int to) {
     boolean fromUpper = im[from] >= 0;
+    boolean toUpper = im[to] >= 0;
+    if (fromUpper == toUpper) { // within a half plane only from pi to 0
+      return im[from] == 0 && im[to] == 0 && re[from] < 0 && re[to] >= 0 ? 1 : 0;
+    }
     int upper = fromUpper ? from : to;
     if (im[upper] == 0 && re[upper] == 0) {
       return 0; // of angle 0
     }
     double turn = re[from] * im[to] - im[from] * re[to];
     if (fromUpper) {
-      return turn >= 0 ? 1 : 0; // a step by exactly pi goes forward
+      return turn >= 0 ? 1 : 0;
     }
     return turn < 0 ? -1 : 0;
   }
@@ -107,10 +111,11 @@ public final class PhaseUnwrapping {
   }
 
   static void requireLine(Model model, String name) {
-    Check.argument(
-        model.region().grid().dimension() == 1,
-        "this observable needs a line (ring): observable=\"%s\", grid=%s",
-        name, model.region().grid());
+    if (model.region().grid().dimension() != 1) { // a measurement allocates nothing
+      throw new IllegalArgumentException(
+          "this observable needs a line (ring): observable=\"" + name + "\", grid="
+              + model.region().grid());
+    }
   }
 
   private static void requireFinite(double[] phases) {

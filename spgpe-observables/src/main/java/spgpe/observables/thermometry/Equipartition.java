@@ -1,5 +1,6 @@
 package spgpe.observables.thermometry;
 
+import java.util.function.Function;
 import spgpe.internal.check.Check;
 import spgpe.internal.measure.CurvatureMeter;
 import spgpe.internal.measure.CurveFit;
@@ -45,9 +46,11 @@ public final class Equipartition implements Observable {
   }
 
   private final double[] edges;
+  private final Function<Model, Scratch> maker; // made once: a measurement allocates nothing
 
   private Equipartition(double[] edges) {
     this.edges = edges;
+    this.maker = model -> new Scratch(model, edges);
   }
 
   /**
@@ -125,7 +128,7 @@ public final class Equipartition implements Observable {
 
   @Override
   public void measure(Snapshot snapshot, double[] result) {
-    Scratch s = snapshot.scratch(this, Scratch.class, m -> new Scratch(m, edges));
+    Scratch s = snapshot.scratch(this, Scratch.class, maker);
     Amplitudes a = snapshot.amplitudes();
     Amplitudes force = CurvatureMeter.at(snapshot).gradient();
     java.util.Arrays.fill(result, 0);

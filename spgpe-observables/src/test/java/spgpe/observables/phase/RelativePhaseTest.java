@@ -128,4 +128,26 @@ class RelativePhaseTest {
     assertTrue(message.contains("components needed=2, components of the model=1"), message);
     assertThrows(IllegalArgumentException.class, () -> RelativePhase.cosine().size(single));
   }
+
+  /** Crossings of the cut count what the sum of the phase steps gives, special values included. */
+  @Test
+  void windingByCrossingsIsThatOfTheAngles() {
+    java.util.SplittableRandom random = new java.util.SplittableRandom(77);
+    int turned = 0;
+    for (int attempt = 0; attempt < 2000; attempt++) {
+      double[] re = new double[3 + random.nextInt(20)];
+      double[] im = new double[re.length];
+      double[] angles = new double[re.length];
+      for (int i = 0; i < re.length; i++) {
+        boolean special = random.nextInt(4) == 0;
+        re[i] = special ? random.nextInt(-1, 2) : random.nextDouble(-1, 1);
+        im[i] = special ? random.nextInt(-1, 2) : random.nextDouble(-1, 1);
+        angles[i] = PhaseUnwrapping.angle(re[i], im[i]);
+      }
+      int expected = PhaseUnwrapping.winding(angles);
+      assertEquals(expected, PhaseUnwrapping.winding(re, im));
+      turned += expected == 0 ? 0 : 1;
+    }
+    assertTrue(turned > 500, "fields with a winding: " + turned);
+  }
 }

@@ -1,0 +1,5 @@
+/** Lists of observables for everyday runs. */
+@NullMarked
+package spgpe.observables.standard;
+
+import org.jspecify.annotations.NullMarked;
