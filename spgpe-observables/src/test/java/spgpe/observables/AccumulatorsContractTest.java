@@ -3,8 +3,12 @@ package spgpe.observables;
 import java.util.ArrayList;
 import java.util.List;
 import org.junit.jupiter.api.Nested;
+import spgpe.grid.Axis;
+import spgpe.grid.PeriodicGrid;
+import spgpe.observables.bubble.Bubble;
 import spgpe.observables.bubble.BubbleCensus;
 import spgpe.observables.bubble.BubbleDetector;
+import spgpe.observables.bubble.BubbleHistory;
 import spgpe.observables.bubble.BubbleSettings;
 import spgpe.observables.correlation.CorrelationFunction;
 import spgpe.observables.correlation.OneBodyMatrix;
@@ -117,6 +121,28 @@ class AccumulatorsContractTest {
     @Override
     protected List<?> contents(BubbleCensus census) {
       return census.histories().stream().map(h -> List.of(h.trajectory(), h.events())).toList();
+    }
+  }
+
+  @Nested
+  class BubblesOnAPlane extends Bubbles {
+    @Override
+    protected Accumulator.Factory<BubbleCensus> factory() {
+      return BubbleDetector.of(BubbleSettings.atLevel(0))
+          .census(PeriodicGrid.of(Axis.of(4, 2), Axis.of(4, 3)));
+    }
+
+    @Override
+    protected List<?> contents(BubbleCensus census) {
+      List<Object> all = new ArrayList<>(super.contents(census));
+      for (BubbleHistory history : census.histories()) {
+        for (Bubble bubble : history.bubbles()) {
+          for (int i = 0; i < bubble.radius().size(); i++) {
+            all.add(bubble.radius().extent(i));
+          }
+        }
+      }
+      return all;
     }
   }
 

@@ -12,6 +12,7 @@ import spgpe.grid.Axis;
 import spgpe.grid.PeriodicGrid;
 import spgpe.hamiltonian.BiquadraticCoupling;
 import spgpe.hamiltonian.CoherentCoupling;
+import spgpe.hamiltonian.ExternalPotential;
 import spgpe.hamiltonian.Hamiltonian;
 import spgpe.integrate.OuRk4;
 import spgpe.model.Model;
@@ -22,6 +23,8 @@ import spgpe.observables.bubble.MetastableFluctuations;
 import spgpe.observables.correlation.NaturalModes;
 import spgpe.observables.correlation.OneBodyMatrix;
 import spgpe.observables.correlation.SpatialCorrelation;
+import spgpe.observables.density.Density;
+import spgpe.observables.density.EdgeDensity;
 import spgpe.observables.phase.RelativePhase;
 import spgpe.observables.spectrum.ModeAmplitude;
 import spgpe.observables.spectrum.ModeOccupation;
@@ -94,6 +97,41 @@ class PlaneRunTest {
   private static void assertNear(double expected, Estimate found, double largest) {
     assertTrue(found.standardError() < largest * expected, found::toString);
     assertEquals(expected, found.value(), 4 * found.standardError());
+  }
+
+  /**
+   * A cold cloud in a harmonic trap of radius sqrt(2 mu)/w = 2 (Thomas-Fermi): a box of side 10 is
+   * wide enough, one of side 4 ends where the cloud does. Nothing is left to chance: the ratios differ
+   * by a factor of hundreds.
+   */
+  @Test
+  void theEdgeOfATrap() {
+    assertTrue(trapped(10).warning().isEmpty(), trapped(10)::toString);
+    EdgeDensity narrow = trapped(4);
+    assertTrue(narrow.ratio() > 0.02, narrow::toString);
+    String warning = narrow.warning().orElseThrow();
+    assertTrue(warning.contains("reaches the edge of the periodic box"), warning);
+  }
+
+  private static EdgeDensity trapped(double side) {
+    Axis axis = Axis.holdingModes(side > 5 ? 7 : 3, side);
+    Model model =
+        Model.of(
+            Projector.modesUpTo(side > 5 ? 7 : 3).on(PeriodicGrid.of(axis, axis)),
+            Hamiltonian.single(1)
+                .with(
+                    ExternalPotential.onPlane(
+                        "trap",
+                        (x, y) ->
+                            (Math.pow(x - side / 2, 2) + Math.pow(y - side / 2, 2)) / 2)),
+            Reservoir.of(0.001, 2, 1));
+    Recording<TimeAverage> density =
+        Recording.of(Density.total(), Schedule.every(1), TimeAverage.from(10));
+    return EdgeDensity.of(
+        Ensemble.of(model).startingFrom(InitialState.uniform(0.5))
+            .integratedBy(OuRk4.ofStep(0.05)).trajectories(1).seed(1).until(20).record(density)
+            .run().get(density),
+        model.region().grid());
   }
 
   /** Everything made for planes, recorded at once: the same bits for threads, lanes and splits. */

@@ -50,7 +50,7 @@ public final class OblateDecayCommand implements Callable<Integer> {
       names = "--trajectories",
       paramLabel = "COUNT",
       description = "trajectories, 1 to 1000 (default: ${DEFAULT-VALUE})",
-      defaultValue = "4")
+      defaultValue = "6")
   private long trajectories;
 
   @Option(

@@ -92,7 +92,7 @@ final class OblateFigures {
           new XYSeries(
               String.format(
                   Locale.ROOT, "trajectory %d, bubble %d", bubble.trajectory(), bubble.index()));
-      RadiusTrack track = bubble.radius().untilWrapped();
+      RadiusTrack track = n.radius();
       for (int i = 0; i < track.size(); i++) {
         measured.add(
             report.milliseconds(track.time(i) - bubble.birthTime()),

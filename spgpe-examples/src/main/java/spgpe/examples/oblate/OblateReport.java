@@ -31,10 +31,12 @@ record OblateReport(OblateScenario scenario, OblateRun.Outcome outcome) {
    * A nucleation with the part of its radius that can be fitted, if it is long enough.
    *
    * @param bubble the bubble
-   * @param growth radius from {@link #FIT_AGE} on, before it wraps or an accepted bubble joins it
+   * @param radius radius before it wraps or an accepted bubble joins it
+   * @param growth the same from {@link #FIT_AGE} on
    * @param speed mean speed of the wall, if there are at least ten frames
    */
-  record Nucleation(Bubble bubble, RadiusTrack growth, Optional<WallSpeed> speed) {}
+  record Nucleation(
+      Bubble bubble, RadiusTrack radius, RadiusTrack growth, Optional<WallSpeed> speed) {}
 
   private ScaledUnits units() {
     return scenario.units();
@@ -57,12 +59,13 @@ record OblateReport(OblateScenario scenario, OblateRun.Outcome outcome) {
     List<Nucleation> found = new ArrayList<>();
     for (BubbleHistory history : outcome.histories()) {
       for (Bubble bubble : history.nucleations()) {
-        RadiusTrack growth =
-            bubble.radius().untilWrapped()
-                .between(bubble.birthTime() + FIT_AGE, endOfGrowth(history, bubble));
+        double start = bubble.birthTime();
+        double end = Math.nextDown(endOfGrowth(history, bubble));
+        RadiusTrack radius = bubble.radius().untilWrapped().between(start, end);
+        RadiusTrack growth = radius.between(start + FIT_AGE, end);
         found.add(
             new Nucleation(
-                bubble, growth,
+                bubble, radius, growth,
                 growth.size() >= 10 ? Optional.of(WallSpeed.linear(growth)) : Optional.empty()));
       }
     }

@@ -49,7 +49,7 @@ class OblateDecayCommandTest {
   void aSmallRunWritesEverything(@TempDir Path folder) throws Exception {
     Outcome outcome =
         run(
-            "--temperature=68", "--trajectories=2", "--until=40", "--threads=1",
+            "--temperature=68", "--trajectories=2", "--until=45", "--threads=1",
             "--out=" + folder);
     assertEquals(0, outcome.code(), outcome.err());
     assertEquals("", outcome.err());

@@ -210,8 +210,8 @@ class VorticesTest {
         double part = length / (2 * Math.PI * radius) - 1;
         worst = Math.abs(part) > Math.abs(worst) ? part : worst;
       }
-      // chords of a circle: low by (h/r)^2 times a number of order 1/12..1/6, never high
-      assertTrue(worst < 0 && worst > -0.25 / (radius * radius), radius + ": " + worst);
+      // chords of a circle: low by 0.061 (h/r)^2 on average (measured), never high
+      assertEquals(-0.061, worst * radius * radius, 0.02, "radius " + radius);
     }
     double[] band = new double[grid.points()];
     for (int p = 0; p < band.length; p++) {
