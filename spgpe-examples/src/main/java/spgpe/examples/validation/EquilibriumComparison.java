@@ -46,13 +46,13 @@ public final class EquilibriumComparison {
   private static final double START = 100;
   private static final long SEED = 20261202;
 
-  static final Setting A32 =
-      new Setting("A", new CoupledPair(1, 1, 0.1, 0, 0.5), new RingModes(40, 32), 144, 1, 4);
-  static final Setting A64 =
-      new Setting("A", new CoupledPair(1, 1, 0.1, 0, 0.5), new RingModes(40, 64), 288, 1, 4);
+  static final Setting A31 =
+      new Setting("A", new CoupledPair(1, 1, 0.1, 0, 0.5), new RingModes(40, 31), 128, 0.5, 4);
+  static final Setting A63 =
+      new Setting("A", new CoupledPair(1, 1, 0.1, 0, 0.5), new RingModes(40, 63), 256, 0.5, 4);
   static final Setting B48 =
-      new Setting("B", new CoupledPair(1, 1, 0.1, 0.15, 0.25), new RingModes(32, 48), 200, 1, 5);
-  private static final List<Setting> SETTINGS = List.of(A32, A64, B48);
+      new Setting("B", new CoupledPair(1, 1, 0.1, 0.15, 0.25), new RingModes(32, 48), 256, 0.5, 5);
+  private static final List<Setting> SETTINGS = List.of(A31, A63, B48);
 
   private EquilibriumComparison() {}
 
@@ -116,6 +116,7 @@ public final class EquilibriumComparison {
             .trajectories(effort.trajectories())
             .seed(effort.seed())
             .until(effort.end())
+            .lanes(8)
             .record(moments)
             .record(curve)
             .runOn(executor);

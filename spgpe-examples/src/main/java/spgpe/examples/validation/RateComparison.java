@@ -52,8 +52,8 @@ public final class RateComparison {
   /** Ends are about 1.5 expected lifetimes, so that few trajectories are censored. */
   private static final List<Setting> SETTINGS =
       List.of(
-          new Setting(9, 400, 1500), new Setting(10, 600, 3000), new Setting(12, 120, 6000),
-          new Setting(14, 60, 30_000));
+          new Setting(9, 1200, 1500), new Setting(10, 1200, 3000), new Setting(12, 600, 6000),
+          new Setting(14, 300, 30_000));
 
   private RateComparison() {}
 
@@ -94,7 +94,7 @@ public final class RateComparison {
     Model model =
         Model.of(
             Projector.modesUpTo(bubble.ring().cutoffMode())
-                .on(PeriodicGrid.of(Axis.of(100, bubble.ring().length()))),
+                .on(PeriodicGrid.of(Axis.of(128, bubble.ring().length()))),
             Hamiltonian.pair(pair.g(), 0)
                 .with(CoherentCoupling.constant(pair.coherentCoupling()))
                 .with(BiquadraticCoupling.of(pair.biquadraticCoupling())),
@@ -104,6 +104,7 @@ public final class RateComparison {
             .startingFrom(InitialState.uniform(1, -1))
             .integratedBy(OuRk4.ofStep(0.1))
             .trajectories(setting.trajectories())
+            .lanes(8)
             .seed(seed)
             .until(setting.end())
             .stopWhen(FirstPassage.upward(RelativePhase.meanCosine(), -0.4, Schedule.every(0.5)))
