@@ -30,6 +30,9 @@ class AccumulatorsContractTest {
         all.add(average.standardError(i));
         all.add(average.sampleVariance(i));
       }
+      if (average.trajectories() > 1) {
+        all.add(average.estimates().covariance(0, 1));
+      }
       return all;
     }
   }

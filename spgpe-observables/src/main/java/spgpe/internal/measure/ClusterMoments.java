@@ -1,5 +1,7 @@
 package spgpe.internal.measure;
 
+import java.util.ArrayList;
+import java.util.List;
 import org.jspecify.annotations.Nullable;
 
 /**
@@ -9,9 +11,16 @@ import org.jspecify.annotations.Nullable;
  * <p>With n_i samples of mean x_i in cluster i: m = sum n_i x_i / sum n_i, and (ratio estimator,
  * linearised) Cov m = N/(N-1) sum n_i^2 (x_i - m)(x_i - m)^T / (sum n_i)^2. The sums are kept
  * centred on the current mean and shifted when two sets are merged, so nothing large cancels.
- * Immutable.
+ * Matrices are made late: sets of few clusters keep the means of their clusters instead. Immutable.
  */
 public final class ClusterMoments {
+  /** Sets of at most this many clusters keep the means of the clusters in place of a matrix. */
+  private static final int FEW = 16;
+
+  /** A cluster of a small set. */
+  @SuppressWarnings("ArrayRecordComponent") // compared by nobody
+  private record Cluster(double weight, double[] mean) {}
+
   private final long clusters;
   private final double weight;
   private final double weightSquares;
@@ -19,15 +28,18 @@ public final class ClusterMoments {
   private final double[] first;
   private final double[] diagonal;
   private final double[] sampleSquares;
-  /** Lower triangle by rows; null while it is zero or if it is not kept. */
+  /** The clusters of a small set; empty for a large one or if no covariance is kept. */
+  private final List<Cluster> few;
+
+  /** Lower triangle by rows; null for a small set or if it is not kept. */
   private final double @Nullable [] triangle;
 
   private final boolean keepsCovariance;
 
   private ClusterMoments(
       long clusters, double weight, double weightSquares, double[] mean, double[] first,
-      double[] diagonal, double[] sampleSquares, double @Nullable [] triangle,
-      boolean keepsCovariance) {
+      double[] diagonal, double[] sampleSquares, List<Cluster> few,
+      double @Nullable [] triangle, boolean keepsCovariance) {
     this.clusters = clusters;
     this.weight = weight;
     this.weightSquares = weightSquares;
@@ -35,6 +47,7 @@ public final class ClusterMoments {
     this.first = first;
     this.diagonal = diagonal;
     this.sampleSquares = sampleSquares;
+    this.few = few;
     this.triangle = triangle;
     this.keepsCovariance = keepsCovariance;
   }
@@ -48,8 +61,8 @@ public final class ClusterMoments {
    */
   public static ClusterMoments empty(int size, boolean keepsCovariance) {
     return new ClusterMoments(
-        0, 0, 0, new double[size], new double[size], new double[size], new double[size], null,
-        keepsCovariance);
+        0, 0, 0, new double[size], new double[size], new double[size], new double[size],
+        List.of(), null, keepsCovariance);
   }
 
   /**
@@ -65,7 +78,8 @@ public final class ClusterMoments {
       long samples, double[] mean, double[] squares, boolean keepsCovariance) {
     return new ClusterMoments(
         1, samples, (double) samples * samples, mean, new double[mean.length],
-        new double[mean.length], squares, null, keepsCovariance);
+        new double[mean.length], squares,
+        keepsCovariance ? List.of(new Cluster(samples, mean)) : List.of(), null, keepsCovariance);
   }
 
   /**
@@ -98,41 +112,71 @@ public final class ClusterMoments {
     }
     double[] f = new double[size];
     double[] d = new double[size];
-    double @Nullable [] t = keepsCovariance ? new double[size * (size + 1) / 2] : null;
-    addShifted(this, shift, f, d, t);
-    addShifted(other, otherShift, f, d, t);
+    addShifted(this, shift, f, d);
+    addShifted(other, otherShift, f, d);
+    List<Cluster> together = new ArrayList<>();
+    double @Nullable [] t = null;
+    if (keepsCovariance && clusters + other.clusters <= FEW) {
+      together.addAll(few);
+      together.addAll(other.few);
+    } else if (keepsCovariance) {
+      t = new double[size * (size + 1) / 2];
+      addMatrix(this, m, shift, t);
+      addMatrix(other, m, otherShift, t);
+    }
     return new ClusterMoments(
-        clusters + other.clusters, total, weightSquares + other.weightSquares, m, f, d, squares, t,
-        keepsCovariance);
+        clusters + other.clusters, total, weightSquares + other.weightSquares, m, f, d, squares,
+        together, t, keepsCovariance);
   }
 
-  private static void addShifted(
-      ClusterMoments part, double[] shift, double[] f, double[] d, double @Nullable [] t) {
+  private static void addShifted(ClusterMoments part, double[] shift, double[] f, double[] d) {
     double w2 = part.weightSquares;
     for (int i = 0; i < shift.length; i++) {
       f[i] += part.first[i] - w2 * shift[i];
       d[i] += part.diagonal[i] + shift[i] * (w2 * shift[i] - 2 * part.first[i]);
     }
-    if (t == null) {
+  }
+
+  /** t += sum of n_i^2 (x_i - m)(x_i - m)^T over the clusters of a part, m = its mean + shift. */
+  private static void addMatrix(ClusterMoments part, double[] m, double[] shift, double[] t) {
+    if (part.triangle == null) {
+      addClusters(part.few, m, t);
       return;
     }
+    double w2 = part.weightSquares;
     int row = 0;
     for (int i = 0; i < shift.length; i++) {
-      addRow(t, row, i + 1, w2 * shift[i] - part.first[i], shift, -shift[i], part.first);
+      addRow(t, row, i + 1, w2 * shift[i] - part.first[i], shift);
+      addRow(t, row, i + 1, -shift[i], part.first);
       row += i + 1;
     }
-    if (part.triangle != null) {
-      for (int e = 0; e < t.length; e++) {
-        t[e] += part.triangle[e];
-      }
+    for (int e = 0; e < t.length; e++) {
+      t[e] += part.triangle[e];
     }
   }
 
-  /** target += a x + b y, from a place on. */
-  private static void addRow(
-      double[] target, int from, int length, double a, double[] x, double b, double[] y) {
+  /** Row by row, so that a row stays in the cache for all clusters. */
+  private static void addClusters(List<Cluster> clusters, double[] m, double[] t) {
+    double[][] away = new double[clusters.size()][m.length];
+    for (int l = 0; l < away.length; l++) {
+      double[] mean = clusters.get(l).mean();
+      for (int i = 0; i < m.length; i++) {
+        away[l][i] = clusters.get(l).weight() * (mean[i] - m[i]);
+      }
+    }
+    int row = 0;
+    for (int i = 0; i < m.length; i++) {
+      for (double[] x : away) {
+        addRow(t, row, i + 1, x[i], x);
+      }
+      row += i + 1;
+    }
+  }
+
+  /** target += a x, from a place on. */
+  private static void addRow(double[] target, int from, int length, double a, double[] x) {
     for (int j = 0; j < length; j++) {
-      target[from + j] += a * x[j] + b * y[j];
+      target[from + j] += a * x[j];
     }
   }
 
@@ -203,13 +247,17 @@ public final class ClusterMoments {
     if (clusters < 2) {
       return Double.NaN;
     }
-    double sum;
+    double sum = 0;
     if (i == j) {
       sum = Math.max(diagonal[i], 0);
-    } else {
+    } else if (triangle != null) {
       int row = Math.max(i, j);
-      int e = row * (row + 1) / 2 + Math.min(i, j);
-      sum = triangle == null ? 0 : triangle[e];
+      sum = triangle[row * (row + 1) / 2 + Math.min(i, j)];
+    } else {
+      for (Cluster cluster : few) {
+        double x = cluster.weight() * (cluster.mean()[i] - mean[i]);
+        sum += x * (cluster.weight() * (cluster.mean()[j] - mean[j]));
+      }
     }
     return sum / weight / weight * ((double) clusters / (clusters - 1));
   }
