@@ -29,10 +29,9 @@ class VorticesTest {
   private static final PeriodicGrid GRID = PeriodicGrid.of(Axis.of(N, 12), Axis.of(20, 10));
 
   /**
-   * Phase of a vortex pair on a torus of sides a and b. The stream function of a vortex at the
-   * origin and all its images, summed over the images along y in closed form, is f(z) = log sin(pi
-   * (x + i y)/a) for a row of images along x; rows at y + n b are added for |n| up to 12 (the rows
-   * of a pair converge like exp(-2 pi n b/a)), and the linear term -2 pi dx y/(a b) makes the phase
+   * Phase of a vortex pair on a torus of sides a and b. A vortex at the origin with all its images
+   * along x has the phase arg sin(pi (x + i y)/a); rows at y + n b are added for |n| up to 12 (the
+   * rows of a pair converge like exp(-2 pi n b/a)), and the linear term -2 pi dx y/(a b) makes the phase
    * periodic along y (derived: a pair displaced by dx lets the phase step by 2 pi dx/a over one
    * period in y).
    */
