@@ -107,8 +107,9 @@ class MemoryTest {
    * In units of the kept modes themselves (0.52 MB here). Each lane of the default has 6 states
    * (state, two sets of normals, start of the step, stage, force), 9 of tables of the linear flow
    * and its noise, repeated for each lane, and 8.1 of field and force at the positions, which are
-   * four times as many as the modes. The lanes of a thread share 3 more (transform, masses and such).
-   * A trajectory that no thread is advancing holds nothing. The test sees any further state or table.
+   * four times as many as the modes. The lanes of a thread share 3 more (transform, masses and
+   * such). A trajectory that no thread is advancing holds nothing. The test sees any further state
+   * or table.
    */
   @Test
   void whatAStepperHolds() throws IllegalAccessException {

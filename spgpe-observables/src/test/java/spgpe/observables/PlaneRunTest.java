@@ -59,9 +59,9 @@ class PlaneRunTest {
   }
 
   /**
-   * Thermometers, condensate fraction. Each value within 4 errors across 16 trajectories (false alarm
-   * 4 numbers x 1e-3 with 15 degrees of freedom); errors below 2 % see a wrong trace of the Hessian
-   * or a missing axis, which change 1/T by more than 10 %.
+   * Thermometers, condensate fraction. Each value within 4 errors across 16 trajectories (false
+   * alarm 2 numbers x 1e-3 with 15 degrees of freedom); errors below 2 % see a wrong trace of the
+   * Hessian or a missing axis, which change 1/T by more than 10 %.
    */
   @Test
   void thermometersAndCondensateFraction() {
@@ -101,8 +101,8 @@ class PlaneRunTest {
 
   /**
    * A cold cloud in a harmonic trap of radius sqrt(2 mu)/w = 2 (Thomas-Fermi): a box of side 10 is
-   * wide enough, one of side 4 ends where the cloud does. Nothing is left to chance: the ratios differ
-   * by a factor of hundreds.
+   * wide enough, one of side 4 ends where the cloud does. Nothing is left to chance: the ratios
+   * differ by a factor of hundreds.
    */
   @Test
   void theEdgeOfATrap() {
@@ -221,8 +221,8 @@ class PlaneRunTest {
 
   /**
    * Fluctuations of a Gaussian relative phase, spectrum T/((n/2)(k^2 + m^2)) with m = 0.8 up to the
-   * cutoff: the phase length is 1/m within 4 errors of the ratio it comes from, and the deviation of
-   * the smoothed cosine is that of frames smoothed one by one.
+   * cutoff: the phase length is 1/m within 4 errors of the ratio it comes from, and the deviation
+   * of the smoothed cosine is that of frames smoothed one by one.
    */
   @Test
   void metastableFluctuationsOnAPlane() {

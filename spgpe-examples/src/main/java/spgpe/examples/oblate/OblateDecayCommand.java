@@ -152,8 +152,8 @@ public final class OblateDecayCommand implements Callable<Integer> {
     PlanarBubble bubble = PlanarBubble.of(pair, BUBBLE_SIDE * phaseLength, BUBBLE_MODES);
     text.printf(
         Locale.ROOT,
-        "Critical bubble of the theory: E_b/T = %.2f (with 15 modes the state outlives the start from"
-            + " about 16 on)%n",
+        "Critical bubble of the theory: E_b/T = %.2f (with 15 modes the state outlives the start"
+            + " from about 16 on)%n",
         bubble.energy() / pair.temperature());
     text.flush();
     OblateRun run =

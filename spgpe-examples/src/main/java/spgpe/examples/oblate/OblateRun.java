@@ -58,8 +58,8 @@ record OblateRun(
    * @param fluctuations fluctuations of the metastable state
    * @param histories bubbles, one history for each trajectory
    * @param cosines frames of cos(relative phase)
-   * @param defects numbers of vortices of component 0 and of the relative phase, and the length of the
-   *     domain walls; see {@link Defects}
+   * @param defects numbers of vortices of component 0 and of the relative phase, and the length of
+   *     the domain walls; see {@link Defects}
    */
   record Outcome(
       MetastableFluctuations fluctuations, List<BubbleHistory> histories,

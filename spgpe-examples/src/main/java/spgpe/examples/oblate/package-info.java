@@ -1,4 +1,4 @@
-/** A two-dimensional example as a command: decay of a metastable relative phase in an oblate gas. */
+/** A two-dimensional example: decay of a metastable relative phase in an oblate gas. */
 @NullMarked
 package spgpe.examples.oblate;
 

@@ -17,8 +17,8 @@ import spgpe.units.Validity;
 import spgpe.units.Verdict;
 
 /**
- * An invented experiment: two hyperfine states of K-41 in a square box, squeezed by a light sheet to
- * two dimensions, coherently coupled, with relative phase pi made metastable by a biquadratic
+ * An invented experiment: two hyperfine states of K-41 in a square box, squeezed by a light sheet
+ * to two dimensions, coherently coupled, with relative phase pi made metastable by a biquadratic
  * coupling.
  *
  * @param side side of the box

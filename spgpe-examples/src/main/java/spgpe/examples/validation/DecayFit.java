@@ -33,16 +33,12 @@ record DecayFit(
 
   static DecayFit of(SpatialCorrelation first, TimeAverage average, Model model) {
     double[] r = first.distances(model);
-    int begin = 0;
-    while (r[begin] < SHORTEST) {
-      begin++;
-    }
-    int end = begin;
+    int from = (int) java.util.Arrays.stream(r).filter(d -> d < SHORTEST).count();
+    int end = from;
     while (end < r.length && average.mean(end) > CLEAR * average.standardError(end)) {
       end++;
     }
-    int from = begin;
-    int count = end - begin;
+    int count = end - from;
     if (count < 4) {
       throw new IllegalArgumentException(
           "too few distances with a clear correlation: " + count + "; use more trajectories");
@@ -53,7 +49,9 @@ record DecayFit(
       weights[i] = Math.pow(average.mean(from + i) / average.standardError(from + i), 2);
       logs[i] = Math.log(average.mean(from + i));
     }
-    double[] green = part(shellAverages(first, model, (x, y) -> green(model.region(), x, y)), from, count);
+    double[] green =
+        part(
+            shellAverages(first, model, (x, y) -> green(model.region(), x, y)), from, count);
     Estimate slope =
         average.derived(
             v -> {
@@ -66,7 +64,7 @@ record DecayFit(
     double xi = bestLength(first, model, from, logs, weights);
     return new DecayFit(
         slope, xi, misfit(green, logs, weights, slope(green, logs, weights)),
-        misfit(exponential(first, model, from, count, xi), logs, weights, 1), r[begin],
+        misfit(exponential(first, model, from, count, xi), logs, weights, 1), r[from],
         r[end - 1]);
   }
 

@@ -30,12 +30,13 @@ import spgpe.statistics.Estimate;
  * above the critical chemical potential.
  *
  * <p>Critical values: n lambda<sup>2</sup> = ln(380/(m g)), mu_c = (m g T/pi) ln(13.2/(m g)) for a
- * Bose gas (Prokof'ev, Ruebenacker, Svistunov, Phys. Rev. Lett. 87, 270402 (2001)). A classical field
- * cut at the kinetic energy e_c lacks the modes above. They lie at e + D, D = 2 g n - mu, and hold (m
- * T/(2 pi)) ln(T/(e_c + D)) atoms, which also raise mu by 2 g times that. With D = (m g T/pi)
- * ln(380/13.2) at the transition,
+ * Bose gas (Prokof'ev, Ruebenacker, Svistunov, Phys. Rev. Lett. 87, 270402 (2001)). A classical
+ * field cut at the kinetic energy e_c lacks the modes above. They lie at e + D, D = 2 g n - mu, and
+ * hold (m T/(2 pi)) ln(T/(e_c + D)) atoms, which also raise mu by 2 g times that. With D = (m g
+ * T/pi) ln(380/13.2) at the transition,
  *
- * <pre>n_c = (m T/(2 pi)) ln(380 (e_c + D)/(m g T)),   mu_c = (m g T/pi) ln(13.2 (e_c + D)/(m g T))</pre>
+ * <pre>n_c  = (m T/(2 pi)) ln(380 (e_c + D)/(m g T)),
+ * mu_c = (m g T/pi) ln(13.2 (e_c + D)/(m g T))</pre>
  *
  * <p>(derived, see docs/validation.md). With m = g = T = 1, which is no restriction for a classical
  * field, only e_c is left.

@@ -6,8 +6,8 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import org.junit.jupiter.api.Test;
 
 /**
- * Superfluid transition on a small square, L = 16: fixed seed. Nelson and Kosterlitz, Phys. Rev. Lett.
- * 39, 1201 (1977): eta = 1/4 at the transition.
+ * Superfluid transition on a small square, L = 16: fixed seed. Nelson and Kosterlitz, Phys. Rev.
+ * Lett. 39, 1201 (1977): eta = 1/4 at the transition.
  */
 class SuperfluidTransitionTest {
   private static SuperfluidTransition.Point run(double distance) {
@@ -17,9 +17,9 @@ class SuperfluidTransitionTest {
 
   /**
    * At mu_c eta = 1/4 within 4 errors (false alarm 6e-5, finite-size corrections of a few percent
-   * beside it); the error of about 0.02 sees a factor 2 in temperature or coupling, which doubles or
-   * halves eta. Below eta exceeds 1/4 by far and the exponential fits better, above it is the other
-   * way round: differences of more than ten errors.
+   * beside it); the error of about 0.02 sees a factor 2 in temperature or coupling, which doubles
+   * or halves eta. Below eta exceeds 1/4 by far and the exponential fits better, above it is the
+   * other way round: differences of more than ten errors.
    */
   @Test
   void algebraicAboveAndExponentialBelow() {

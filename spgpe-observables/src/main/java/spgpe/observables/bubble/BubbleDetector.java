@@ -11,8 +11,9 @@ import spgpe.run.TimeSeries;
 /**
  * Finds and follows bubbles of the stable state on a ring or a plane, in frames of an order
  * parameter such as the profile of cos phi. A bubble is a connected region (on a plane by the four
- * neighbours of a point) above the grow level; the seams are no borders. Bubbles are counted by births in single frames, not as connected pieces
- * of space-time, in which bubbles that merge later would be one.
+ * neighbours of a point) above the grow level; the seams are no borders. Bubbles are counted by
+ * births in single frames, not as connected pieces of space-time, in which bubbles that merge later
+ * would be one.
  *
  * <p>Frames should follow each other so closely that a bubble overlaps itself: interval times speed
  * below the width. Immutable and thread-safe.

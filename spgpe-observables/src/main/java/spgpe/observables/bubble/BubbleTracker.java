@@ -78,8 +78,8 @@ final class BubbleTracker {
 
   /**
    * For each bubble the region that shares most points with it (of equals that with the higher
-   * peak, a rule that does not depend on where the frame is cut), GONE if none does, NOT_THERE if it
-   * was not in the frame before.
+   * peak, a rule that does not depend on where the frame is cut), GONE if none does, NOT_THERE if
+   * it was not in the frame before.
    */
   private int[] heirs(List<Region> regions) {
     int[] heir = new int[bubbles.size()];

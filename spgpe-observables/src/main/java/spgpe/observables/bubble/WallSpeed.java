@@ -10,9 +10,9 @@ import spgpe.statistics.Estimate;
  * take the frames as independent; the spread between bubbles is the better error.
  *
  * <p>Linear: position = a + v t over a range of times; the mean speed there. Hyperbola: with the
- * radius r of the bubble (half the distance of the walls on a ring), r<sup>2</sup> = R0<sup>2</sup> + v<sup>2</sup>(t - t0)<sup>2</sup>,
- * the motion of a wall under constant tension and pressure with limiting speed v. Immutable and
- * thread-safe.
+ * radius r of the bubble (half the distance of the walls on a ring), r<sup>2</sup> = R0<sup>2</sup>
+ * + v<sup>2</sup>(t - t0)<sup>2</sup>, the motion of a wall under constant tension and pressure
+ * with limiting speed v. Immutable and thread-safe.
  *
  * @param speed v with its error
  * @param startTime t0 of the hyperbola; NaN for a linear fit

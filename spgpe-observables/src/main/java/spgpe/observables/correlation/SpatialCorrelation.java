@@ -22,13 +22,14 @@ import spgpe.run.Snapshot;
  *
  * <pre>C(r) = (1/V) integral over y of A(y) B(y + r),   mean of r and -r,</pre>
  *
- * <p>on a ring at the distances r = 0, dx, ..., floor(N/2) dx; on a plane as the mean over shells of
- * |r|, the shortest way around: r = 0 alone, then shells of the width w of the coarser spacing about
- * w, 2w, ... up to half of the shorter side. Each point of a shell counts once; {@link #distances}
- * are the means of |r| over the shells and {@link #weights} the numbers of points. For real profiles
- * the spatial means of A and B follow. Sum the samples up with {@link TimeAverage} and ask this observable for {@link
- * #raw}, {@link #connected}, {@link #relativeToZero} or {@link #relativeToMeans}, with errors
- * across trajectories. Immutable and thread-safe.
+ * <p>on a ring at the distances r = 0, dx, ..., floor(N/2) dx; on a plane as the mean over shells
+ * of |r|, the shortest way around: r = 0 alone, then shells of the width w of the coarser spacing
+ * about w, 2w, ... up to half of the shorter side. Each point of a shell counts once;
+ * {@link #distances} are the means of |r| over the shells and {@link #weights} the numbers of
+ * points. For real profiles the spatial means of A and B follow. Sum the samples up with
+ * {@link TimeAverage} and ask this observable for {@link #raw}, {@link #connected},
+ * {@link #relativeToZero} or {@link #relativeToMeans}, with errors across trajectories. Immutable
+ * and thread-safe.
  */
 public final class SpatialCorrelation implements Observable {
   @FunctionalInterface
@@ -229,8 +230,8 @@ public final class SpatialCorrelation implements Observable {
   }
 
   /**
-   * How many points of the grid have each distance: 1, 2, 2, ... on a ring, the points of the shells
-   * on a plane.
+   * How many points of the grid have each distance: 1, 2, 2, ... on a ring, the points of the
+   * shells on a plane.
    *
    * @param model the model that is run
    * @return new array, as long as {@link #distances}

@@ -91,8 +91,9 @@ public record EdgeDensity(double edge, double peak) {
         : Optional.of(
             String.format(
                 Locale.ROOT,
-                "the cloud reaches the edge of the periodic box: density at the edge=%.3g, peak=%.3g,"
-                    + " ratio=%.3g > %s; use a longer box or a tighter trap, centred in the box",
+                "the cloud reaches the edge of the periodic box: density at the edge=%.3g, peak="
+                    + "%.3g, ratio=%.3g > %s; use a longer box or a tighter trap, centred in the"
+                    + " box",
                 edge, peak, ratio(), LARGEST_RATIO));
   }
 }

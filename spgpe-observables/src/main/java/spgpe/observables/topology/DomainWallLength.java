@@ -7,15 +7,15 @@ import spgpe.run.Observable;
 import spgpe.run.Snapshot;
 
 /**
- * Length of the walls between domains on a plane: the length of the contour at which a profile, such
- * as cos phi, passes a level.
+ * Length of the walls between domains on a plane: the length of the contour at which a profile,
+ * such as cos phi, passes a level.
  *
  * <p>Marching squares: in each square between four neighbouring points the contour is a straight
  * line between the linearly interpolated crossings of its sides; where all four sides are crossed,
- * the mean of the four corners decides which crossings belong together. The length of a smooth
- * wall with the radius of curvature R is low by 0.06 (h/R)<sup>2</sup>, h the spacing (measured on
- * circles: 1.8 % at R = 2 h, 0.3 % at 5 h); a profile that jumps between two values within a spacing
- * gives steps and a length that is too long by up to 8 %.
+ * the mean of the four corners decides which crossings belong together. The length of a smooth wall
+ * with the radius of curvature R is low by 0.06 (h/R)<sup>2</sup>, h the spacing (measured on
+ * circles: 1.8 % at R = 2 h, 0.3 % at 5 h); a profile that jumps between two values within a
+ * spacing gives steps and a length that is too long by up to 8 %.
  */
 public final class DomainWallLength {
   private DomainWallLength() {}

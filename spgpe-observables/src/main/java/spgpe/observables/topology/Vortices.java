@@ -14,13 +14,13 @@ import spgpe.run.Snapshot;
 
 /**
  * Vortices of a phase on a plane: plaquettes, the squares between four neighbouring points, around
- * which the phase winds. The winding is the sum of the four phase steps, each by the shorter way, so
- * that it is -1, 0 or 1. Each step belongs to two plaquettes with opposite signs: the charges of a
- * periodic plane add up to zero exactly.
+ * which the phase winds. The winding is the sum of the four phase steps, each by the shorter way,
+ * so that it is -1, 0 or 1. Each step belongs to two plaquettes with opposite signs: the charges of
+ * a periodic plane add up to zero exactly.
  *
- * <p>In a field at finite temperature many vortices are pairs as close as the grid spacing that come
- * and go; their number grows with the momentum cutoff. Count those of a coarser field, or look at
- * what survives between frames, before calling them free vortices. For a vortex of the relative
+ * <p>In a field at finite temperature many vortices are pairs as close as the grid spacing that
+ * come and go; their number grows with the momentum cutoff. Count those of a coarser field, or look
+ * at what survives between frames, before calling them free vortices. For a vortex of the relative
  * phase, phi = arg(psi_1 psi_2<sup>*</sup>), the components wind against each other or one of them
  * alone.
  */

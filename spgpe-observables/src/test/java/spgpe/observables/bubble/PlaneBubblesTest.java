@@ -121,8 +121,8 @@ class PlaneBubblesTest {
   }
 
   /**
-   * Wall speed of r = sqrt(9 + 0.49 t^2) from the radius of equal area, t = 15..29: 0.688 (the secant
-   * of the exact radius is 0.6857), and limiting speed 0.7.
+   * Wall speed of r = sqrt(9 + 0.49 t^2) from the radius of equal area, t = 15..29: 0.688 (the
+   * secant of the exact radius is 0.6857), and limiting speed 0.7.
    */
   @Test
   void wallSpeedFromTheArea() {
@@ -184,9 +184,9 @@ class PlaneBubblesTest {
   /**
    * Smoothing and hysteresis reject noise: independent noise of deviation 0.7 on a disc of radius 6
    * in 40 fixed frames. A smoothed point outside has deviation 0.7/sqrt(4 pi 9) = 0.066 (smoothing
-   * of 3 spacings), so that grow and seed level -0.4 and 0 lie 9 and 15 deviations above -1: no false
-   * region at all is expected (probability below 1e-15 for the test); without smoothing there are
-   * hundreds.
+   * of 3 spacings), so that grow and seed level -0.4 and 0 lie 9 and 15 deviations above -1: no
+   * false region at all is expected (probability below 1e-15 for the test); without smoothing there
+   * are hundreds.
    */
   @Test
   void smoothingRejectsNoise() {

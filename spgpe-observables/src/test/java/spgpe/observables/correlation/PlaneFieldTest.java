@@ -27,9 +27,9 @@ import spgpe.run.Snapshot;
  * Estimators on Gaussian fields of planes whose correlations are known exactly, mode sums derived
  * (docs/theory.md). Seeds are fixed. A value passes within 4 standard errors, from 1500 independent
  * samples: false-alarm probability 6e-5 for each of the 70 values, 0.4 % for the class with another
- * seed. The largest allowed errors stand beside the checks: 2 % of the density for g1, which a shell
- * off by one changes by a quarter near the origin, 0.02 for g2. Weights and the shortest way around
- * are checked to rounding against sums over all pairs of points.
+ * seed. The largest allowed errors stand beside the checks: 2 % of the density for g1, which a
+ * shell off by one changes by a quarter near the origin, 0.02 for g2. Weights and the shortest way
+ * around are checked to rounding against sums over all pairs of points.
  */
 class PlaneFieldTest {
   private static final double LX = 12;

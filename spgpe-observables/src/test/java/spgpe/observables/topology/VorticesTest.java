@@ -29,11 +29,11 @@ class VorticesTest {
   private static final PeriodicGrid GRID = PeriodicGrid.of(Axis.of(N, 12), Axis.of(20, 10));
 
   /**
-   * Phase of a vortex pair on a torus of sides a and b. The stream function of a vortex at the origin
-   * and all its images, summed over the images along y in closed form, is f(z) = log sin(pi (x + i
-   * y)/a) for a row of images along x; rows at y + n b are added for |n| up to 12 (the rows of a pair
-   * converge like exp(-2 pi n b/a)), and the linear term -2 pi dx y/(a b) makes the phase periodic
-   * along y (derived: a pair displaced by dx lets the phase step by 2 pi dx/a over one period in y).
+   * Phase of a vortex pair on a torus of sides a and b. A vortex at the origin with all its images
+   * along x has the phase arg sin(pi (x + i y)/a); rows at y + n b are added for |n| up to 12 (the
+   * rows of a pair converge like exp(-2 pi n b/a)), and the linear term -2 pi dx y/(a b) makes the phase
+   * periodic along y (derived: a pair displaced by dx lets the phase step by 2 pi dx/a over one
+   * period in y).
    */
   private static double pairPhase(double x, double y, double[] plus, double[] minus, double a,
       double b) {
@@ -60,7 +60,9 @@ class VorticesTest {
     return phases;
   }
 
-  /** The planted phase itself: it must be periodic, or a seam of false vortices would be planted. */
+  /**
+   * The planted phase itself: it must be periodic, or a seam of false vortices would be planted.
+   */
   @Test
   void thePlantedPhaseIsPeriodic() {
     double[] plus = {3.1, 2.2};
@@ -76,7 +78,8 @@ class VorticesTest {
   }
 
   /**
-   * A pair anywhere, at every separation above three spacings: exactly these two are found, in their plaquettes or, if they lie within a tenth of a spacing of a side, in the next one.
+   * A pair anywhere, at every separation above three spacings: exactly these two are found, in
+   * their plaquettes or, if they lie within a tenth of a spacing of a side, in the next one.
    */
   @Property(tries = 400, seed = "2026")
   void aPlantedPairIsFound(
@@ -182,7 +185,8 @@ class VorticesTest {
 
   @Test
   void badInputIsRefused() {
-    String line = Fields.refusal(() -> Vortices.find(new double[4], PeriodicGrid.of(Axis.of(4, 1))));
+    String line =
+        Fields.refusal(() -> Vortices.find(new double[4], PeriodicGrid.of(Axis.of(4, 1))));
     assertTrue(line.contains("need a plane"), line);
     String few = Fields.refusal(() -> Vortices.find(new double[4], GRID));
     assertTrue(few.contains("phases=4, points=480"), few);
@@ -192,7 +196,9 @@ class VorticesTest {
     assertTrue(nan.contains("phases[3]=NaN"), nan);
   }
 
-  /** Length of a circle of radius r in spacings: low by a known small part; squares along the axes. */
+  /**
+   * Length of a circle of radius r in spacings: low by a known small part; squares along the axes.
+   */
   @Test
   void wallLengthOfCirclesAndLines() {
     PeriodicGrid grid = PeriodicGrid.of(Axis.of(64, 64), Axis.of(64, 64));
