@@ -4,6 +4,7 @@ import java.util.Arrays;
 import spgpe.fourier.FourierProvider;
 import spgpe.grid.PeriodicGrid;
 import spgpe.internal.check.Check;
+import spgpe.internal.lanes.LaneFourier;
 
 /**
  * The coherent region: the list of kept plane waves
@@ -207,6 +208,42 @@ public final class CoherentRegion {
     return grid.dimension() == 1
         ? new LineTransform(this, components, lanes, provider)
         : new PlaneTransform(this, components, lanes, provider);
+  }
+
+  /**
+   * Makes a transform like {@link #transform(int, int, FourierProvider)} by a given engine.
+   *
+   * @param components number of components, at least 1
+   * @param lanes realisations advanced together, at least 1
+   * @param provider Fourier back end, for regions the engine does not serve
+   * @param engine what does the transforms
+   * @return the transform
+   * @throws IllegalArgumentException if a number is not positive, or if the back end cannot
+   *     transform the points of an axis
+   * @throws IllegalStateException if the engine does not run here
+   */
+  public ModeTransform transform(
+      int components, int lanes, FourierProvider provider, Engine engine) {
+    Check.notNull(provider, "provider");
+    Check.notNull(engine, "engine");
+    Check.inRange(components, 1, 255, "components");
+    Check.inRange(lanes, 1, 4096, "lanes");
+    return engine == Engine.PROVIDER || grid.dimension() > 1 || !fillsHalfOfEachAxis()
+        ? transform(components, lanes, provider)
+        : new HalfBandLine(this, components, lanes, engine.kernels(lanes));
+  }
+
+  /** Whether the engines of this library serve the region. */
+  private boolean fillsHalfOfEachAxis() {
+    for (int axis = 0; axis < grid.dimension(); axis++) {
+      int points = grid.axis(axis).points();
+      if (Integer.bitCount(points) != 1
+          || points < 2 * LaneFourier.FEWEST_POINTS
+          || 4 * largestMode(axis) >= points) {
+        return false;
+      }
+    }
+    return true;
   }
 
   int gridIndex(int mode) {

@@ -42,6 +42,22 @@ public final class PointBlock {
     this.pointStride = pointStride;
   }
 
+  /** Points firstPoint, firstPoint + pointStride, ... from index begin on. */
+  PointBlock(
+      PeriodicGrid grid, int lanes, double[][] psiRe, double[][] psiIm, double[][] resultRe,
+      double[][] resultIm, int begin, int end, int firstPoint, int pointStride) {
+    this.grid = grid;
+    this.lanes = lanes;
+    this.psiRe = psiRe;
+    this.psiIm = psiIm;
+    this.resultRe = resultRe;
+    this.resultIm = resultIm;
+    this.begin = begin;
+    this.end = end;
+    this.firstPoint = firstPoint;
+    this.pointStride = pointStride;
+  }
+
   /**
    * A block of all points of a field, for use outside a {@link ModeTransform}, such as the gradient
    * test of a user's own term.

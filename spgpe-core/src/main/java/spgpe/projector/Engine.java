@@ -1,0 +1,69 @@
+package spgpe.projector;
+
+import java.util.Locale;
+import java.util.Optional;
+import spgpe.internal.check.Check;
+import spgpe.internal.lanes.Kernels;
+import spgpe.internal.lanes.LaneKernels;
+import spgpe.internal.lanes.ScalarKernels;
+
+/**
+ * What does the Fourier transforms of the force. The engines of this library serve regions that fill
+ * at most half of each axis (every |n| below a quarter of the points) on axes of a power of two, at
+ * least 32 points; other regions are transformed by the Fourier provider whatever the engine.
+ *
+ * <p>{@link #VECTOR} and {@link #PLAIN} give the same bits on every machine and for any number of
+ * lanes; {@link #PROVIDER} agrees with them to rounding.
+ */
+public enum Engine {
+  /** The fastest that runs here: {@link #VECTOR} if it can, else {@link #PLAIN}. */
+  AUTOMATIC,
+
+  /** Vector instructions; needs Java to be started with {@code --add-modules jdk.incubator.vector}. */
+  VECTOR,
+
+  /** The same transforms in plain Java. */
+  PLAIN,
+
+  /** The transforms of the {@link spgpe.fourier.FourierProvider}. */
+  PROVIDER;
+
+  /** System property that sets the engine of models that are not given one. */
+  public static final String PROPERTY = "spgpe.engine";
+
+  private static final System.Logger LOG = System.getLogger(Engine.class.getName());
+
+  /**
+   * The engine of the system property {@value #PROPERTY}, or {@link #AUTOMATIC} if it is not set.
+   *
+   * @return the engine that models have unless they are given another
+   * @throws IllegalArgumentException if the property names no engine
+   */
+  public static Engine ofSystemProperty() {
+    String name = System.getProperty(PROPERTY, "automatic");
+    for (Engine engine : values()) {
+      if (engine.name().toLowerCase(Locale.ROOT).equals(name)) {
+        return engine;
+      }
+    }
+    Check.argument(
+        false,
+        "system property %s must be automatic, vector, plain or provider: %s=%s",
+        PROPERTY, PROPERTY, name);
+    return AUTOMATIC;
+  }
+
+  /** The kernels for a number of lanes; plain ones where vectors do not fit. */
+  LaneKernels kernels(int lanes) {
+    Optional<LaneKernels> vector = this == PLAIN ? Optional.empty() : Kernels.vector();
+    Check.state(
+        this != VECTOR || vector.isPresent(),
+        "engine VECTOR needs the vector module: start Java with --add-modules jdk.incubator.vector");
+    boolean fits = vector.isPresent() && lanes % vector.get().width() == 0;
+    LOG.log(
+        System.Logger.Level.DEBUG,
+        "engine {0}: {1} for lanes={2}",
+        this, fits ? "vector instructions" : "plain Java", lanes);
+    return fits ? vector.get() : new ScalarKernels();
+  }
+}
