@@ -238,7 +238,7 @@ public final class CoherentRegion {
     for (int axis = 0; axis < grid.dimension(); axis++) {
       int points = grid.axis(axis).points();
       if (Integer.bitCount(points) != 1
-          || points < 2 * LaneFourier.FEWEST_POINTS
+          || points < LaneFourier.FEWEST_POINTS
           || 4 * largestMode(axis) >= points) {
         return false;
       }

@@ -7,40 +7,45 @@ import spgpe.internal.lanes.LaneKernels;
 import spgpe.internal.lanes.LaneLayout;
 
 /**
- * Transform of a line whose kept modes fill at most half of the axis. The values at the even points
- * and those at the odd points are then two transforms of half the length of the same modes, the
- * second with each mode turned by exp(2 pi i n/N); each half is worked on completely before the next,
- * and the full spectrum, most of it zero, is never made.
+ * Transform of a line whose kept modes fill at most half of the axis: each half of the points, the
+ * even and the odd ones, is worked on completely before the other, and the full spectrum, most of it
+ * zero, is never made.
  */
 final class HalfBandLine implements ModeTransform {
-  private static final int HALVES = 2;
-
   private final CoherentRegion region;
   private final int components;
   private final int lanes;
   private final LaneFourier fourier;
   private final LaneLayout layout;
+  private final SlotRuns runs;
+  private final double[][] slotsRe;
+  private final double[][] slotsIm;
+  private final double[][] sumRe;
+  private final double[][] sumIm;
   private final double[][] psiRe;
   private final double[][] psiIm;
   private final double[][] resultRe;
   private final double[][] resultIm;
+  private final int[][] points;
   private final PointBlock[][] blocks;
 
   HalfBandLine(CoherentRegion region, int components, int lanes, LaneKernels kernels) {
     this.region = region;
     this.components = components;
     this.lanes = lanes;
-    int half = region.grid().points() / HALVES;
-    int[] numbers = new int[region.modes()];
-    for (int m = 0; m < numbers.length; m++) {
-      numbers[m] = region.modeNumber(0, m);
-    }
+    int size = region.grid().points();
     double root = Math.sqrt(region.grid().volume());
-    this.fourier =
-        new LaneFourier(
-            half, lanes, numbers, new double[] {0, 0.5}, 1 / root,
-            root / region.grid().points(), kernels);
+    this.fourier = new LaneFourier(size, lanes, 1 / root, root / size, kernels);
     this.layout = fourier.layout();
+    int[] places = new int[region.modes()];
+    for (int m = 0; m < places.length; m++) {
+      places[m] = layout.at(fourier.slotOf(region.modeNumber(0, m)) * lanes);
+    }
+    this.runs = SlotRuns.of(places, lanes);
+    this.slotsRe = new double[components][];
+    this.slotsIm = new double[components][];
+    this.sumRe = new double[components][];
+    this.sumIm = new double[components][];
     this.psiRe = new double[components][];
     this.psiIm = new double[components][];
     this.resultRe = new double[components][];
@@ -50,16 +55,24 @@ final class HalfBandLine implements ModeTransform {
       psiIm[c] = layout.newArray(4 * c + 1);
       resultRe[c] = layout.newArray(4 * c + 2);
       resultIm[c] = layout.newArray(4 * c + 3);
+      slotsRe[c] = layout.newArray(4 * c);
+      slotsIm[c] = layout.newArray(4 * c + 1);
+      sumRe[c] = layout.newArray(4 * c + 2);
+      sumIm[c] = layout.newArray(4 * c + 3);
     }
+    this.points = new int[LaneFourier.HALVES][layout.points()];
     int chunk = layout.chunkPoints();
-    this.blocks = new PointBlock[HALVES][half / chunk];
-    for (int h = 0; h < HALVES; h++) {
+    this.blocks = new PointBlock[LaneFourier.HALVES][layout.points() / chunk];
+    for (int h = 0; h < LaneFourier.HALVES; h++) {
+      for (int row = 0; row < layout.points(); row++) {
+        points[h][row] = fourier.pointOf(h, row);
+      }
       for (int b = 0; b < blocks[h].length; b++) {
         int begin = layout.at(b * chunk * lanes);
         blocks[h][b] =
             new PointBlock(
                 region.grid(), lanes, psiRe, psiIm, resultRe, resultIm, begin,
-                begin + chunk * lanes, h + HALVES * b * chunk, HALVES);
+                begin + chunk * lanes, Arrays.copyOfRange(points[h], b * chunk, (b + 1) * chunk));
       }
     }
   }
@@ -68,14 +81,15 @@ final class HalfBandLine implements ModeTransform {
   public void toPosition(Amplitudes amplitudes, Field field) {
     Check.notNull(amplitudes, "amplitudes").requireShape(region, components, lanes);
     Check.notNull(field, "field").requireShape(region.grid(), components, lanes);
-    for (int h = 0; h < HALVES; h++) {
-      for (int c = 0; c < components; c++) {
-        fourier.inverse(h, amplitudes.re(c), amplitudes.im(c), psiRe[c], psiIm[c]);
-        for (int j = 0; j < layout.points(); j++) {
-          int from = layout.at(j * lanes);
-          int to = (HALVES * j + h) * lanes;
-          System.arraycopy(psiRe[c], from, field.re(c), to, lanes);
-          System.arraycopy(psiIm[c], from, field.im(c), to, lanes);
+    for (int c = 0; c < components; c++) {
+      runs.spread(amplitudes.re(c), slotsRe[c]);
+      runs.spread(amplitudes.im(c), slotsIm[c]);
+      for (int h = 0; h < LaneFourier.HALVES; h++) {
+        fourier.toPoints(h, slotsRe[c], slotsIm[c], psiRe[c], psiIm[c]);
+        for (int row = 0; row < layout.points(); row++) {
+          int from = layout.at(row * lanes);
+          System.arraycopy(psiRe[c], from, field.re(c), points[h][row] * lanes, lanes);
+          System.arraycopy(psiIm[c], from, field.im(c), points[h][row] * lanes, lanes);
         }
       }
     }
@@ -85,17 +99,17 @@ final class HalfBandLine implements ModeTransform {
   public void toModes(Field field, Amplitudes amplitudes) {
     Check.notNull(field, "field").requireShape(region.grid(), components, lanes);
     Check.notNull(amplitudes, "amplitudes").requireShape(region, components, lanes);
-    amplitudes.clear();
-    for (int h = 0; h < HALVES; h++) {
-      for (int c = 0; c < components; c++) {
-        for (int j = 0; j < layout.points(); j++) {
-          int to = layout.at(j * lanes);
-          int from = (HALVES * j + h) * lanes;
-          System.arraycopy(field.re(c), from, resultRe[c], to, lanes);
-          System.arraycopy(field.im(c), from, resultIm[c], to, lanes);
+    for (int c = 0; c < components; c++) {
+      for (int h = 0; h < LaneFourier.HALVES; h++) {
+        for (int row = 0; row < layout.points(); row++) {
+          int to = layout.at(row * lanes);
+          System.arraycopy(field.re(c), points[h][row] * lanes, resultRe[c], to, lanes);
+          System.arraycopy(field.im(c), points[h][row] * lanes, resultIm[c], to, lanes);
         }
-        fourier.forward(h, resultRe[c], resultIm[c], amplitudes.re(c), amplitudes.im(c));
+        fourier.toModes(h, resultRe[c], resultIm[c], sumRe[c], sumIm[c]);
       }
+      runs.collect(sumRe[c], amplitudes.re(c));
+      runs.collect(sumIm[c], amplitudes.im(c));
     }
   }
 
@@ -104,10 +118,13 @@ final class HalfBandLine implements ModeTransform {
     Check.notNull(amplitudes, "amplitudes").requireShape(region, components, lanes);
     Check.notNull(operation, "operation");
     Check.notNull(result, "result").requireShape(region, components, lanes);
-    result.clear();
-    for (int h = 0; h < HALVES; h++) {
+    for (int c = 0; c < components; c++) {
+      runs.spread(amplitudes.re(c), slotsRe[c]);
+      runs.spread(amplitudes.im(c), slotsIm[c]);
+    }
+    for (int h = 0; h < LaneFourier.HALVES; h++) {
       for (int c = 0; c < components; c++) {
-        fourier.inverse(h, amplitudes.re(c), amplitudes.im(c), psiRe[c], psiIm[c]);
+        fourier.toPoints(h, slotsRe[c], slotsIm[c], psiRe[c], psiIm[c]);
         Arrays.fill(resultRe[c], 0);
         Arrays.fill(resultIm[c], 0);
       }
@@ -115,8 +132,12 @@ final class HalfBandLine implements ModeTransform {
         operation.addTo(block);
       }
       for (int c = 0; c < components; c++) {
-        fourier.forward(h, resultRe[c], resultIm[c], result.re(c), result.im(c));
+        fourier.toModes(h, resultRe[c], resultIm[c], sumRe[c], sumIm[c]);
       }
+    }
+    for (int c = 0; c < components; c++) {
+      runs.collect(sumRe[c], result.re(c));
+      runs.collect(sumIm[c], result.im(c));
     }
   }
 }

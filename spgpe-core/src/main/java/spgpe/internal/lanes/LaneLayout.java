@@ -3,8 +3,8 @@ package spgpe.internal.lanes;
 /**
  * Where rows lie in an array: element times lanes, and a gap of 8 doubles after every chunk of some
  * thousand, so that rows whose distance is a power of two do not share the sets of a cache. A chunk
- * is a whole number of the blocks that a pass works on. Lanes that are not a power of two, and very
- * many, have no gaps. Immutable.
+ * is a whole number of the blocks that a pass works on. Lanes that are not a power of two have no
+ * gaps. Immutable.
  */
 public final class LaneLayout {
   private static final int SMALLEST_CHUNK = 512;
@@ -79,8 +79,8 @@ public final class LaneLayout {
   }
 
   /**
-   * Makes an array. Arrays of one workspace get different lengths, so that the same index of several
-   * of them does not mean the same place of a page: processors take such accesses for dependent.
+   * Makes an array. Arrays of one workspace get different lengths, so that the same index of
+   * several of them is not the same place of a page: processors take such accesses for dependent.
    *
    * @param number number of the array in its workspace
    * @return zeros

@@ -1,7 +1,7 @@
 package spgpe.internal.lanes;
 
 /**
- * Twiddle factors in the order of the blocks of a pass: block b of any pass has w = exp(-2 pi i
+ * Twiddle factors in the order of the blocks of a pass: block b of any pass has w = exp(2 pi i
  * r/(2B)) with r the bit reversal of b among the B blocks, whatever B is. Immutable.
  */
 final class Twiddles {
@@ -16,10 +16,10 @@ final class Twiddles {
     for (int b = 0; b < re.length; b += 2) {
       double angle = 2 * Math.PI * reversed(b, bits) / points;
       re[b] = Math.cos(angle);
-      im[b] = -Math.sin(angle);
-      // exactly -i times its neighbour: passes of radix 4 rely on it
-      re[b + 1] = im[b];
-      im[b + 1] = -re[b];
+      im[b] = Math.sin(angle);
+      // exactly i times its neighbour: passes of radix 4 rely on it
+      re[b + 1] = -im[b];
+      im[b + 1] = re[b];
     }
   }
 

@@ -18,41 +18,84 @@ final class VectorKernels implements LaneKernels {
   }
 
   @Override
-  public void forwardTop(
-      double[] re, double[] im, int length) {
-    for (int i = 0; i < length; i += WIDTH) {
+  public void fromModes(
+      double[] modesRe, double[] modesIm, double scale, double[] re, double[] im, int length) {
+    for (int i = 0, end = length; i < end; i += WIDTH) {
       int i1 = i + length;
       int i2 = i + 2 * length;
       int i3 = i + 3 * length;
-      DoubleVector re0 = DoubleVector.fromArray(S, re, i);
-      DoubleVector im0 = DoubleVector.fromArray(S, im, i);
-      DoubleVector re2 = DoubleVector.fromArray(S, re, i2);
-      DoubleVector im2 = DoubleVector.fromArray(S, im, i2);
+      DoubleVector re0 = DoubleVector.fromArray(S, modesRe, i).mul(scale);
+      DoubleVector im0 = DoubleVector.fromArray(S, modesIm, i).mul(scale);
+      DoubleVector re2 = DoubleVector.fromArray(S, modesRe, i2).mul(scale);
+      DoubleVector im2 = DoubleVector.fromArray(S, modesIm, i2).mul(scale);
       DoubleVector sumRe = re0.add(re2);
       DoubleVector sumIm = im0.add(im2);
       DoubleVector differenceRe = re0.sub(re2);
       DoubleVector differenceIm = im0.sub(im2);
-      DoubleVector re1 = DoubleVector.fromArray(S, re, i1);
-      DoubleVector im1 = DoubleVector.fromArray(S, im, i1);
-      DoubleVector re3 = DoubleVector.fromArray(S, re, i3);
-      DoubleVector im3 = DoubleVector.fromArray(S, im, i3);
+      DoubleVector re1 = DoubleVector.fromArray(S, modesRe, i1).mul(scale);
+      DoubleVector im1 = DoubleVector.fromArray(S, modesIm, i1).mul(scale);
+      DoubleVector re3 = DoubleVector.fromArray(S, modesRe, i3).mul(scale);
+      DoubleVector im3 = DoubleVector.fromArray(S, modesIm, i3).mul(scale);
       DoubleVector otherRe = re1.add(re3);
       DoubleVector otherIm = im1.add(im3);
-      DoubleVector turnedRe = im1.sub(im3);
-      DoubleVector turnedIm = re1.sub(re3);
+      DoubleVector turnedRe = re1.sub(re3);
+      DoubleVector turnedIm = im1.sub(im3);
       sumRe.add(otherRe).intoArray(re, i);
       sumIm.add(otherIm).intoArray(im, i);
       sumRe.sub(otherRe).intoArray(re, i1);
       sumIm.sub(otherIm).intoArray(im, i1);
-      differenceRe.add(turnedRe).intoArray(re, i2);
-      differenceIm.sub(turnedIm).intoArray(im, i2);
-      differenceRe.sub(turnedRe).intoArray(re, i3);
-      differenceIm.add(turnedIm).intoArray(im, i3);
+      differenceRe.sub(turnedIm).intoArray(re, i2);
+      differenceIm.add(turnedRe).intoArray(im, i2);
+      differenceRe.add(turnedIm).intoArray(re, i3);
+      differenceIm.sub(turnedRe).intoArray(im, i3);
     }
   }
 
   @Override
-  public void forward4(
+  public void fromModesTurned(
+      double[] modesRe, double[] modesIm, double scale, double wr, double wi, double vr, double vi,
+      double[] re, double[] im, int length) {
+    for (int i = 0, end = length; i < end; i += WIDTH) {
+      int i1 = i + length;
+      int i2 = i + 2 * length;
+      int i3 = i + 3 * length;
+      DoubleVector re2 = DoubleVector.fromArray(S, modesRe, i2);
+      DoubleVector im2 = DoubleVector.fromArray(S, modesIm, i2);
+      DoubleVector aRe = re2.mul(wr).sub(im2.mul(wi));
+      DoubleVector aIm = re2.mul(wi).add(im2.mul(wr));
+      DoubleVector re0 = DoubleVector.fromArray(S, modesRe, i).mul(scale);
+      DoubleVector im0 = DoubleVector.fromArray(S, modesIm, i).mul(scale);
+      DoubleVector sumRe = re0.add(aRe);
+      DoubleVector sumIm = im0.add(aIm);
+      DoubleVector differenceRe = re0.sub(aRe);
+      DoubleVector differenceIm = im0.sub(aIm);
+      DoubleVector re3 = DoubleVector.fromArray(S, modesRe, i3);
+      DoubleVector im3 = DoubleVector.fromArray(S, modesIm, i3);
+      DoubleVector bRe = re3.mul(wr).sub(im3.mul(wi));
+      DoubleVector bIm = re3.mul(wi).add(im3.mul(wr));
+      DoubleVector re1 = DoubleVector.fromArray(S, modesRe, i1).mul(scale);
+      DoubleVector im1 = DoubleVector.fromArray(S, modesIm, i1).mul(scale);
+      DoubleVector cRe = re1.add(bRe);
+      DoubleVector cIm = im1.add(bIm);
+      DoubleVector dRe = re1.sub(bRe);
+      DoubleVector dIm = im1.sub(bIm);
+      DoubleVector otherRe = cRe.mul(vr).sub(cIm.mul(vi));
+      DoubleVector otherIm = cRe.mul(vi).add(cIm.mul(vr));
+      DoubleVector turnedRe = dRe.mul(vr).sub(dIm.mul(vi));
+      DoubleVector turnedIm = dRe.mul(vi).add(dIm.mul(vr));
+      sumRe.add(otherRe).intoArray(re, i);
+      sumIm.add(otherIm).intoArray(im, i);
+      sumRe.sub(otherRe).intoArray(re, i1);
+      sumIm.sub(otherIm).intoArray(im, i1);
+      differenceRe.sub(turnedIm).intoArray(re, i2);
+      differenceIm.add(turnedRe).intoArray(im, i2);
+      differenceRe.add(turnedIm).intoArray(re, i3);
+      differenceIm.sub(turnedRe).intoArray(im, i3);
+    }
+  }
+
+  @Override
+  public void points4(
       double[] re, double[] im, double wr, double wi, double vr, double vi, int begin, int length) {
     for (int i = begin, end = begin + length; i < end; i += WIDTH) {
       int i1 = i + length;
@@ -80,22 +123,21 @@ final class VectorKernels implements LaneKernels {
       DoubleVector dIm = im1.sub(bIm);
       DoubleVector otherRe = cRe.mul(vr).sub(cIm.mul(vi));
       DoubleVector otherIm = cRe.mul(vi).add(cIm.mul(vr));
-      DoubleVector turnedRe = dRe.mul(vi).add(dIm.mul(vr));
-      DoubleVector turnedIm = dRe.mul(vr).sub(dIm.mul(vi));
+      DoubleVector turnedRe = dRe.mul(vr).sub(dIm.mul(vi));
+      DoubleVector turnedIm = dRe.mul(vi).add(dIm.mul(vr));
       sumRe.add(otherRe).intoArray(re, i);
       sumIm.add(otherIm).intoArray(im, i);
       sumRe.sub(otherRe).intoArray(re, i1);
       sumIm.sub(otherIm).intoArray(im, i1);
-      differenceRe.add(turnedRe).intoArray(re, i2);
-      differenceIm.sub(turnedIm).intoArray(im, i2);
-      differenceRe.sub(turnedRe).intoArray(re, i3);
-      differenceIm.add(turnedIm).intoArray(im, i3);
+      differenceRe.sub(turnedIm).intoArray(re, i2);
+      differenceIm.add(turnedRe).intoArray(im, i2);
+      differenceRe.add(turnedIm).intoArray(re, i3);
+      differenceIm.sub(turnedRe).intoArray(im, i3);
     }
   }
 
   @Override
-  public void forward2(
-      double[] re, double[] im, double wr, double wi, int begin, int length) {
+  public void points2(double[] re, double[] im, double wr, double wi, int begin, int length) {
     for (int i = begin, end = begin + length; i < end; i += WIDTH) {
       int i1 = i + length;
       DoubleVector re1 = DoubleVector.fromArray(S, re, i1);
@@ -112,189 +154,18 @@ final class VectorKernels implements LaneKernels {
   }
 
   @Override
-  public void inverseTop(
-      double[] re, double[] im, int length) {
-    for (int i = 0; i < length; i += WIDTH) {
-      int i1 = i + length;
-      int i2 = i + 2 * length;
-      int i3 = i + 3 * length;
-      DoubleVector re0 = DoubleVector.fromArray(S, re, i);
-      DoubleVector im0 = DoubleVector.fromArray(S, im, i);
-      DoubleVector re1 = DoubleVector.fromArray(S, re, i1);
-      DoubleVector im1 = DoubleVector.fromArray(S, im, i1);
-      DoubleVector sumRe = re0.add(re1);
-      DoubleVector sumIm = im0.add(im1);
-      DoubleVector cRe = re0.sub(re1);
-      DoubleVector cIm = im0.sub(im1);
-      DoubleVector re2 = DoubleVector.fromArray(S, re, i2);
-      DoubleVector im2 = DoubleVector.fromArray(S, im, i2);
-      DoubleVector re3 = DoubleVector.fromArray(S, re, i3);
-      DoubleVector im3 = DoubleVector.fromArray(S, im, i3);
-      DoubleVector differenceRe = re2.add(re3);
-      DoubleVector differenceIm = im2.add(im3);
-      DoubleVector dRe = re2.sub(re3);
-      DoubleVector dIm = im2.sub(im3);
-      sumRe.add(differenceRe).intoArray(re, i);
-      sumIm.add(differenceIm).intoArray(im, i);
-      cRe.sub(dIm).intoArray(re, i1);
-      cIm.add(dRe).intoArray(im, i1);
-      sumRe.sub(differenceRe).intoArray(re, i2);
-      sumIm.sub(differenceIm).intoArray(im, i2);
-      cRe.add(dIm).intoArray(re, i3);
-      cIm.sub(dRe).intoArray(im, i3);
-    }
-  }
-
-  @Override
-  public void inverse4(
-      double[] re, double[] im, double wr, double wi, double vr, double vi, int begin, int length) {
-    for (int i = begin, end = begin + length; i < end; i += WIDTH) {
-      int i1 = i + length;
-      int i2 = i + 2 * length;
-      int i3 = i + 3 * length;
-      DoubleVector re0 = DoubleVector.fromArray(S, re, i);
-      DoubleVector im0 = DoubleVector.fromArray(S, im, i);
-      DoubleVector re1 = DoubleVector.fromArray(S, re, i1);
-      DoubleVector im1 = DoubleVector.fromArray(S, im, i1);
-      DoubleVector sumRe = re0.add(re1);
-      DoubleVector sumIm = im0.add(im1);
-      DoubleVector cRe = re0.sub(re1);
-      DoubleVector cIm = im0.sub(im1);
-      DoubleVector re2 = DoubleVector.fromArray(S, re, i2);
-      DoubleVector im2 = DoubleVector.fromArray(S, im, i2);
-      DoubleVector re3 = DoubleVector.fromArray(S, re, i3);
-      DoubleVector im3 = DoubleVector.fromArray(S, im, i3);
-      DoubleVector differenceRe = re2.add(re3);
-      DoubleVector differenceIm = im2.add(im3);
-      DoubleVector dRe = re2.sub(re3);
-      DoubleVector dIm = im2.sub(im3);
-      DoubleVector otherRe = cRe.mul(vr).add(cIm.mul(vi));
-      DoubleVector otherIm = cIm.mul(vr).sub(cRe.mul(vi));
-      DoubleVector turnedRe = dIm.mul(vr).sub(dRe.mul(vi));
-      DoubleVector turnedIm = dRe.mul(vr).add(dIm.mul(vi));
-      DoubleVector aRe = sumRe.sub(differenceRe);
-      DoubleVector aIm = sumIm.sub(differenceIm);
-      DoubleVector bRe = otherRe.add(turnedRe);
-      DoubleVector bIm = otherIm.sub(turnedIm);
-      sumRe.add(differenceRe).intoArray(re, i);
-      sumIm.add(differenceIm).intoArray(im, i);
-      otherRe.sub(turnedRe).intoArray(re, i1);
-      otherIm.add(turnedIm).intoArray(im, i1);
-      aRe.mul(wr).add(aIm.mul(wi)).intoArray(re, i2);
-      aIm.mul(wr).sub(aRe.mul(wi)).intoArray(im, i2);
-      bRe.mul(wr).add(bIm.mul(wi)).intoArray(re, i3);
-      bIm.mul(wr).sub(bRe.mul(wi)).intoArray(im, i3);
-    }
-  }
-
-  @Override
-  public void inverse2(
-      double[] re, double[] im, double wr, double wi, int begin, int length) {
-    for (int i = begin, end = begin + length; i < end; i += WIDTH) {
-      int i1 = i + length;
-      DoubleVector re0 = DoubleVector.fromArray(S, re, i);
-      DoubleVector im0 = DoubleVector.fromArray(S, im, i);
-      DoubleVector re1 = DoubleVector.fromArray(S, re, i1);
-      DoubleVector im1 = DoubleVector.fromArray(S, im, i1);
-      DoubleVector aRe = re0.sub(re1);
-      DoubleVector aIm = im0.sub(im1);
-      re0.add(re1).intoArray(re, i);
-      im0.add(im1).intoArray(im, i);
-      aRe.mul(wr).add(aIm.mul(wi)).intoArray(re, i1);
-      aIm.mul(wr).sub(aRe.mul(wi)).intoArray(im, i1);
-    }
-  }
-
-  @Override
-  public void inverseEdge(
-      ModeEdge edge, double[] modesRe, double[] modesIm, double[] re, double[] im, int firstBlock,
-      int lastBlock) {
-    int[] places = edge.places;
-    double[] factorRe = edge.factorRe;
-    double[] factorIm = edge.factorIm;
-    double[] twiddleRe = edge.twiddles.re;
-    double[] twiddleIm = edge.twiddles.im;
-    int lanes = edge.layout.lanes();
-    for (int block = firstBlock, lane = 0; block < lastBlock; ) {
-      int row = 4 * block;
+  public void pointLeaves(
+      double[] re, double[] im, LaneFourier.Leaves leaves, int firstBlock, int lastBlock,
+      int firstRow) {
+    double[] twiddleRe = leaves.twiddles().re;
+    double[] twiddleIm = leaves.twiddles().im;
+    int lanes = leaves.layout().lanes();
+    for (int block = firstBlock, row = firstRow, lane = 0; block < lastBlock; ) {
       double wr = twiddleRe[block];
       double wi = twiddleIm[block];
       double vr = twiddleRe[2 * block];
       double vi = twiddleIm[2 * block];
-      int i = edge.layout.at(row * lanes) + lane;
-      int i1 = i + lanes;
-      int i2 = i + 2 * lanes;
-      int i3 = i + 3 * lanes;
-      int m0 = places[row] + lane;
-      DoubleVector modeRe0 = DoubleVector.fromArray(S, modesRe, m0);
-      DoubleVector modeIm0 = DoubleVector.fromArray(S, modesIm, m0);
-      DoubleVector re0 = modeRe0.mul(factorRe[row]).sub(modeIm0.mul(factorIm[row]));
-      DoubleVector im0 = modeRe0.mul(factorIm[row]).add(modeIm0.mul(factorRe[row]));
-      int m1 = places[row + 1] + lane;
-      DoubleVector modeRe1 = DoubleVector.fromArray(S, modesRe, m1);
-      DoubleVector modeIm1 = DoubleVector.fromArray(S, modesIm, m1);
-      DoubleVector re1 = modeRe1.mul(factorRe[row + 1]).sub(modeIm1.mul(factorIm[row + 1]));
-      DoubleVector im1 = modeRe1.mul(factorIm[row + 1]).add(modeIm1.mul(factorRe[row + 1]));
-      DoubleVector sumRe = re0.add(re1);
-      DoubleVector sumIm = im0.add(im1);
-      DoubleVector cRe = re0.sub(re1);
-      DoubleVector cIm = im0.sub(im1);
-      int m2 = places[row + 2] + lane;
-      DoubleVector modeRe2 = DoubleVector.fromArray(S, modesRe, m2);
-      DoubleVector modeIm2 = DoubleVector.fromArray(S, modesIm, m2);
-      DoubleVector re2 = modeRe2.mul(factorRe[row + 2]).sub(modeIm2.mul(factorIm[row + 2]));
-      DoubleVector im2 = modeRe2.mul(factorIm[row + 2]).add(modeIm2.mul(factorRe[row + 2]));
-      int m3 = places[row + 3] + lane;
-      DoubleVector modeRe3 = DoubleVector.fromArray(S, modesRe, m3);
-      DoubleVector modeIm3 = DoubleVector.fromArray(S, modesIm, m3);
-      DoubleVector re3 = modeRe3.mul(factorRe[row + 3]).sub(modeIm3.mul(factorIm[row + 3]));
-      DoubleVector im3 = modeRe3.mul(factorIm[row + 3]).add(modeIm3.mul(factorRe[row + 3]));
-      DoubleVector differenceRe = re2.add(re3);
-      DoubleVector differenceIm = im2.add(im3);
-      DoubleVector dRe = re2.sub(re3);
-      DoubleVector dIm = im2.sub(im3);
-      DoubleVector otherRe = cRe.mul(vr).add(cIm.mul(vi));
-      DoubleVector otherIm = cIm.mul(vr).sub(cRe.mul(vi));
-      DoubleVector turnedRe = dIm.mul(vr).sub(dRe.mul(vi));
-      DoubleVector turnedIm = dRe.mul(vr).add(dIm.mul(vi));
-      DoubleVector aRe = sumRe.sub(differenceRe);
-      DoubleVector aIm = sumIm.sub(differenceIm);
-      DoubleVector bRe = otherRe.add(turnedRe);
-      DoubleVector bIm = otherIm.sub(turnedIm);
-      sumRe.add(differenceRe).intoArray(re, i);
-      sumIm.add(differenceIm).intoArray(im, i);
-      otherRe.sub(turnedRe).intoArray(re, i1);
-      otherIm.add(turnedIm).intoArray(im, i1);
-      aRe.mul(wr).add(aIm.mul(wi)).intoArray(re, i2);
-      aIm.mul(wr).sub(aRe.mul(wi)).intoArray(im, i2);
-      bRe.mul(wr).add(bIm.mul(wi)).intoArray(re, i3);
-      bIm.mul(wr).sub(bRe.mul(wi)).intoArray(im, i3);
-      lane += WIDTH;
-      if (lane == lanes) {
-        lane = 0;
-        block++;
-      }
-    }
-  }
-
-  @Override
-  public void forwardEdge(
-      ModeEdge edge, double[] re, double[] im, double[] modesRe, double[] modesIm, int firstBlock,
-      int lastBlock) {
-    int[] places = edge.places;
-    boolean[] kept = edge.kept;
-    double[] factorRe = edge.factorRe;
-    double[] factorIm = edge.factorIm;
-    double[] twiddleRe = edge.twiddles.re;
-    double[] twiddleIm = edge.twiddles.im;
-    int lanes = edge.layout.lanes();
-    for (int block = firstBlock, lane = 0; block < lastBlock; ) {
-      int row = 4 * block;
-      double wr = twiddleRe[block];
-      double wi = twiddleIm[block];
-      double vr = twiddleRe[2 * block];
-      double vi = twiddleIm[2 * block];
-      int i = edge.layout.at(row * lanes) + lane;
+      int i = leaves.layout().at(row * lanes) + lane;
       int i1 = i + lanes;
       int i2 = i + 2 * lanes;
       int i3 = i + 3 * lanes;
@@ -320,49 +191,223 @@ final class VectorKernels implements LaneKernels {
       DoubleVector dIm = im1.sub(bIm);
       DoubleVector otherRe = cRe.mul(vr).sub(cIm.mul(vi));
       DoubleVector otherIm = cRe.mul(vi).add(cIm.mul(vr));
-      DoubleVector turnedRe = dRe.mul(vi).add(dIm.mul(vr));
-      DoubleVector turnedIm = dRe.mul(vr).sub(dIm.mul(vi));
-      if (kept[row]) {
-        int m = places[row] + lane;
-        DoubleVector x = sumRe.add(otherRe);
-        DoubleVector y = sumIm.add(otherIm);
-        DoubleVector.fromArray(S, modesRe, m)
-            .add(x.mul(factorRe[row]).sub(y.mul(factorIm[row]))).intoArray(modesRe, m);
-        DoubleVector.fromArray(S, modesIm, m).add(x.mul(factorIm[row])
-            .add(y.mul(factorRe[row]))).intoArray(modesIm, m);
-      }
-      if (kept[row + 1]) {
-        int m = places[row + 1] + lane;
-        DoubleVector x = sumRe.sub(otherRe);
-        DoubleVector y = sumIm.sub(otherIm);
-        DoubleVector.fromArray(S, modesRe, m)
-            .add(x.mul(factorRe[row + 1]).sub(y.mul(factorIm[row + 1]))).intoArray(modesRe, m);
-        DoubleVector.fromArray(S, modesIm, m).add(x.mul(factorIm[row + 1])
-            .add(y.mul(factorRe[row + 1]))).intoArray(modesIm, m);
-      }
-      if (kept[row + 2]) {
-        int m = places[row + 2] + lane;
-        DoubleVector x = differenceRe.add(turnedRe);
-        DoubleVector y = differenceIm.sub(turnedIm);
-        DoubleVector.fromArray(S, modesRe, m)
-            .add(x.mul(factorRe[row + 2]).sub(y.mul(factorIm[row + 2]))).intoArray(modesRe, m);
-        DoubleVector.fromArray(S, modesIm, m).add(x.mul(factorIm[row + 2])
-            .add(y.mul(factorRe[row + 2]))).intoArray(modesIm, m);
-      }
-      if (kept[row + 3]) {
-        int m = places[row + 3] + lane;
-        DoubleVector x = differenceRe.sub(turnedRe);
-        DoubleVector y = differenceIm.add(turnedIm);
-        DoubleVector.fromArray(S, modesRe, m)
-            .add(x.mul(factorRe[row + 3]).sub(y.mul(factorIm[row + 3]))).intoArray(modesRe, m);
-        DoubleVector.fromArray(S, modesIm, m).add(x.mul(factorIm[row + 3])
-            .add(y.mul(factorRe[row + 3]))).intoArray(modesIm, m);
-      }
+      DoubleVector turnedRe = dRe.mul(vr).sub(dIm.mul(vi));
+      DoubleVector turnedIm = dRe.mul(vi).add(dIm.mul(vr));
+      sumRe.add(otherRe).intoArray(re, i);
+      sumIm.add(otherIm).intoArray(im, i);
+      sumRe.sub(otherRe).intoArray(re, i1);
+      sumIm.sub(otherIm).intoArray(im, i1);
+      differenceRe.sub(turnedIm).intoArray(re, i2);
+      differenceIm.add(turnedRe).intoArray(im, i2);
+      differenceRe.add(turnedIm).intoArray(re, i3);
+      differenceIm.sub(turnedRe).intoArray(im, i3);
       lane += WIDTH;
       if (lane == lanes) {
         lane = 0;
         block++;
+        row += 4;
       }
+    }
+  }
+
+  @Override
+  public void modeLeaves(
+      double[] re, double[] im, LaneFourier.Leaves leaves, int firstBlock, int lastBlock,
+      int firstRow) {
+    double[] twiddleRe = leaves.twiddles().re;
+    double[] twiddleIm = leaves.twiddles().im;
+    int lanes = leaves.layout().lanes();
+    for (int block = firstBlock, row = firstRow, lane = 0; block < lastBlock; ) {
+      double wr = twiddleRe[block];
+      double wi = twiddleIm[block];
+      double vr = twiddleRe[2 * block];
+      double vi = twiddleIm[2 * block];
+      int i = leaves.layout().at(row * lanes) + lane;
+      int i1 = i + lanes;
+      int i2 = i + 2 * lanes;
+      int i3 = i + 3 * lanes;
+      DoubleVector re0 = DoubleVector.fromArray(S, re, i);
+      DoubleVector im0 = DoubleVector.fromArray(S, im, i);
+      DoubleVector re1 = DoubleVector.fromArray(S, re, i1);
+      DoubleVector im1 = DoubleVector.fromArray(S, im, i1);
+      DoubleVector sumRe = re0.add(re1);
+      DoubleVector sumIm = im0.add(im1);
+      DoubleVector cRe = re0.sub(re1);
+      DoubleVector cIm = im0.sub(im1);
+      DoubleVector re2 = DoubleVector.fromArray(S, re, i2);
+      DoubleVector im2 = DoubleVector.fromArray(S, im, i2);
+      DoubleVector re3 = DoubleVector.fromArray(S, re, i3);
+      DoubleVector im3 = DoubleVector.fromArray(S, im, i3);
+      DoubleVector otherRe = re2.add(re3);
+      DoubleVector otherIm = im2.add(im3);
+      DoubleVector dRe = re2.sub(re3);
+      DoubleVector dIm = im2.sub(im3);
+      DoubleVector differenceRe = cRe.mul(vr).add(cIm.mul(vi));
+      DoubleVector differenceIm = cIm.mul(vr).sub(cRe.mul(vi));
+      DoubleVector turnedRe = dRe.mul(vr).add(dIm.mul(vi));
+      DoubleVector turnedIm = dIm.mul(vr).sub(dRe.mul(vi));
+      DoubleVector aRe = sumRe.sub(otherRe);
+      DoubleVector aIm = sumIm.sub(otherIm);
+      DoubleVector bRe = differenceRe.sub(turnedIm);
+      DoubleVector bIm = differenceIm.add(turnedRe);
+      sumRe.add(otherRe).intoArray(re, i);
+      sumIm.add(otherIm).intoArray(im, i);
+      differenceRe.add(turnedIm).intoArray(re, i1);
+      differenceIm.sub(turnedRe).intoArray(im, i1);
+      aRe.mul(wr).add(aIm.mul(wi)).intoArray(re, i2);
+      aIm.mul(wr).sub(aRe.mul(wi)).intoArray(im, i2);
+      bRe.mul(wr).add(bIm.mul(wi)).intoArray(re, i3);
+      bIm.mul(wr).sub(bRe.mul(wi)).intoArray(im, i3);
+      lane += WIDTH;
+      if (lane == lanes) {
+        lane = 0;
+        block++;
+        row += 4;
+      }
+    }
+  }
+
+  @Override
+  public void modes2(double[] re, double[] im, double wr, double wi, int begin, int length) {
+    for (int i = begin, end = begin + length; i < end; i += WIDTH) {
+      int i1 = i + length;
+      DoubleVector re0 = DoubleVector.fromArray(S, re, i);
+      DoubleVector im0 = DoubleVector.fromArray(S, im, i);
+      DoubleVector re1 = DoubleVector.fromArray(S, re, i1);
+      DoubleVector im1 = DoubleVector.fromArray(S, im, i1);
+      DoubleVector aRe = re0.sub(re1);
+      DoubleVector aIm = im0.sub(im1);
+      re0.add(re1).intoArray(re, i);
+      im0.add(im1).intoArray(im, i);
+      aRe.mul(wr).add(aIm.mul(wi)).intoArray(re, i1);
+      aIm.mul(wr).sub(aRe.mul(wi)).intoArray(im, i1);
+    }
+  }
+
+  @Override
+  public void modes4(
+      double[] re, double[] im, double wr, double wi, double vr, double vi, int begin, int length) {
+    for (int i = begin, end = begin + length; i < end; i += WIDTH) {
+      int i1 = i + length;
+      int i2 = i + 2 * length;
+      int i3 = i + 3 * length;
+      DoubleVector re0 = DoubleVector.fromArray(S, re, i);
+      DoubleVector im0 = DoubleVector.fromArray(S, im, i);
+      DoubleVector re1 = DoubleVector.fromArray(S, re, i1);
+      DoubleVector im1 = DoubleVector.fromArray(S, im, i1);
+      DoubleVector sumRe = re0.add(re1);
+      DoubleVector sumIm = im0.add(im1);
+      DoubleVector cRe = re0.sub(re1);
+      DoubleVector cIm = im0.sub(im1);
+      DoubleVector re2 = DoubleVector.fromArray(S, re, i2);
+      DoubleVector im2 = DoubleVector.fromArray(S, im, i2);
+      DoubleVector re3 = DoubleVector.fromArray(S, re, i3);
+      DoubleVector im3 = DoubleVector.fromArray(S, im, i3);
+      DoubleVector otherRe = re2.add(re3);
+      DoubleVector otherIm = im2.add(im3);
+      DoubleVector dRe = re2.sub(re3);
+      DoubleVector dIm = im2.sub(im3);
+      DoubleVector differenceRe = cRe.mul(vr).add(cIm.mul(vi));
+      DoubleVector differenceIm = cIm.mul(vr).sub(cRe.mul(vi));
+      DoubleVector turnedRe = dRe.mul(vr).add(dIm.mul(vi));
+      DoubleVector turnedIm = dIm.mul(vr).sub(dRe.mul(vi));
+      DoubleVector aRe = sumRe.sub(otherRe);
+      DoubleVector aIm = sumIm.sub(otherIm);
+      DoubleVector bRe = differenceRe.sub(turnedIm);
+      DoubleVector bIm = differenceIm.add(turnedRe);
+      sumRe.add(otherRe).intoArray(re, i);
+      sumIm.add(otherIm).intoArray(im, i);
+      differenceRe.add(turnedIm).intoArray(re, i1);
+      differenceIm.sub(turnedRe).intoArray(im, i1);
+      aRe.mul(wr).add(aIm.mul(wi)).intoArray(re, i2);
+      aIm.mul(wr).sub(aRe.mul(wi)).intoArray(im, i2);
+      bRe.mul(wr).add(bIm.mul(wi)).intoArray(re, i3);
+      bIm.mul(wr).sub(bRe.mul(wi)).intoArray(im, i3);
+    }
+  }
+
+  @Override
+  public void intoModes(
+      double[] re, double[] im, double scale, double[] modesRe, double[] modesIm, int length) {
+    for (int i = 0, end = length; i < end; i += WIDTH) {
+      int i1 = i + length;
+      int i2 = i + 2 * length;
+      int i3 = i + 3 * length;
+      DoubleVector re0 = DoubleVector.fromArray(S, re, i);
+      DoubleVector im0 = DoubleVector.fromArray(S, im, i);
+      DoubleVector re1 = DoubleVector.fromArray(S, re, i1);
+      DoubleVector im1 = DoubleVector.fromArray(S, im, i1);
+      DoubleVector sumRe = re0.add(re1);
+      DoubleVector sumIm = im0.add(im1);
+      DoubleVector cRe = re0.sub(re1);
+      DoubleVector cIm = im0.sub(im1);
+      DoubleVector re2 = DoubleVector.fromArray(S, re, i2);
+      DoubleVector im2 = DoubleVector.fromArray(S, im, i2);
+      DoubleVector re3 = DoubleVector.fromArray(S, re, i3);
+      DoubleVector im3 = DoubleVector.fromArray(S, im, i3);
+      DoubleVector otherRe = re2.add(re3);
+      DoubleVector otherIm = im2.add(im3);
+      DoubleVector dRe = re2.sub(re3);
+      DoubleVector dIm = im2.sub(im3);
+      sumRe.add(otherRe).mul(scale).intoArray(modesRe, i);
+      sumIm.add(otherIm).mul(scale).intoArray(modesIm, i);
+      cRe.add(dIm).mul(scale).intoArray(modesRe, i1);
+      cIm.sub(dRe).mul(scale).intoArray(modesIm, i1);
+      sumRe.sub(otherRe).mul(scale).intoArray(modesRe, i2);
+      sumIm.sub(otherIm).mul(scale).intoArray(modesIm, i2);
+      cRe.sub(dIm).mul(scale).intoArray(modesRe, i3);
+      cIm.add(dRe).mul(scale).intoArray(modesIm, i3);
+    }
+  }
+
+  @Override
+  public void addToModesTurned(
+      double[] re, double[] im, double scale, double wr, double wi, double vr, double vi,
+      double[] modesRe, double[] modesIm, int length) {
+    for (int i = 0, end = length; i < end; i += WIDTH) {
+      int i1 = i + length;
+      int i2 = i + 2 * length;
+      int i3 = i + 3 * length;
+      DoubleVector re0 = DoubleVector.fromArray(S, re, i);
+      DoubleVector im0 = DoubleVector.fromArray(S, im, i);
+      DoubleVector re1 = DoubleVector.fromArray(S, re, i1);
+      DoubleVector im1 = DoubleVector.fromArray(S, im, i1);
+      DoubleVector sumRe = re0.add(re1);
+      DoubleVector sumIm = im0.add(im1);
+      DoubleVector cRe = re0.sub(re1);
+      DoubleVector cIm = im0.sub(im1);
+      DoubleVector re2 = DoubleVector.fromArray(S, re, i2);
+      DoubleVector im2 = DoubleVector.fromArray(S, im, i2);
+      DoubleVector re3 = DoubleVector.fromArray(S, re, i3);
+      DoubleVector im3 = DoubleVector.fromArray(S, im, i3);
+      DoubleVector otherRe = re2.add(re3);
+      DoubleVector otherIm = im2.add(im3);
+      DoubleVector dRe = re2.sub(re3);
+      DoubleVector dIm = im2.sub(im3);
+      DoubleVector differenceRe = cRe.mul(vr).add(cIm.mul(vi));
+      DoubleVector differenceIm = cIm.mul(vr).sub(cRe.mul(vi));
+      DoubleVector turnedRe = dRe.mul(vr).add(dIm.mul(vi));
+      DoubleVector turnedIm = dIm.mul(vr).sub(dRe.mul(vi));
+      DoubleVector aRe = sumRe.sub(otherRe);
+      DoubleVector aIm = sumIm.sub(otherIm);
+      DoubleVector bRe = differenceRe.sub(turnedIm);
+      DoubleVector bIm = differenceIm.add(turnedRe);
+      DoubleVector.fromArray(S, modesRe, i)
+          .add(sumRe.add(otherRe).mul(scale)).intoArray(modesRe, i);
+      DoubleVector.fromArray(S, modesIm, i)
+          .add(sumIm.add(otherIm).mul(scale)).intoArray(modesIm, i);
+      DoubleVector.fromArray(S, modesRe, i1)
+          .add(differenceRe.add(turnedIm).mul(scale)).intoArray(modesRe, i1);
+      DoubleVector.fromArray(S, modesIm, i1)
+          .add(differenceIm.sub(turnedRe).mul(scale)).intoArray(modesIm, i1);
+      DoubleVector.fromArray(S, modesRe, i2)
+          .add(aRe.mul(wr).add(aIm.mul(wi))).intoArray(modesRe, i2);
+      DoubleVector.fromArray(S, modesIm, i2)
+          .add(aIm.mul(wr).sub(aRe.mul(wi))).intoArray(modesIm, i2);
+      DoubleVector.fromArray(S, modesRe, i3)
+          .add(bRe.mul(wr).add(bIm.mul(wi))).intoArray(modesRe, i3);
+      DoubleVector.fromArray(S, modesIm, i3)
+          .add(bIm.mul(wr).sub(bRe.mul(wi))).intoArray(modesIm, i3);
     }
   }
 }
