@@ -3,9 +3,9 @@ package spgpe.projector;
 import java.util.Locale;
 import java.util.Optional;
 import spgpe.internal.check.Check;
-import spgpe.internal.lanes.Kernels;
 import spgpe.internal.lanes.LaneKernels;
 import spgpe.internal.lanes.ScalarKernels;
+import spgpe.internal.vector.VectorModule;
 
 /**
  * What does the Fourier transforms of the force. The engines of this library serve regions that fill
@@ -55,7 +55,10 @@ public enum Engine {
 
   /** The kernels for a number of lanes; plain ones where vectors do not fit. */
   LaneKernels kernels(int lanes) {
-    Optional<LaneKernels> vector = this == PLAIN ? Optional.empty() : Kernels.vector();
+    Optional<LaneKernels> vector =
+        this == PLAIN
+            ? Optional.empty()
+            : VectorModule.find("spgpe.internal.lanes.VectorKernels", LaneKernels.class);
     Check.state(
         this != VECTOR || vector.isPresent(),
         "engine VECTOR needs the vector module: start Java with --add-modules jdk.incubator.vector");

@@ -8,9 +8,12 @@ import jdk.incubator.vector.VectorSpecies;
  * loop in each method, and no vector leaves its method: longer methods are given up by the first
  * compiler, and vectors handed to other methods are objects.
  */
-final class VectorKernels implements LaneKernels {
+public final class VectorKernels implements LaneKernels {
   private static final VectorSpecies<Double> S = DoubleVector.SPECIES_256;
   private static final int WIDTH = S.length();
+
+  /** Made by name, since the class may not load everywhere. */
+  public VectorKernels() {}
 
   @Override
   public int width() {
