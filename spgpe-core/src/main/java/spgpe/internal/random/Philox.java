@@ -10,11 +10,11 @@ package spgpe.internal.random;
  */
 public final class Philox {
   private static final long LOW_WORD = 0xffffffffL;
-  static final long MULTIPLIER_0 = 0xD2511F53L;
-  static final long MULTIPLIER_1 = 0xCD9E8D57L;
-  static final int KEY_STEP_0 = 0x9E3779B9;
-  static final int KEY_STEP_1 = 0xBB67AE85;
-  static final int ROUNDS = 10;
+  private static final long MULTIPLIER_0 = 0xD2511F53L;
+  private static final long MULTIPLIER_1 = 0xCD9E8D57L;
+  private static final int KEY_STEP_0 = 0x9E3779B9;
+  private static final int KEY_STEP_1 = 0xBB67AE85;
+  private static final int ROUNDS = 10;
 
   private Philox() {}
 

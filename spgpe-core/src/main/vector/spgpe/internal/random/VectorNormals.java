@@ -7,15 +7,14 @@ import jdk.incubator.vector.VectorOperators;
 import jdk.incubator.vector.VectorSpecies;
 
 /**
- * {@link NormalKernels} with vector instructions, operation by operation those of {@link Philox} and
- * {@link BoxMuller}. Whole numbers below 2^52 become doubles by writing them into the fraction of
+ * {@link NormalKernels} with vector instructions, operation by operation those of {@link BoxMuller};
+ * the loops of {@link Philox} the compiler turns into vector code of its own that is as fast. Whole numbers below 2^52 become doubles by writing them into the fraction of
  * 2^52, which is exact. What does not fill a vector is left to {@link PlainNormals}.
  */
 public final class VectorNormals implements NormalKernels {
   private static final VectorSpecies<Double> D = DoubleVector.SPECIES_256;
   private static final VectorSpecies<Long> L = LongVector.SPECIES_256;
   private static final int WIDTH = D.length();
-  private static final long LOW_WORD = 0xffffffffL;
   /** Bits of 2^52 as a double. */
   private static final long WHOLE = 0x4330000000000000L;
 
@@ -29,7 +28,7 @@ public final class VectorNormals implements NormalKernels {
       int count, int first, long[] words0, long word1, long[] words2, long word3, int key0,
       int key1, BoxMuller.Scratch s, double[] outRe, double[] outIm) {
     int whole = count - count % WIDTH;
-    encrypt(whole, first, words0, word1, words2, word3, key0, key1, s);
+    PlainNormals.encrypt(whole, first, words0, word1, words2, word3, key0, key1, s);
     reduceRadius(whole, s.c0, s.c1, s.mantissa, s.exponent);
     reduceAngle(whole, s.c2, s.c3, s.angle, s.quarterCos, s.quarterSin);
     radius(whole, s.mantissa, s.exponent, s.radius);
@@ -37,39 +36,6 @@ public final class VectorNormals implements NormalKernels {
     if (whole < count) {
       plain.fill(
           count - whole, first + whole, words0, word1, words2, word3, key0, key1, s, outRe, outIm);
-    }
-  }
-
-  private static void encrypt(
-      int count, int first, long[] words0, long word1, long[] words2, long word3, int key0,
-      int key1, BoxMuller.Scratch s) {
-    for (int e = 0; e < count; e += WIDTH) {
-      LongVector c0 = LongVector.fromArray(L, words0, first + e);
-      LongVector c1 = LongVector.broadcast(L, word1);
-      LongVector c2 = LongVector.fromArray(L, words2, first + e);
-      LongVector c3 = LongVector.broadcast(L, word3);
-      int k0 = key0;
-      int k1 = key1;
-      for (int r = 0; r < Philox.ROUNDS; r++) {
-        LongVector p0 = c0.and(LOW_WORD).mul(Philox.MULTIPLIER_0);
-        LongVector p1 = c2.and(LOW_WORD).mul(Philox.MULTIPLIER_1);
-        c0 =
-            p1.lanewise(VectorOperators.LSHR, 32)
-                .lanewise(VectorOperators.XOR, c1)
-                .lanewise(VectorOperators.XOR, k0 & LOW_WORD);
-        c2 =
-            p0.lanewise(VectorOperators.LSHR, 32)
-                .lanewise(VectorOperators.XOR, c3)
-                .lanewise(VectorOperators.XOR, k1 & LOW_WORD);
-        c1 = p1.and(LOW_WORD);
-        c3 = p0.and(LOW_WORD);
-        k0 += Philox.KEY_STEP_0;
-        k1 += Philox.KEY_STEP_1;
-      }
-      c0.intoArray(s.c0, e);
-      c1.intoArray(s.c1, e);
-      c2.intoArray(s.c2, e);
-      c3.intoArray(s.c3, e);
     }
   }
 
