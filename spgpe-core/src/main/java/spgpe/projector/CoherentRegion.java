@@ -230,7 +230,7 @@ public final class CoherentRegion {
     Check.inRange(lanes, 1, 4096, "lanes");
     return engine == Engine.PROVIDER || grid.dimension() > 1 || !fillsHalfOfEachAxis()
         ? transform(components, lanes, provider)
-        : new HalfBandLine(this, components, lanes, engine.kernels(lanes));
+        : engine.transform(this, components, lanes);
   }
 
   /** Whether the engines of this library serve the region. */

@@ -53,8 +53,8 @@ public enum Engine {
     return AUTOMATIC;
   }
 
-  /** The kernels for a number of lanes; plain ones where vectors do not fit. */
-  LaneKernels kernels(int lanes) {
+  /** A transform of a line that fills at most half of its axis. */
+  ModeTransform transform(CoherentRegion region, int components, int lanes) {
     Optional<LaneKernels> vector =
         this == PLAIN
             ? Optional.empty()
@@ -62,11 +62,20 @@ public enum Engine {
     Check.state(
         this != VECTOR || vector.isPresent(),
         "engine VECTOR needs the vector module: start Java with --add-modules jdk.incubator.vector");
-    boolean fits = vector.isPresent() && lanes % vector.get().width() == 0;
+    if (vector.isPresent() && lanes % vector.get().width() == 0) {
+      log("vector instructions", lanes);
+      return new HalfBandLine(region, components, lanes, vector.get());
+    }
+    if (lanes >= HalfBandRows.FEWEST_LANES) {
+      log("plain Java, loops over lanes", lanes);
+      return new HalfBandRows(region, components, lanes);
+    }
+    log("plain Java", lanes);
+    return new HalfBandLine(region, components, lanes, new ScalarKernels());
+  }
+
+  private void log(String choice, int lanes) {
     LOG.log(
-        System.Logger.Level.DEBUG,
-        "engine {0}: {1} for lanes={2}",
-        this, fits ? "vector instructions" : "plain Java", lanes);
-    return fits ? vector.get() : new ScalarKernels();
+        System.Logger.Level.DEBUG, "engine {0}: {1} for lanes={2}", this, choice, lanes);
   }
 }

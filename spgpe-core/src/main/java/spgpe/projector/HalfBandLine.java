@@ -1,20 +1,12 @@
 package spgpe.projector;
 
 import java.util.Arrays;
-import spgpe.internal.check.Check;
 import spgpe.internal.lanes.LaneFourier;
 import spgpe.internal.lanes.LaneKernels;
 import spgpe.internal.lanes.LaneLayout;
 
-/**
- * Transform of a line whose kept modes fill at most half of the axis: each half of the points, the
- * even and the odd ones, is worked on completely before the other, and the full spectrum, most of it
- * zero, is never made.
- */
-final class HalfBandLine implements ModeTransform {
-  private final CoherentRegion region;
-  private final int components;
-  private final int lanes;
+/** The half-band transform on one array for all points, by {@link LaneKernels}. */
+final class HalfBandLine extends HalfBandTransform {
   private final LaneFourier fourier;
   private final LaneLayout layout;
   private final SlotRuns runs;
@@ -30,16 +22,14 @@ final class HalfBandLine implements ModeTransform {
   private final PointBlock[][] blocks;
 
   HalfBandLine(CoherentRegion region, int components, int lanes, LaneKernels kernels) {
-    this.region = region;
-    this.components = components;
-    this.lanes = lanes;
+    super(region, components, lanes);
     int size = region.grid().points();
     double root = Math.sqrt(region.grid().volume());
     this.fourier = new LaneFourier(size, lanes, 1 / root, root / size, kernels);
     this.layout = fourier.layout();
     int[] places = new int[region.modes()];
     for (int m = 0; m < places.length; m++) {
-      places[m] = layout.at(fourier.slotOf(region.modeNumber(0, m)) * lanes);
+      places[m] = layout.at(Math.floorMod(region.modeNumber(0, m), layout.points()) * lanes);
     }
     this.runs = SlotRuns.of(places, lanes);
     this.slotsRe = new double[components][];
@@ -65,7 +55,7 @@ final class HalfBandLine implements ModeTransform {
     this.blocks = new PointBlock[LaneFourier.HALVES][layout.points() / chunk];
     for (int h = 0; h < LaneFourier.HALVES; h++) {
       for (int row = 0; row < layout.points(); row++) {
-        points[h][row] = fourier.pointOf(h, row);
+        points[h][row] = LaneFourier.pointOf(size, h, row);
       }
       for (int b = 0; b < blocks[h].length; b++) {
         int begin = layout.at(b * chunk * lanes);
@@ -78,66 +68,53 @@ final class HalfBandLine implements ModeTransform {
   }
 
   @Override
-  public void toPosition(Amplitudes amplitudes, Field field) {
-    Check.notNull(amplitudes, "amplitudes").requireShape(region, components, lanes);
-    Check.notNull(field, "field").requireShape(region.grid(), components, lanes);
-    for (int c = 0; c < components; c++) {
-      runs.spread(amplitudes.re(c), slotsRe[c]);
-      runs.spread(amplitudes.im(c), slotsIm[c]);
-      for (int h = 0; h < LaneFourier.HALVES; h++) {
-        fourier.toPoints(h, slotsRe[c], slotsIm[c], psiRe[c], psiIm[c]);
-        for (int row = 0; row < layout.points(); row++) {
-          int from = layout.at(row * lanes);
-          System.arraycopy(psiRe[c], from, field.re(c), points[h][row] * lanes, lanes);
-          System.arraycopy(psiIm[c], from, field.im(c), points[h][row] * lanes, lanes);
-        }
-      }
+  void spread(int c, double[] re, double[] im) {
+    runs.spread(re, slotsRe[c]);
+    runs.spread(im, slotsIm[c]);
+  }
+
+  @Override
+  void collect(int c, double[] re, double[] im) {
+    runs.collect(sumRe[c], re);
+    runs.collect(sumIm[c], im);
+  }
+
+  @Override
+  void toPoints(int half, int c) {
+    fourier.toPoints(half, slotsRe[c], slotsIm[c], psiRe[c], psiIm[c]);
+  }
+
+  @Override
+  void toModes(int half, int c) {
+    fourier.toModes(half, resultRe[c], resultIm[c], sumRe[c], sumIm[c]);
+  }
+
+  @Override
+  void clearResult(int c) {
+    Arrays.fill(resultRe[c], 0);
+    Arrays.fill(resultIm[c], 0);
+  }
+
+  @Override
+  PointBlock[] blocks(int half) {
+    return blocks[half];
+  }
+
+  @Override
+  void copyOut(int half, int c, double[] re, double[] im) {
+    for (int row = 0; row < layout.points(); row++) {
+      int from = layout.at(row * lanes);
+      System.arraycopy(psiRe[c], from, re, points[half][row] * lanes, lanes);
+      System.arraycopy(psiIm[c], from, im, points[half][row] * lanes, lanes);
     }
   }
 
   @Override
-  public void toModes(Field field, Amplitudes amplitudes) {
-    Check.notNull(field, "field").requireShape(region.grid(), components, lanes);
-    Check.notNull(amplitudes, "amplitudes").requireShape(region, components, lanes);
-    for (int c = 0; c < components; c++) {
-      for (int h = 0; h < LaneFourier.HALVES; h++) {
-        for (int row = 0; row < layout.points(); row++) {
-          int to = layout.at(row * lanes);
-          System.arraycopy(field.re(c), points[h][row] * lanes, resultRe[c], to, lanes);
-          System.arraycopy(field.im(c), points[h][row] * lanes, resultIm[c], to, lanes);
-        }
-        fourier.toModes(h, resultRe[c], resultIm[c], sumRe[c], sumIm[c]);
-      }
-      runs.collect(sumRe[c], amplitudes.re(c));
-      runs.collect(sumIm[c], amplitudes.im(c));
-    }
-  }
-
-  @Override
-  public void applyLocal(Amplitudes amplitudes, LocalOperation operation, Amplitudes result) {
-    Check.notNull(amplitudes, "amplitudes").requireShape(region, components, lanes);
-    Check.notNull(operation, "operation");
-    Check.notNull(result, "result").requireShape(region, components, lanes);
-    for (int c = 0; c < components; c++) {
-      runs.spread(amplitudes.re(c), slotsRe[c]);
-      runs.spread(amplitudes.im(c), slotsIm[c]);
-    }
-    for (int h = 0; h < LaneFourier.HALVES; h++) {
-      for (int c = 0; c < components; c++) {
-        fourier.toPoints(h, slotsRe[c], slotsIm[c], psiRe[c], psiIm[c]);
-        Arrays.fill(resultRe[c], 0);
-        Arrays.fill(resultIm[c], 0);
-      }
-      for (PointBlock block : blocks[h]) {
-        operation.addTo(block);
-      }
-      for (int c = 0; c < components; c++) {
-        fourier.toModes(h, resultRe[c], resultIm[c], sumRe[c], sumIm[c]);
-      }
-    }
-    for (int c = 0; c < components; c++) {
-      runs.collect(sumRe[c], result.re(c));
-      runs.collect(sumIm[c], result.im(c));
+  void copyIn(int half, int c, double[] re, double[] im) {
+    for (int row = 0; row < layout.points(); row++) {
+      int to = layout.at(row * lanes);
+      System.arraycopy(re, points[half][row] * lanes, resultRe[c], to, lanes);
+      System.arraycopy(im, points[half][row] * lanes, resultIm[c], to, lanes);
     }
   }
 }

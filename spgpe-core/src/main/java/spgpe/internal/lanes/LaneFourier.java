@@ -69,24 +69,16 @@ public final class LaneFourier {
   }
 
   /**
-   * Slot of a mode.
-   *
-   * @param mode mode number, |number| below N/4
-   * @return row of the arrays of slots
-   */
-  public int slotOf(int mode) {
-    return Math.floorMod(mode, half);
-  }
-
-  /**
    * Point of a row.
    *
+   * @param points number of points N of the line
    * @param parity 0 for the even half, 1 for the odd one
    * @param row row of the arrays of points
    * @return its number on the line
    */
-  public int pointOf(int parity, int row) {
-    return parity + HALVES * Twiddles.reversed(row, Integer.numberOfTrailingZeros(half));
+  public static int pointOf(int points, int parity, int row) {
+    return parity
+        + HALVES * Twiddles.reversed(row, Integer.numberOfTrailingZeros(points / HALVES));
   }
 
   /**

@@ -94,13 +94,18 @@ final class Rows {
 
   static void toModes(
       double[] aRe, double[] aIm, double[] bRe, double[] bIm, double wr, double wi) {
-    for (int i = 0; i < aRe.length; i++) {
-      double re = aRe[i] - bRe[i];
-      double im = aIm[i] - bIm[i];
-      aRe[i] = aRe[i] + bRe[i];
-      aIm[i] = aIm[i] + bIm[i];
-      bRe[i] = re * wr + im * wi;
-      bIm[i] = im * wr - re * wi;
+    sumAndDifference(aRe, bRe);
+    sumAndDifference(aIm, bIm);
+    turnBack(bRe, bIm, wr, wi);
+  }
+
+  /** b = conj(w) b. */
+  private static void turnBack(double[] bRe, double[] bIm, double wr, double wi) {
+    for (int i = 0; i < bRe.length; i++) {
+      double x = bRe[i];
+      double y = bIm[i];
+      bRe[i] = x * wr + y * wi;
+      bIm[i] = y * wr - x * wi;
     }
   }
 
