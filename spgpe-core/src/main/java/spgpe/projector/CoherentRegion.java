@@ -228,22 +228,33 @@ public final class CoherentRegion {
     Check.notNull(engine, "engine");
     Check.inRange(components, 1, 255, "components");
     Check.inRange(lanes, 1, 4096, "lanes");
-    return engine == Engine.PROVIDER || grid.dimension() > 1 || !fillsHalfOfEachAxis()
-        ? transform(components, lanes, provider)
-        : engine.transform(this, components, lanes);
+    return isServedBy(engine)
+        ? engine.transform(this, components, lanes)
+        : transform(components, lanes, provider);
   }
 
-  /** Whether the engines of this library serve the region. */
-  private boolean fillsHalfOfEachAxis() {
-    for (int axis = 0; axis < grid.dimension(); axis++) {
-      int points = grid.axis(axis).points();
-      if (Integer.bitCount(points) != 1
-          || points < LaneFourier.FEWEST_POINTS
-          || 4 * largestMode(axis) >= points) {
-        return false;
-      }
-    }
-    return true;
+  /**
+   * Number of lanes at which an engine works fastest here.
+   *
+   * @param engine what does the transforms
+   * @param atMost largest number of interest, at least 1
+   * @return lanes; 1 if more are not faster
+   * @throws IllegalArgumentException if the number is not positive
+   */
+  public int bestLanes(Engine engine, long atMost) {
+    Check.notNull(engine, "engine");
+    Check.argument(atMost >= 1, "largest number of lanes must be >= 1: atMost=%s", atMost);
+    return isServedBy(engine) ? engine.bestLanes(grid.points(), atMost) : 1;
+  }
+
+  /** Whether it is an engine of this library and the region a line that it can do. */
+  private boolean isServedBy(Engine engine) {
+    int points = grid.points();
+    return engine != Engine.PROVIDER
+        && grid.dimension() == 1
+        && Integer.bitCount(points) == 1
+        && points >= LaneFourier.FEWEST_POINTS
+        && 4 * largestMode(0) < points;
   }
 
   int gridIndex(int mode) {

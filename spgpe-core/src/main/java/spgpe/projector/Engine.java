@@ -31,6 +31,14 @@ public enum Engine {
   /** System property that sets the engine of models that are not given one. */
   public static final String PROPERTY = "spgpe.engine";
 
+  private static final String VECTOR_KERNELS = "spgpe.internal.lanes.VectorKernels";
+
+  /** Two vectors of 256 bits or one of 512. */
+  private static final int VECTOR_LANES = 8;
+
+  /** Points times lanes that the second-level caches hold in plain Java. */
+  private static final int MANY_LANES = 16384;
+
   private static final System.Logger LOG = System.getLogger(Engine.class.getName());
 
   /**
@@ -58,7 +66,7 @@ public enum Engine {
     Optional<LaneKernels> vector =
         this == PLAIN
             ? Optional.empty()
-            : VectorModule.find("spgpe.internal.lanes.VectorKernels", LaneKernels.class);
+            : VectorModule.find(VECTOR_KERNELS, LaneKernels.class);
     Check.state(
         this != VECTOR || vector.isPresent(),
         "engine VECTOR needs the vector module: start Java with --add-modules jdk.incubator.vector");
@@ -72,6 +80,23 @@ public enum Engine {
     }
     log("plain Java", lanes);
     return new HalfBandLine(region, components, lanes, new ScalarKernels());
+  }
+
+  /** Whether transforms of lines that fill at most half of their axis use vector instructions. */
+  private boolean isVector() {
+    return (this == AUTOMATIC || this == VECTOR)
+        && VectorModule.find(VECTOR_KERNELS, LaneKernels.class).isPresent();
+  }
+
+  /** The number of lanes, at most the given one, at which a line of so many points is fastest. */
+  int bestLanes(int points, long atMost) {
+    boolean vector = isVector();
+    int lanes = vector ? VECTOR_LANES : Math.min(64, Math.max(16, MANY_LANES / points));
+    int fewest = vector ? VECTOR_LANES / 2 : HalfBandRows.FEWEST_LANES;
+    while (lanes > atMost) {
+      lanes /= 2;
+    }
+    return lanes < fewest ? 1 : lanes;
   }
 
   private void log(String choice, int lanes) {

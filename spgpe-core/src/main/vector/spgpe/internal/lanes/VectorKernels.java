@@ -2,6 +2,7 @@ package spgpe.internal.lanes;
 
 import jdk.incubator.vector.DoubleVector;
 import jdk.incubator.vector.VectorSpecies;
+import spgpe.internal.vector.VectorShapes;
 
 /**
  * The passes with vector instructions, statement by statement those of {@link ScalarKernels}. One
@@ -9,7 +10,7 @@ import jdk.incubator.vector.VectorSpecies;
  * compiler, and vectors handed to other methods are objects.
  */
 public final class VectorKernels implements LaneKernels {
-  private static final VectorSpecies<Double> S = DoubleVector.SPECIES_256;
+  private static final VectorSpecies<Double> S = VectorShapes.DOUBLES;
   private static final int WIDTH = S.length();
 
   /** Made by name, since the class may not load everywhere. */

@@ -5,6 +5,7 @@ import jdk.incubator.vector.LongVector;
 import jdk.incubator.vector.VectorMask;
 import jdk.incubator.vector.VectorOperators;
 import jdk.incubator.vector.VectorSpecies;
+import spgpe.internal.vector.VectorShapes;
 
 /**
  * {@link NormalKernels} with vector instructions, operation by operation those of {@link BoxMuller};
@@ -12,8 +13,8 @@ import jdk.incubator.vector.VectorSpecies;
  * 2^52, which is exact. What does not fill a vector is left to {@link PlainNormals}.
  */
 public final class VectorNormals implements NormalKernels {
-  private static final VectorSpecies<Double> D = DoubleVector.SPECIES_256;
-  private static final VectorSpecies<Long> L = LongVector.SPECIES_256;
+  private static final VectorSpecies<Double> D = VectorShapes.DOUBLES;
+  private static final VectorSpecies<Long> L = VectorShapes.LONGS;
   private static final int WIDTH = D.length();
   /** Bits of 2^52 as a double. */
   private static final long WHOLE = 0x4330000000000000L;
