@@ -28,7 +28,8 @@ public final class ForceEvaluator {
     this.model = model;
     this.lanes = lanes;
     this.transform =
-        model.region().transform(model.components(), lanes, model.fourierProvider());
+        model.region()
+            .transform(model.components(), lanes, model.fourierProvider(), model.engine());
     this.terms = model.localTerms();
   }
 

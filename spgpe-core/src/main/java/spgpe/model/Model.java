@@ -11,6 +11,7 @@ import spgpe.hamiltonian.ModeMatrix;
 import spgpe.internal.check.Check;
 import spgpe.projector.AliasingVerdict;
 import spgpe.projector.CoherentRegion;
+import spgpe.projector.Engine;
 import spgpe.reservoir.Reservoir;
 
 /**
@@ -27,6 +28,7 @@ public final class Model {
   private final Hamiltonian hamiltonian;
   private final Reservoir reservoir;
   private final FourierProvider provider;
+  private final Engine engine;
   private final List<LocalTerm> localTerms;
   private final ModeMatrix linearPart;
   private final boolean aliasingAllowed;
@@ -36,11 +38,13 @@ public final class Model {
       Hamiltonian hamiltonian,
       Reservoir reservoir,
       FourierProvider provider,
+      Engine engine,
       boolean aliasingAllowed) {
     this.region = region;
     this.hamiltonian = hamiltonian;
     this.reservoir = reservoir;
     this.provider = provider;
+    this.engine = engine;
     this.aliasingAllowed = aliasingAllowed;
     int components = hamiltonian.components();
     reservoir.check(components);
@@ -82,6 +86,7 @@ public final class Model {
         Check.notNull(hamiltonian, "hamiltonian"),
         Check.notNull(reservoir, "reservoir"),
         FourierProviders.preferred(),
+        Engine.ofSystemProperty(),
         false);
   }
 
@@ -102,6 +107,7 @@ public final class Model {
         Check.notNull(hamiltonian, "hamiltonian"),
         Check.notNull(reservoir, "reservoir"),
         FourierProviders.preferred(),
+        Engine.ofSystemProperty(),
         true);
   }
 
@@ -113,18 +119,34 @@ public final class Model {
    */
   public Model withReservoir(Reservoir newReservoir) {
     return new Model(
-        region, hamiltonian, Check.notNull(newReservoir, "reservoir"), provider, aliasingAllowed);
+        region, hamiltonian, Check.notNull(newReservoir, "reservoir"), provider, engine,
+        aliasingAllowed);
   }
 
   /**
-   * A copy with another Fourier back end.
+   * A copy with another Fourier back end, which then does all transforms: the engine becomes {@link
+   * Engine#PROVIDER}.
    *
    * @param newProvider back end, see {@link FourierProviders}
    * @return changed copy
    */
   public Model withFourierProvider(FourierProvider newProvider) {
     return new Model(
-        region, hamiltonian, reservoir, Check.notNull(newProvider, "provider"), aliasingAllowed);
+        region, hamiltonian, reservoir, Check.notNull(newProvider, "provider"), Engine.PROVIDER,
+        aliasingAllowed);
+  }
+
+  /**
+   * A copy whose forces are transformed by another engine. Changes the speed; {@link
+   * Engine#PROVIDER} also the rounding.
+   *
+   * @param newEngine what does the transforms
+   * @return changed copy
+   */
+  public Model withEngine(Engine newEngine) {
+    return new Model(
+        region, hamiltonian, reservoir, provider, Check.notNull(newEngine, "engine"),
+        aliasingAllowed);
   }
 
   private void checkAliasing(LocalTerm term) {
@@ -181,6 +203,15 @@ public final class Model {
   }
 
   /**
+   * What does the Fourier transforms of the force.
+   *
+   * @return the engine; as the system property {@value Engine#PROPERTY} says unless set
+   */
+  public Engine engine() {
+    return engine;
+  }
+
+  /**
    * The local terms, prepared for the grid.
    *
    * @return unmodifiable list
@@ -230,7 +261,7 @@ public final class Model {
         + "  " + region.aliasing(3) + "\n"
         + "  " + hamiltonian + "\n"
         + "  " + reservoir + "\n"
-        + "  Fourier back end: " + provider.name();
+        + "  Fourier back end: " + provider.name() + ", engine: " + engine;
   }
 
   @Override

@@ -4,6 +4,7 @@ import java.util.Arrays;
 import spgpe.fourier.FourierProvider;
 import spgpe.grid.PeriodicGrid;
 import spgpe.internal.check.Check;
+import spgpe.internal.lanes.LaneFourier;
 
 /**
  * The coherent region: the list of kept plane waves
@@ -207,6 +208,53 @@ public final class CoherentRegion {
     return grid.dimension() == 1
         ? new LineTransform(this, components, lanes, provider)
         : new PlaneTransform(this, components, lanes, provider);
+  }
+
+  /**
+   * Makes a transform like {@link #transform(int, int, FourierProvider)} by a given engine.
+   *
+   * @param components number of components, at least 1
+   * @param lanes realisations advanced together, at least 1
+   * @param provider Fourier back end, for regions the engine does not serve
+   * @param engine what does the transforms
+   * @return the transform
+   * @throws IllegalArgumentException if a number is not positive, or if the back end cannot
+   *     transform the points of an axis
+   * @throws IllegalStateException if the engine does not run here
+   */
+  public ModeTransform transform(
+      int components, int lanes, FourierProvider provider, Engine engine) {
+    Check.notNull(provider, "provider");
+    Check.notNull(engine, "engine");
+    Check.inRange(components, 1, 255, "components");
+    Check.inRange(lanes, 1, 4096, "lanes");
+    return isServedBy(engine)
+        ? engine.transform(this, components, lanes)
+        : transform(components, lanes, provider);
+  }
+
+  /**
+   * Number of lanes at which an engine works fastest here.
+   *
+   * @param engine what does the transforms
+   * @param atMost largest number of interest, at least 1
+   * @return lanes; 1 if more are not faster
+   * @throws IllegalArgumentException if the number is not positive
+   */
+  public int bestLanes(Engine engine, long atMost) {
+    Check.notNull(engine, "engine");
+    Check.argument(atMost >= 1, "largest number of lanes must be >= 1: atMost=%s", atMost);
+    return isServedBy(engine) ? engine.bestLanes(grid.points(), atMost) : 1;
+  }
+
+  /** Whether it is an engine of this library and the region a line that it can do. */
+  private boolean isServedBy(Engine engine) {
+    int points = grid.points();
+    return engine != Engine.PROVIDER
+        && grid.dimension() == 1
+        && Integer.bitCount(points) == 1
+        && points >= LaneFourier.FEWEST_POINTS
+        && 4 * largestMode(0) < points;
   }
 
   int gridIndex(int mode) {

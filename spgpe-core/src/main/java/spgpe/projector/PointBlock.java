@@ -19,8 +19,9 @@ public final class PointBlock {
   private final double[][] resultIm;
   private final int begin;
   private final int end;
-  private final int firstPoint;
-  private final int pointStride;
+
+  /** Grid point of each group of lanes. */
+  private final int[] points;
 
   PointBlock(Field psi, Field result, int begin, int end, int firstPoint, int pointStride) {
     this.grid = psi.grid();
@@ -38,8 +39,25 @@ public final class PointBlock {
     }
     this.begin = begin;
     this.end = end;
-    this.firstPoint = firstPoint;
-    this.pointStride = pointStride;
+    this.points = new int[(end - begin) / lanes];
+    for (int p = 0; p < points.length; p++) {
+      points[p] = firstPoint + p * pointStride;
+    }
+  }
+
+  /** Any points: those of the given numbers, from index begin on. */
+  PointBlock(
+      PeriodicGrid grid, int lanes, double[][] psiRe, double[][] psiIm, double[][] resultRe,
+      double[][] resultIm, int begin, int end, int[] points) {
+    this.grid = grid;
+    this.lanes = lanes;
+    this.psiRe = psiRe;
+    this.psiIm = psiIm;
+    this.resultRe = resultRe;
+    this.resultIm = resultIm;
+    this.begin = begin;
+    this.end = end;
+    this.points = points;
   }
 
   /**
@@ -141,6 +159,6 @@ public final class PointBlock {
    * @return point index of the grid
    */
   public int pointOf(int element) {
-    return firstPoint + (element - begin) / lanes * pointStride;
+    return points[(element - begin) / lanes];
   }
 }

@@ -3,9 +3,12 @@ package spgpe.reservoir;
 import org.apache.commons.rng.UniformRandomProvider;
 import spgpe.internal.check.Check;
 import spgpe.internal.random.BoxMuller;
-import spgpe.internal.random.Philox;
+import spgpe.internal.random.NormalKernels;
+import spgpe.internal.random.PlainNormals;
+import spgpe.internal.vector.VectorModule;
 import spgpe.projector.Amplitudes;
 import spgpe.projector.CoherentRegion;
+import spgpe.projector.Engine;
 
 /**
  * Philox4x32-10 with key = seed and counter
@@ -51,7 +54,12 @@ final class CounterBasedStreams implements RandomStreams {
     private final int key0;
     private final int key1;
     private final long[] trajectories;
+
+    /** First and third word of the counter of each mode and lane. */
     private final long[] modeWords;
+
+    private final long[] trajectoryWords;
+    private final NormalKernels kernels;
     private final BoxMuller.Scratch scratch;
 
     Generator(long seed, CoherentRegion region, int components, int lanes) {
@@ -61,17 +69,20 @@ final class CounterBasedStreams implements RandomStreams {
       this.key1 = (int) (seed >>> 32);
       this.trajectories = new long[lanes];
       java.util.Arrays.fill(trajectories, -1);
-      this.modeWords = new long[region.modes()];
-      for (int m = 0; m < modeWords.length; m++) {
+      this.modeWords = new long[region.modes() * lanes];
+      this.trajectoryWords = new long[modeWords.length];
+      for (int m = 0; m < region.modes(); m++) {
         int nx = region.modeNumber(0, m);
         int ny = region.grid().dimension() == 1 ? 0 : region.modeNumber(1, m);
         Check.argument(
             Math.abs(nx) <= 32767 && Math.abs(ny) <= 32767,
             "mode numbers must not exceed 32767 for the counter-based streams: nx=%s, ny=%s",
             nx, ny);
-        modeWords[m] = ((long) (ny & 0xffff) << 16) | (nx & 0xffff);
+        java.util.Arrays.fill(
+            modeWords, m * lanes, (m + 1) * lanes, ((long) (ny & 0xffff) << 16) | (nx & 0xffff));
       }
-      this.scratch = new BoxMuller.Scratch(region.modes());
+      this.kernels = kernels();
+      this.scratch = new BoxMuller.Scratch(NormalKernels.BLOCK);
     }
 
     @Override
@@ -79,6 +90,9 @@ final class CounterBasedStreams implements RandomStreams {
       Check.inRange(lane, 0, trajectories.length - 1, "lane");
       CommonsRngStreams.checkTrajectory(trajectory);
       trajectories[lane] = trajectory;
+      for (int e = lane; e < trajectoryWords.length; e += trajectories.length) {
+        trajectoryWords[e] = trajectory;
+      }
     }
 
     @Override
@@ -88,20 +102,26 @@ final class CounterBasedStreams implements RandomStreams {
       Check.notNull(normals, "normals").requireShape(region, components, trajectories.length);
       for (int lane = 0; lane < trajectories.length; lane++) {
         CommonsRngStreams.checkAssigned(lane, trajectories[lane]);
-        for (int c = 0; c < components; c++) {
-          long word3 = ((long) use << 24) | ((long) c << 16) | (step >>> 32);
-          for (int m = 0; m < modeWords.length; m++) {
-            scratch.c0[m] = modeWords[m];
-            scratch.c1[m] = step & LOW_WORD;
-            scratch.c2[m] = trajectories[lane];
-            scratch.c3[m] = word3;
-          }
-          Philox.encrypt(
-              modeWords.length, scratch.c0, scratch.c1, scratch.c2, scratch.c3, key0, key1);
-          BoxMuller.normals(
-              modeWords.length, scratch, normals.re(c), normals.im(c), lane, trajectories.length);
+      }
+      for (int c = 0; c < components; c++) {
+        long word3 = ((long) use << 24) | ((long) c << 16) | (step >>> 32);
+        for (int first = 0; first < modeWords.length; first += NormalKernels.BLOCK) {
+          int count = Math.min(NormalKernels.BLOCK, modeWords.length - first);
+          kernels.fill(
+              count, first, modeWords, step & LOW_WORD, trajectoryWords, word3, key0, key1,
+              scratch, normals.re(c), normals.im(c));
         }
       }
+    }
+
+    /** With vector instructions if they are there; the bits are the same either way. */
+    private static NormalKernels kernels() {
+      return switch (Engine.ofSystemProperty()) {
+        case AUTOMATIC, VECTOR ->
+            VectorModule.find("spgpe.internal.random.VectorNormals", NormalKernels.class)
+                .orElseGet(PlainNormals::new);
+        case PLAIN, PROVIDER -> new PlainNormals();
+      };
     }
   }
 }

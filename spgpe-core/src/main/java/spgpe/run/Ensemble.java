@@ -19,7 +19,11 @@ import spgpe.reservoir.RandomStreams;
  * EnsembleResult#mergedWith}).
  */
 public final class Ensemble {
-  private static final int DEFAULT_LANES = 1;
+  /** As many as are fastest. */
+  private static final int AUTOMATIC_LANES = 0;
+
+  /** Fewest blocks of lanes to leave, so that threads can share them. */
+  private static final int FEWEST_BLOCKS = 4;
 
   private final Settings settings;
 
@@ -36,7 +40,7 @@ public final class Ensemble {
     long first;
     long count;
     double until = Double.NaN;
-    int lanes = DEFAULT_LANES;
+    int lanes = AUTOMATIC_LANES;
     boolean keepGoing;
     List<StopRule> stopRules = List.of();
     List<Recording<?>> recordings = List.of();
@@ -213,7 +217,8 @@ public final class Ensemble {
 
   /**
    * Sets how many trajectories each thread advances in lockstep. Changes the speed, never the
-   * numbers. Default 1.
+   * numbers. Default: what is fastest for the model's engine, see {@link
+   * spgpe.projector.CoherentRegion#bestLanes}, and leaves at least four blocks of trajectories.
    *
    * @param lanes 1 to 64
    * @return changed copy
@@ -304,7 +309,10 @@ public final class Ensemble {
   }
 
   int lanes() {
-    return settings.lanes;
+    return settings.lanes != AUTOMATIC_LANES
+        ? settings.lanes
+        : settings.model.region()
+            .bestLanes(settings.model.engine(), Math.max(1, count() / FEWEST_BLOCKS));
   }
 
   boolean keepsGoing() {

@@ -56,9 +56,13 @@ class ArchitectureTest {
           Map.ofEntries(
               Map.entry("grid", List.of()),
               Map.entry("fourier", List.of("grid")),
-              Map.entry("projector", List.of("grid", "fourier")),
+              Map.entry(
+                  "projector",
+                  List.of("grid", "fourier", "internal.lanes", "internal.vector")),
               Map.entry("hamiltonian", List.of("grid", "projector")),
-              Map.entry("reservoir", List.of("grid", "projector", "internal.random")),
+              Map.entry(
+                  "reservoir",
+                  List.of("grid", "projector", "internal.random", "internal.vector")),
               Map.entry(
                   "model", List.of("grid", "fourier", "projector", "hamiltonian", "reservoir")),
               Map.entry(
@@ -78,8 +82,10 @@ class ArchitectureTest {
                       "integrate")),
               Map.entry("units", List.of()),
               Map.entry("internal.check", List.of()),
-              Map.entry("internal.random", List.of()),
+              Map.entry("internal.random", List.of("internal.vector")),
               Map.entry("internal.linear", List.of()),
+              Map.entry("internal.vector", List.of()),
+              Map.entry("internal.lanes", List.of("internal.vector")),
               Map.entry("internal.fourier", List.of("fourier"))));
 
   /** Packages that may be absent while the project grows. */
@@ -153,7 +159,8 @@ class ArchitectureTest {
                     Stream.of(CORE),
                     Stream.of(
                         "java..", "org.jspecify..", "org.apache.commons.rng..",
-                        "org.jtransforms..", "")) // "": primitives and their arrays
+                        "org.jtransforms..", "jdk.incubator.vector..",
+                        "")) // "": primitives and their arrays
                 .toArray(String[]::new))
         .check(CODE);
   }
@@ -193,6 +200,21 @@ class ArchitectureTest {
         .should()
         .dependOnClassesThat()
         .resideInAnyPackage("org.jtransforms..", "pl.edu.icm..")
+        .check(CODE);
+  }
+
+  /** The classes that need the vector module load only where it is; the others must not name them. */
+  @Test
+  void onlyTheVectorClassesKnowTheVectorModule() {
+    noClasses()
+        .that()
+        .haveSimpleNameNotStartingWith("Vector")
+        .should()
+        .dependOnClassesThat()
+        .resideInAPackage("jdk.incubator.vector..")
+        .orShould()
+        .dependOnClassesThat()
+        .haveNameMatching("spgpe\\.internal\\.(lanes|random)\\.Vector.*")
         .check(CODE);
   }
 
@@ -309,6 +331,7 @@ class ArchitectureTest {
         || value instanceof java.time.temporal.TemporalAccessor
         || value instanceof java.awt.Font || value instanceof java.awt.Color
         || value instanceof java.awt.BasicStroke
+        || type.getName().startsWith("jdk.incubator.vector.")
         || type.isHidden()) { // functions
       return true;
     }

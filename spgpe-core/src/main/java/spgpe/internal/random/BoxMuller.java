@@ -9,30 +9,30 @@ package spgpe.internal.random;
  * sqrt 2); sine and cosine by their Taylor series on [-pi/4, pi/4]. Absolute errors below 1e-15.
  */
 public final class BoxMuller {
-  private static final double LN2_HIGH = 0x1.62e42fefa3800p-1;
-  private static final double LN2_LOW = 0x1.ef35793c76730p-45;
-  private static final long FRACTION = 0xfffffffffffffL;
-  private static final long ONE = 0x3ff0000000000000L;
+  static final double LN2_HIGH = 0x1.62e42fefa3800p-1;
+  static final double LN2_LOW = 0x1.ef35793c76730p-45;
+  static final long FRACTION = 0xfffffffffffffL;
+  static final long ONE = 0x3ff0000000000000L;
   /** Fraction bits of sqrt(2): mantissas above it are halved. */
-  private static final long SQRT2_FRACTION = 0x6a09e667f3bcdL;
+  static final long SQRT2_FRACTION = 0x6a09e667f3bcdL;
 
-  private static final double S3 = -1.0 / 6;
-  private static final double S5 = 1.0 / 120;
-  private static final double S7 = -1.0 / 5040;
-  private static final double S9 = 1.0 / 362880;
-  private static final double S11 = -1.0 / 39916800;
-  private static final double S13 = 1.0 / 6227020800.0;
-  private static final double S15 = -1.0 / 1307674368000.0;
-  private static final double S17 = 1.0 / 355687428096000.0;
+  static final double S3 = -1.0 / 6;
+  static final double S5 = 1.0 / 120;
+  static final double S7 = -1.0 / 5040;
+  static final double S9 = 1.0 / 362880;
+  static final double S11 = -1.0 / 39916800;
+  static final double S13 = 1.0 / 6227020800.0;
+  static final double S15 = -1.0 / 1307674368000.0;
+  static final double S17 = 1.0 / 355687428096000.0;
 
-  private static final double C2 = -1.0 / 2;
-  private static final double C4 = 1.0 / 24;
-  private static final double C6 = -1.0 / 720;
-  private static final double C8 = 1.0 / 40320;
-  private static final double C10 = -1.0 / 3628800;
-  private static final double C12 = 1.0 / 479001600;
-  private static final double C14 = -1.0 / 87178291200.0;
-  private static final double C16 = 1.0 / 20922789888000.0;
+  static final double C2 = -1.0 / 2;
+  static final double C4 = 1.0 / 24;
+  static final double C6 = -1.0 / 720;
+  static final double C8 = 1.0 / 40320;
+  static final double C10 = -1.0 / 3628800;
+  static final double C12 = 1.0 / 479001600;
+  static final double C14 = -1.0 / 87178291200.0;
+  static final double C16 = 1.0 / 20922789888000.0;
 
   private static final double[] QUARTER_COS = {1, 0, -1, 0};
   private static final double[] QUARTER_SIN = {0, 1, 0, -1};
