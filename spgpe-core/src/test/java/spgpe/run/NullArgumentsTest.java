@@ -41,6 +41,7 @@ import spgpe.model.ForceEvaluator;
 import spgpe.model.Model;
 import spgpe.projector.Amplitudes;
 import spgpe.projector.CoherentRegion;
+import spgpe.projector.Engine;
 import spgpe.projector.Field;
 import spgpe.projector.LocalOperation;
 import spgpe.projector.ModeTransform;
@@ -86,6 +87,7 @@ class NullArgumentsTest {
     map.put(CoherentRegion.class, model.region());
     map.put(Projector.class, Projector.modesUpTo(3));
     map.put(FourierProvider.class, FourierProviders.preferred());
+    map.put(Engine.class, Engine.AUTOMATIC);
     map.put(Amplitudes.class, state);
     map.put(Field.class, new Field(model.region().grid(), 2, 1));
     map.put(LocalOperation.class, (LocalOperation) block -> {});

@@ -62,7 +62,7 @@ class StepsTest {
   void aStepAndALookAllocateNothing() {
     Model model = model(64);
     for (Integrator scheme : SCHEMES) {
-      for (int lanes : new int[] {1, 4}) {
+      for (int lanes : new int[] {1, 4, 16}) {
         Stepper stepper = stepper(scheme, model, RandomStreams.counterBased(1), lanes);
         Amplitudes target = uniform(model, lanes);
         stepper.start(target, 0);
