@@ -17,7 +17,7 @@ import spgpe.units.Validity;
 import spgpe.units.Verdict;
 
 /**
- * An invented experiment: two hyperfine states of K-41 in a square box, squeezed by a light sheet
+ * An invented experiment: two hyperfine states of K-41 in a square box, squeezed by an optical trap
  * to two dimensions, coherently coupled, with relative phase pi made metastable by a biquadratic
  * coupling.
  *
