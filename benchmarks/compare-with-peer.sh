@@ -38,26 +38,35 @@ plane-256-provider    coupled_2d_rk4ip_fftw   provider 256 Rk4Ip 1 plane
 
 microseconds() { sed 's/.*: \([0-9.]*\) us.*/\1/'; }
 
-# Repeats of some milliseconds each, best of them: short enough to find quiet moments.
+# Many short repeats, best of them: short enough to find quiet moments of a shared machine.
+steps_of() { # points lanes shape
+  local steps=$((20000 / $1 / $2))
+  [ "$3" = plane ] && steps=1
+  echo "$((steps > 0 ? steps : 1))"
+}
+
+repeats_of() { # points shape
+  if [ "$2" = plane ]; then echo "$((40000 / $1))"; else echo 1200; fi
+}
+
 run_peer() { # program points shape
-  local steps=$((200000 / $2))
-  [ "$3" = plane ] && steps=$((100000 / $2 / $2 + 1))
-  MEAS=1 "$work/$1" "$2" "$steps" 0.02 1 300 | microseconds
+  MEAS=1 "$work/$1" "$2" "$(steps_of "$2" 1 "$3")" 0.02 1 "$(repeats_of "$2" "$3")" \
+    | microseconds
 }
 
 run_java() { # java engine points scheme lanes shape
-  local steps=$((200000 / $3 / $5)) module=""
-  [ "$6" = plane ] && steps=$((100000 / $3 / $3 + 1))
+  local module=""
   [ "$2" = vector ] && module="--add-modules jdk.incubator.vector"
   # shellcheck disable=SC2086
   "$1" $module "-Dspgpe.engine=$2" -cp target/benchmarks.jar spgpe.benchmarks.StepTimer \
-    "$3" "$((steps > 0 ? steps : 1))" 500 "$4" "$5" "$6" 2> /dev/null | microseconds
+    "$3" "$(steps_of "$3" "$5" "$6")" "$(repeats_of "$3" "$6")" "$4" "$5" "$6" 2> /dev/null \
+    | microseconds
 }
 
 # Compiled methods that the first compiler gave up run an order of magnitude slower.
 check_compilation() { # java
   "$1" --add-modules jdk.incubator.vector -XX:+PrintCompilation -cp target/benchmarks.jar \
-    spgpe.benchmarks.StepTimer 256 100 50 Rk4Ip 8 2> /dev/null > "$work/compilation"
+    spgpe.benchmarks.StepTimer 256 20 150 Rk4Ip 8 2> /dev/null > "$work/compilation"
   if grep "out of virtual registers" "$work/compilation" | grep spgpe; then
     echo "a method is too long for the first compiler: $1"
     exit 1

@@ -10,7 +10,7 @@ public final class AllocationMeter {
   private static final int FEWEST_GROUPS = 5;
 
   /** Vector instructions are objects until their methods are compiled, which takes its time. */
-  private static final int MOST_GROUPS = 200;
+  private static final int MOST_GROUPS = 2000;
 
   private AllocationMeter() {}
 
