@@ -2,7 +2,6 @@ package spgpe.internal.random;
 
 import jdk.incubator.vector.DoubleVector;
 import jdk.incubator.vector.LongVector;
-import jdk.incubator.vector.VectorMask;
 import jdk.incubator.vector.VectorOperators;
 import jdk.incubator.vector.VectorSpecies;
 import spgpe.internal.vector.VectorShapes;
@@ -51,14 +50,15 @@ public final class VectorNormals implements NormalKernels {
           bits.or(WHOLE).reinterpretAsDoubles().sub(0x1p52).add(0.5).mul(0x1p-52)
               .reinterpretAsLongs();
       LongVector fraction = u.and(BoxMuller.FRACTION);
-      VectorMask<Double> halve =
-          fraction.compare(VectorOperators.GT, BoxMuller.SQRT2_FRACTION).cast(D);
-      DoubleVector m = fraction.or(BoxMuller.ONE).reinterpretAsDoubles();
-      m.mul(0.5, halve).intoArray(mantissa, e);
-      DoubleVector x =
-          u.lanewise(VectorOperators.LSHR, 52).or(WHOLE).reinterpretAsDoubles()
-              .sub(0x1p52 + 1023);
-      x.add(1.0, halve).intoArray(exponent, e);
+      // 1 if the mantissa is to be halved, without masks, which are objects more often
+      LongVector halve =
+          LongVector.broadcast(L, BoxMuller.SQRT2_FRACTION).sub(fraction)
+              .lanewise(VectorOperators.LSHR, 63);
+      fraction
+          .or(LongVector.broadcast(L, BoxMuller.ONE).sub(halve.lanewise(VectorOperators.LSHL, 52)))
+          .reinterpretAsDoubles().intoArray(mantissa, e);
+      u.lanewise(VectorOperators.LSHR, 52).add(halve).or(WHOLE).reinterpretAsDoubles()
+          .sub(0x1p52 + 1023).intoArray(exponent, e);
     }
   }
 
@@ -72,12 +72,11 @@ public final class VectorNormals implements NormalKernels {
               .add(1L << 49);
       centred.and((1L << 50) - 1).or(WHOLE).reinterpretAsDoubles().sub(0x1p52).sub(0x1p49)
           .mul(2 * Math.PI * 0x1p-52).intoArray(angle, e);
-      LongVector quarter = centred.lanewise(VectorOperators.LSHR, 50).and(3);
-      DoubleVector zero = DoubleVector.zero(D);
-      zero.blend(1, quarter.compare(VectorOperators.EQ, 0).cast(D))
-          .blend(-1, quarter.compare(VectorOperators.EQ, 2).cast(D)).intoArray(quarterCos, e);
-      zero.blend(1, quarter.compare(VectorOperators.EQ, 1).cast(D))
-          .blend(-1, quarter.compare(VectorOperators.EQ, 3).cast(D)).intoArray(quarterSin, e);
+      LongVector quarter = centred.lanewise(VectorOperators.LSHR, 50);
+      LongVector odd = quarter.and(1);
+      LongVector one = quarter.and(2).lanewise(VectorOperators.LSHL, 62).or(BoxMuller.ONE);
+      one.and(odd.sub(1)).reinterpretAsDoubles().intoArray(quarterCos, e);
+      one.and(LongVector.zero(L).sub(odd)).reinterpretAsDoubles().intoArray(quarterSin, e);
     }
   }
 
