@@ -16,8 +16,9 @@ public final class AllocationMeter {
 
   /**
    * Runs an action until it is warm, then counts over several groups of calls, more of them as long
-   * as every group allocated, and gives the group with the fewest bytes. What a call allocates is in every group; what the virtual machine books
-   * on this thread now and then (a deoptimised frame, the end of an allocation buffer) is not.
+   * as every group allocated, and gives the group with the fewest bytes. What a call allocates is in
+   * every group; what the virtual machine books on this thread now and then (a deoptimised frame, the
+   * end of an allocation buffer) is not.
    *
    * @param action what to measure
    * @return bytes for each call; below 1 if calls allocate nothing, at least 16 if each makes an
@@ -31,9 +32,7 @@ public final class AllocationMeter {
     }
     threads.getThreadAllocatedBytes(self);
     long fewest = Long.MAX_VALUE;
-    for (int group = 0;
-        group < FEWEST_GROUPS || (fewest >= CALLS && group < MOST_GROUPS);
-        group++) {
+    for (int g = 0; g < FEWEST_GROUPS || (fewest >= CALLS && g < MOST_GROUPS); g++) {
       long before = threads.getThreadAllocatedBytes(self);
       for (int i = 0; i < CALLS; i++) {
         action.run();
