@@ -15,6 +15,7 @@ import picocli.CommandLine.Option;
 import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Spec;
 import spgpe.examples.scenario.OblateScenario;
+import spgpe.examples.scenario.ShortErrors;
 import spgpe.theory.CoupledPair;
 import spgpe.theory.PlanarBubble;
 import spgpe.units.Temperature;
@@ -120,19 +121,7 @@ public final class OblateDecayCommand implements Callable<Integer> {
    * @return the command line
    */
   static CommandLine commandLine() {
-    CommandLine line = new CommandLine(new OblateDecayCommand());
-    line.setParameterExceptionHandler(
-        (wrong, arguments) -> {
-          wrong.getCommandLine().getErr().println(
-              "oblate-decay: " + wrong.getMessage() + " (see --help)");
-          return 2;
-        });
-    line.setExecutionExceptionHandler(
-        (failure, command, parsed) -> {
-          command.getErr().println("oblate-decay: " + failure.getMessage());
-          return failure instanceof IllegalArgumentException ? 2 : 1;
-        });
-    return line;
+    return ShortErrors.on(new CommandLine(new OblateDecayCommand()));
   }
 
   @Override

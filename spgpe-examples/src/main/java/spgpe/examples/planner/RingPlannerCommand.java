@@ -11,6 +11,7 @@ import picocli.CommandLine.Option;
 import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Spec;
 import spgpe.examples.scenario.RingScenario;
+import spgpe.examples.scenario.ShortErrors;
 import spgpe.planning.ShotPlan;
 import spgpe.planning.StepTiming;
 import spgpe.units.Energy;
@@ -173,19 +174,7 @@ public final class RingPlannerCommand implements Callable<Integer> {
    * @return the command line
    */
   public static CommandLine commandLine() {
-    CommandLine line = new CommandLine(new RingPlannerCommand());
-    line.setParameterExceptionHandler(
-        (wrong, arguments) -> {
-          wrong.getCommandLine().getErr().println(
-              "ring-planner: " + wrong.getMessage() + " (see --help)");
-          return 2;
-        });
-    line.setExecutionExceptionHandler(
-        (failure, command, parsed) -> {
-          command.getErr().println("ring-planner: " + failure.getMessage());
-          return failure instanceof IllegalArgumentException ? 2 : 1;
-        });
-    return line;
+    return ShortErrors.on(new CommandLine(new RingPlannerCommand()));
   }
 
   @Override

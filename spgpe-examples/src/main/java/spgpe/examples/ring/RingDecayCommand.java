@@ -19,6 +19,7 @@ import picocli.CommandLine.Option;
 import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Spec;
 import spgpe.examples.scenario.RingScenario;
+import spgpe.examples.scenario.ShortErrors;
 import spgpe.planning.ShotPlan;
 import spgpe.run.TimeSeries;
 import spgpe.units.Temperature;
@@ -112,19 +113,7 @@ public final class RingDecayCommand implements Callable<Integer> {
    * @return the command line
    */
   public static CommandLine commandLine() {
-    CommandLine line = new CommandLine(new RingDecayCommand());
-    line.setParameterExceptionHandler(
-        (wrong, arguments) -> {
-          wrong.getCommandLine().getErr().println(
-              "ring-decay: " + wrong.getMessage() + " (see --help)");
-          return 2;
-        });
-    line.setExecutionExceptionHandler(
-        (failure, command, parsed) -> {
-          command.getErr().println("ring-decay: " + failure.getMessage());
-          return failure instanceof IllegalArgumentException ? 2 : 1;
-        });
-    return line;
+    return ShortErrors.on(new CommandLine(new RingDecayCommand()));
   }
 
   @Override

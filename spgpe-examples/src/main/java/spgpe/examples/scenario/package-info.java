@@ -1,4 +1,4 @@
-/** The invented experiment that the commands share. */
+/** What the commands share: the invented experiments and the way to report errors. */
 @NullMarked
 package spgpe.examples.scenario;
 
