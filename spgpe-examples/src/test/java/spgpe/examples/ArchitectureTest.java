@@ -48,6 +48,7 @@ class ArchitectureTest {
   private static final JavaClasses CODE =
       new ClassFileImporter()
           .withImportOption(ImportOption.Predefined.DO_NOT_INCLUDE_TESTS)
+          .withImportOption(location -> !location.contains("-tests.jar"))
           .importPackages("spgpe");
 
   /** What each package of the core may import of the project, next to itself and the checks. */

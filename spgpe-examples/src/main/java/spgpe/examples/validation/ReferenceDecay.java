@@ -108,7 +108,7 @@ public final class ReferenceDecay {
   /** Runs trajectories 0 to count-1. */
   static Outcome measure(long count, long seed, Executor executor, ProgressListener listener) {
     // 100 points: the reference's correlations are taken at multiples of 0.48
-    CoherentRegion region = Projector.modesUpTo(24).on(PeriodicGrid.of(Axis.of(128, 48)));
+    CoherentRegion region = Projector.modesUpTo(24).on(PeriodicGrid.of(Axis.of(100, 48)));
     Model model =
         Model.of(
             region,
