@@ -217,13 +217,13 @@ public final class EquilibriumComparison {
   /**
    * Prints the comparison.
    *
-   * @param arguments step (default 0.025), trajectories (default 64), end (default 2100), threads
+   * @param arguments step (default 0.025), trajectories (default 64), end (default 8100), threads
    *     (default 2), number of the set (default all: 0 and 1 are A, 2 is B)
    */
   public static void main(String[] arguments) {
     double step = arguments.length > 0 ? Double.parseDouble(arguments[0]) : 0.025;
     long trajectories = arguments.length > 1 ? Long.parseLong(arguments[1]) : 64;
-    double end = arguments.length > 2 ? Double.parseDouble(arguments[2]) : 2100;
+    double end = arguments.length > 2 ? Double.parseDouble(arguments[2]) : 8100;
     int threads = arguments.length > 3 ? Integer.parseInt(arguments[3]) : 2;
     List<Setting> chosen =
         arguments.length > 4
