@@ -2,6 +2,7 @@ package spgpe.run;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.TreeMap;
 
 /**
@@ -61,9 +62,9 @@ final class TrajectoryPool {
    *     that wait are left for the one who begins them
    */
   synchronized Block take(boolean mayBegin) {
-    for (long step : waiting.descendingKeySet()) {
-      if (waiting.get(step).size() >= lanes) {
-        return waitingBlock(step);
+    for (Map.Entry<Long, List<OpenTrajectory>> at : waiting.descendingMap().entrySet()) {
+      if (at.getValue().size() >= lanes) {
+        return waitingBlock(at.getKey(), at.getValue());
       }
     }
     if (next < end && mayBegin) {
@@ -73,9 +74,10 @@ final class TrajectoryPool {
       }
       return block(fresh, 0);
     }
-    return next < end || waiting.isEmpty()
+    Map.Entry<Long, List<OpenTrajectory>> farthestBack = waiting.firstEntry();
+    return next < end || farthestBack == null
         ? block(List.of(), 0)
-        : waitingBlock(waiting.firstKey());
+        : waitingBlock(farthestBack.getKey(), farthestBack.getValue());
   }
 
   /** Takes back what is open at the end of a block's window. */
@@ -85,8 +87,7 @@ final class TrajectoryPool {
     }
   }
 
-  private Block waitingBlock(long step) {
-    List<OpenTrajectory> all = waiting.get(step);
+  private Block waitingBlock(long step, List<OpenTrajectory> all) {
     List<OpenTrajectory> chosen = all.subList(0, Math.min(lanes, all.size()));
     Block block = block(List.copyOf(chosen), step);
     chosen.clear();
