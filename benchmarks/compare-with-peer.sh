@@ -31,6 +31,12 @@ ensemble-1024-plain   coupled_rk4ip_fftw      plain  1024 Rk4Ip 16 line
 default-256-plain     coupled_ou_rk4_ou_fftw  plain  256  OuRk4 64 line
 single-256-plain      coupled_rk4ip_fftw      plain  256  Rk4Ip 1  line
 single-1024-plain     coupled_rk4ip_fftw      plain  1024 Rk4Ip 1  line
+plane-64-vector       coupled_2d_rk4ip_fftw   vector   64  Rk4Ip 1 plane
+plane-128-vector      coupled_2d_rk4ip_fftw   vector   128 Rk4Ip 1 plane
+plane-256-vector      coupled_2d_rk4ip_fftw   vector   256 Rk4Ip 1 plane
+plane-64-plain        coupled_2d_rk4ip_fftw   plain    64  Rk4Ip 1 plane
+plane-128-plain       coupled_2d_rk4ip_fftw   plain    128 Rk4Ip 1 plane
+plane-256-plain       coupled_2d_rk4ip_fftw   plain    256 Rk4Ip 1 plane
 plane-64-provider     coupled_2d_rk4ip_fftw   provider 64  Rk4Ip 1 plane
 plane-128-provider    coupled_2d_rk4ip_fftw   provider 128 Rk4Ip 1 plane
 plane-256-provider    coupled_2d_rk4ip_fftw   provider 256 Rk4Ip 1 plane

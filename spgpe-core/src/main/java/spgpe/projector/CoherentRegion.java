@@ -244,17 +244,22 @@ public final class CoherentRegion {
   public int bestLanes(Engine engine, long atMost) {
     Check.notNull(engine, "engine");
     Check.argument(atMost >= 1, "largest number of lanes must be >= 1: atMost=%s", atMost);
-    return isServedBy(engine) ? engine.bestLanes(grid.points(), atMost) : 1;
+    return isServedBy(engine) && grid.dimension() == 1
+        ? engine.bestLanes(grid.points(), atMost)
+        : 1;
   }
 
-  /** Whether it is an engine of this library and the region a line that it can do. */
+  /** Whether it is an engine of this library and the region one that it can do. */
   private boolean isServedBy(Engine engine) {
-    int points = grid.points();
-    return engine != Engine.PROVIDER
-        && grid.dimension() == 1
-        && Integer.bitCount(points) == 1
-        && points >= LaneFourier.FEWEST_POINTS
-        && 4 * largestMode(0) < points;
+    boolean served = engine != Engine.PROVIDER;
+    for (int axis = 0; axis < grid.dimension(); axis++) {
+      int points = grid.axis(axis).points();
+      served &=
+          Integer.bitCount(points) == 1
+              && points >= LaneFourier.FEWEST_POINTS
+              && 4 * largestMode(axis) < points;
+    }
+    return served;
   }
 
   int gridIndex(int mode) {

@@ -61,7 +61,7 @@ public enum Engine {
     return AUTOMATIC;
   }
 
-  /** A transform of a line that fills at most half of its axis. */
+  /** A transform of a region that fills at most half of each axis. */
   ModeTransform transform(CoherentRegion region, int components, int lanes) {
     Optional<LaneKernels> vector =
         this == PLAIN
@@ -70,6 +70,11 @@ public enum Engine {
     Check.state(
         this != VECTOR || vector.isPresent(),
         "engine VECTOR needs the vector module: start Java with --add-modules jdk.incubator.vector");
+    if (region.grid().dimension() == 2) {
+      log(vector.isPresent() ? "vector instructions" : "plain Java", lanes);
+      return new HalfBandPlane(
+          region, components, lanes, vector.orElseGet(ScalarKernels::new));
+    }
     if (vector.isPresent() && lanes % vector.get().width() == 0) {
       log("vector instructions", lanes);
       return new HalfBandLine(region, components, lanes, vector.get());

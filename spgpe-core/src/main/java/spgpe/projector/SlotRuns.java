@@ -44,4 +44,30 @@ final class SlotRuns {
       System.arraycopy(slots, places[r], to, modes[r], lengths[r]);
     }
   }
+
+  /** One of several lanes of modes to slots of one lane. */
+  void spread(double[] from, int lanes, int lane, double[] slots) {
+    if (lanes == 1) {
+      spread(from, slots);
+      return;
+    }
+    for (int r = 0; r < count; r++) {
+      for (int i = 0, m = modes[r] * lanes + lane; i < lengths[r]; i++, m += lanes) {
+        slots[places[r] + i] = from[m];
+      }
+    }
+  }
+
+  /** Slots of one lane to one of several lanes of modes. */
+  void collect(double[] slots, double[] to, int lanes, int lane) {
+    if (lanes == 1) {
+      collect(slots, to);
+      return;
+    }
+    for (int r = 0; r < count; r++) {
+      for (int i = 0, m = modes[r] * lanes + lane; i < lengths[r]; i++, m += lanes) {
+        to[m] = slots[places[r] + i];
+      }
+    }
+  }
 }

@@ -75,9 +75,43 @@ class PlaneTransformTest {
     }
   }
 
+  @Nested
+  class HalfBandEllipse extends ProjectorContract {
+    @Override
+    protected CoherentRegion region() {
+      return Projector.belowWaveNumber(3).on(plane(64, 30, 32, 14));
+    }
+
+    @Override
+    protected Engine engine() {
+      return Engine.VECTOR;
+    }
+  }
+
+  @Nested
+  class HalfBandRectangle extends ProjectorContract {
+    @Override
+    protected CoherentRegion region() {
+      return Projector.modesUpTo(7, 15).on(plane(32, 3, 64, 11));
+    }
+
+    @Override
+    protected Engine engine() {
+      return Engine.PLAIN;
+    }
+  }
+
   @Test
   void bothWaysArePlainSums() {
-    CoherentRegion region = Projector.belowWaveNumber(3.1).on(plane(12, 6, 10, 4));
+    CoherentRegion small = Projector.belowWaveNumber(3.1).on(plane(12, 6, 10, 4));
+    assertPlainSums(small, small.transform(1, 1, PROVIDER));
+    CoherentRegion halfBand = Projector.belowWaveNumber(3.1).on(plane(32, 12, 64, 20));
+    for (Engine engine : Engine.values()) {
+      assertPlainSums(halfBand, halfBand.transform(1, 1, PROVIDER, engine));
+    }
+  }
+
+  private static void assertPlainSums(CoherentRegion region, ModeTransform transform) {
     PeriodicGrid grid = region.grid();
     SplittableRandom random = new SplittableRandom(11);
     Amplitudes state = new Amplitudes(region, 1, 1);
@@ -92,7 +126,6 @@ class PlaneTransformTest {
     }
     Field field = new Field(grid, 1, 1);
     Amplitudes modes = new Amplitudes(region, 1, 1);
-    ModeTransform transform = region.transform(1, 1, PROVIDER);
     transform.toPosition(state, field);
     transform.toModes(given, modes);
     double[] modesRe = new double[region.modes()];

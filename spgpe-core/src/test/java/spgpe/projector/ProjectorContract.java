@@ -35,8 +35,17 @@ public abstract class ProjectorContract {
     return FourierProviders.preferred();
   }
 
+  /**
+   * What does the transforms.
+   *
+   * @return the engine; the Fourier back end unless overridden
+   */
+  protected Engine engine() {
+    return Engine.PROVIDER;
+  }
+
   private ModeTransform transform(int components, int lanes) {
-    return region().transform(components, lanes, provider());
+    return region().transform(components, lanes, provider(), engine());
   }
 
   private Amplitudes randomState(long seed, int components, int lanes) {

@@ -8,12 +8,19 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.stream.Collectors;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
 import spgpe.integrate.OuRk4;
 import spgpe.integrate.Rk4Ip;
+import spgpe.integrate.Stepper;
+import spgpe.internal.check.AllocationMeter;
+import spgpe.model.Model;
+import spgpe.projector.Amplitudes;
 import spgpe.projector.Engine;
+import spgpe.reservoir.NoiseGenerator;
+import spgpe.reservoir.RandomStreams;
 
 /** Engines, lanes and vector widths change the speed of a noisy run and no bit of its result. */
 class EngineBitsTest {
@@ -26,12 +33,38 @@ class EngineBitsTest {
     assertEquals(expected, EngineDigest.of(Engine.AUTOMATIC, lanes));
   }
 
+  @ParameterizedTest
+  @ValueSource(ints = {1, 2, 4})
+  void onAPlaneEveryNumberOfLanesAndEveryEngineGivesTheSameBits(int lanes) {
+    long expected = EngineDigest.ofPlane(Engine.PLAIN, 1);
+    assertEquals(expected, EngineDigest.ofPlane(Engine.PLAIN, lanes));
+    assertEquals(expected, EngineDigest.ofPlane(Engine.VECTOR, lanes));
+  }
+
   @Test
   void theProviderAgreesOverAHundredNoisySteps() {
+    int all = EngineDigest.TRAJECTORIES;
+    int planes = EngineDigest.PLANES;
     for (var scheme : List.of(OuRk4.ofStep(0.02), Rk4Ip.ofStep(0.02))) {
       assertArrayEquals(
-          EngineDigest.states(Engine.PROVIDER, 1, scheme, 100),
-          EngineDigest.states(Engine.VECTOR, 8, scheme, 100), 1e-12);
+          EngineDigest.states(EngineDigest.model(Engine.PROVIDER), 1, all, scheme, 100),
+          EngineDigest.states(EngineDigest.model(Engine.VECTOR), 8, all, scheme, 100), 1e-12);
+      assertArrayEquals(
+          EngineDigest.states(EngineDigest.plane(Engine.PROVIDER), 1, planes, scheme, 100),
+          EngineDigest.states(EngineDigest.plane(Engine.VECTOR), 1, planes, scheme, 100), 1e-12);
+    }
+  }
+
+  @Test
+  void aStepOnAPlaneAllocatesNothing() {
+    for (Engine engine : List.of(Engine.PLAIN, Engine.VECTOR)) {
+      Model model = EngineDigest.plane(engine);
+      NoiseGenerator noise = RandomStreams.counterBased(8).generator(model.region(), 2, 1);
+      noise.assign(0, 0);
+      Stepper stepper = Rk4Ip.ofStep(0.02).bind(model, noise, 1);
+      stepper.start(new Amplitudes(model.region(), 2, 1), 0);
+      double bytes = AllocationMeter.bytesPerCall(stepper::advance);
+      assertTrue(bytes < 1, engine + ", bytes for each step: " + bytes);
     }
   }
 
@@ -45,15 +78,24 @@ class EngineBitsTest {
     Process process = new ProcessBuilder(command).redirectErrorStream(true).start();
     String output = new String(process.getInputStream().readAllBytes());
     process.waitFor();
-    return output.lines().filter(line -> line.startsWith("digest")).findFirst().orElse(output);
+    String digests =
+        output
+            .lines()
+            .filter(line -> line.startsWith("digest") || line.startsWith("plane"))
+            .collect(Collectors.joining(" "));
+    return digests.isEmpty() ? output : digests;
+  }
+
+  private static String plainDigests() {
+    long line = EngineDigest.of(Engine.PLAIN, 1);
+    return "digest " + line + " " + line + " plane " + EngineDigest.ofPlane(Engine.PLAIN, 1);
   }
 
   @ParameterizedTest
   @ValueSource(ints = {128, 256, 512})
   void everyVectorWidthGivesTheSameBits(int bits) throws Exception {
-    long expected = EngineDigest.of(Engine.PLAIN, 1);
     assertEquals(
-        "digest " + expected + " " + expected,
+        plainDigests(),
         run(
             "--add-modules", "jdk.incubator.vector", "-Dspgpe.engine=vector",
             "-Dspgpe.engine.bits=" + bits));
@@ -61,8 +103,7 @@ class EngineBitsTest {
 
   @Test
   void withoutTheModuleTheResultIsTheSameAndVectorIsRefused() throws Exception {
-    long expected = EngineDigest.of(Engine.PLAIN, 1);
-    assertEquals("digest " + expected + " " + expected, run());
+    assertEquals(plainDigests(), run());
     String refusal = run("-Dspgpe.engine=vector");
     assertTrue(refusal.contains("--add-modules jdk.incubator.vector"), refusal);
   }
