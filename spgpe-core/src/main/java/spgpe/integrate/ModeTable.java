@@ -1,5 +1,6 @@
 package spgpe.integrate;
 
+import java.util.Arrays;
 import spgpe.internal.linear.ComplexMatrix;
 import spgpe.projector.Amplitudes;
 
@@ -48,25 +49,61 @@ final class ModeTable {
   /** out = table times in; in and out must differ. */
   void multiply(Amplitudes in, Amplitudes out) {
     for (int i = 0; i < components; i++) {
-      java.util.Arrays.fill(out.re(i), 0);
-      java.util.Arrays.fill(out.im(i), 0);
+      multiply(i, in, out, true);
     }
-    multiplyAdd(in, out);
   }
 
   /** out += table times in; in and out must differ. */
   void multiplyAdd(Amplitudes in, Amplitudes out) {
     for (int i = 0; i < components; i++) {
-      for (int j = 0; j < components; j++) {
-        double[] real = re[i * components + j];
-        double[] imaginary = im[i * components + j];
-        if (imaginary.length > 0) {
-          addComplex(real, imaginary, in.re(j), in.im(j), out.re(i), out.im(i));
-        } else if (real.length > 0) {
-          addReal(real, in.re(j), out.re(i));
-          addReal(real, in.im(j), out.im(i));
-        }
+      multiply(i, in, out, false);
+    }
+  }
+
+  /** One row of the matrices. The first element that is not empty may overwrite what was there. */
+  private void multiply(int i, Amplitudes in, Amplitudes out, boolean overwrite) {
+    boolean first = overwrite;
+    for (int j = 0; j < components; j++) {
+      double[] real = re[i * components + j];
+      double[] imaginary = im[i * components + j];
+      if (real.length == 0) {
+        continue;
       }
+      if (first) {
+        if (imaginary.length > 0) {
+          setComplex(real, imaginary, in.re(j), in.im(j), out.re(i), out.im(i));
+        } else {
+          setReal(real, in.re(j), out.re(i));
+          setReal(real, in.im(j), out.im(i));
+        }
+        first = false;
+      } else if (imaginary.length > 0) {
+        addComplex(real, imaginary, in.re(j), in.im(j), out.re(i), out.im(i));
+      } else {
+        addReal(real, in.re(j), out.re(i));
+        addReal(real, in.im(j), out.im(i));
+      }
+    }
+    if (first) {
+      Arrays.fill(out.re(i), 0);
+      Arrays.fill(out.im(i), 0);
+    }
+  }
+
+  private static void setReal(double[] factor, double[] in, double[] out) {
+    for (int e = 0; e < factor.length; e++) {
+      out[e] = factor[e] * in[e];
+    }
+  }
+
+  private static void setComplex(
+      double[] real, double[] imaginary, double[] inRe, double[] inIm, double[] outRe,
+      double[] outIm) {
+    for (int e = 0; e < real.length; e++) {
+      double x = inRe[e];
+      double y = inIm[e];
+      outRe[e] = real[e] * x - imaginary[e] * y;
+      outIm[e] = real[e] * y + imaginary[e] * x;
     }
   }
 

@@ -7,6 +7,9 @@ import spgpe.internal.lanes.LaneLayout;
 
 /** The half-band transform on one array for all points, by {@link LaneKernels}. */
 final class HalfBandLine extends HalfBandTransform {
+  /** Most doubles of a block of points: psi and result of a pair fit into the nearest cache. */
+  private static final int BLOCK = 256;
+
   private final LaneFourier fourier;
   private final LaneLayout layout;
   private final SlotRuns runs;
@@ -51,7 +54,8 @@ final class HalfBandLine extends HalfBandTransform {
       sumIm[c] = layout.newArray(4 * c + 3);
     }
     this.points = new int[LaneFourier.HALVES][layout.points()];
-    int chunk = layout.chunkPoints();
+    int chunk =
+        Math.min(layout.chunkPoints(), Integer.highestOneBit(Math.max(1, BLOCK / lanes)));
     this.blocks = new PointBlock[LaneFourier.HALVES][layout.points() / chunk];
     for (int h = 0; h < LaneFourier.HALVES; h++) {
       for (int row = 0; row < layout.points(); row++) {
@@ -87,12 +91,6 @@ final class HalfBandLine extends HalfBandTransform {
   @Override
   void toModes(int half, int c) {
     fourier.toModes(half, resultRe[c], resultIm[c], sumRe[c], sumIm[c]);
-  }
-
-  @Override
-  void clearResult(int c) {
-    Arrays.fill(resultRe[c], 0);
-    Arrays.fill(resultIm[c], 0);
   }
 
   @Override

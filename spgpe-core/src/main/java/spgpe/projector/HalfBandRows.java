@@ -1,6 +1,5 @@
 package spgpe.projector;
 
-import java.util.Arrays;
 import spgpe.internal.lanes.LaneFourier;
 import spgpe.internal.lanes.RowFourier;
 
@@ -86,14 +85,6 @@ final class HalfBandRows extends HalfBandTransform {
   @Override
   void toModes(int half, int c) {
     fourier.toModes(half, resultRe[c], resultIm[c], sumRe[c], sumIm[c]);
-  }
-
-  @Override
-  void clearResult(int c) {
-    for (int row = 0; row < resultRe[c].length; row++) {
-      Arrays.fill(resultRe[c][row], 0);
-      Arrays.fill(resultIm[c][row], 0);
-    }
   }
 
   @Override

@@ -35,8 +35,6 @@ abstract class HalfBandTransform implements ModeTransform {
   /** From the result on one half of the points to the slots; the even half comes first. */
   abstract void toModes(int half, int component);
 
-  abstract void clearResult(int component);
-
   /** Blocks of one half of the points. */
   abstract PointBlock[] blocks(int half);
 
@@ -84,9 +82,9 @@ abstract class HalfBandTransform implements ModeTransform {
     for (int h = 0; h < LaneFourier.HALVES; h++) {
       for (int c = 0; c < components; c++) {
         toPoints(h, c);
-        clearResult(c);
       }
       for (PointBlock block : blocks(h)) {
+        block.clearResult(); // block by block: it stays in the nearest cache
         operation.addTo(block);
       }
       for (int c = 0; c < components; c++) {

@@ -1,5 +1,6 @@
 package spgpe.projector;
 
+import java.util.Arrays;
 import spgpe.grid.PeriodicGrid;
 import spgpe.internal.check.Check;
 
@@ -150,6 +151,13 @@ public final class PointBlock {
    */
   public double[] resultIm(int component) {
     return resultIm[component];
+  }
+
+  void clearResult() {
+    for (int c = 0; c < resultRe.length; c++) {
+      Arrays.fill(resultRe[c], begin, end, 0);
+      Arrays.fill(resultIm[c], begin, end, 0);
+    }
   }
 
   /**

@@ -135,16 +135,10 @@ public final class LaneFourier {
       rows /= 4;
     }
     if (rows == 8) {
-      int length = layout.at(4 * lanes);
-      for (int b = 0; b < blocks; b++) {
-        kernels.points2(
-            re, im, twiddles.re[first + b], twiddles.im[first + b],
-            layout.at((row + 8 * b) * lanes), length);
-      }
-      first *= 2;
-      blocks *= 2;
+      kernels.pointLeaves8(re, im, leaves, first, first + blocks, row);
+    } else {
+      kernels.pointLeaves(re, im, leaves, first, first + blocks, row);
     }
-    kernels.pointLeaves(re, im, leaves, first, first + blocks, row);
   }
 
   private void points4(
@@ -201,18 +195,14 @@ public final class LaneFourier {
   }
 
   private void modePasses(double[] re, double[] im, int block, int count, int row, int size) {
-    int leafBlocks = count * size / 4;
-    int firstLeaf = block * size / 4;
-    kernels.modeLeaves(re, im, leaves, firstLeaf, firstLeaf + leafBlocks, row);
-    int rows = 4;
-    if (Integer.numberOfTrailingZeros(size) % 2 == 1) {
-      int length = layout.at(4 * lanes);
-      for (int b = 0; b < leafBlocks / 2; b++) {
-        int w = firstLeaf / 2 + b;
-        kernels.modes2(
-            re, im, twiddles.re[w], twiddles.im[w], layout.at((row + 8 * b) * lanes), length);
-      }
-      rows = 8;
+    boolean odd = Integer.numberOfTrailingZeros(size) % 2 == 1;
+    int rows = odd ? 8 : 4;
+    int leafBlocks = count * size / rows;
+    int firstLeaf = block * size / rows;
+    if (odd) {
+      kernels.modeLeaves8(re, im, leaves, firstLeaf, firstLeaf + leafBlocks, row);
+    } else {
+      kernels.modeLeaves(re, im, leaves, firstLeaf, firstLeaf + leafBlocks, row);
     }
     for (; rows < size; rows *= 4) {
       int each = size / (4 * rows);

@@ -107,6 +107,52 @@ public interface LaneKernels {
       int firstRow);
 
   /**
+   * To points, radix 8, in place on blocks of eight neighbouring rows: radix 2, then 4.
+   *
+   * @param re real parts of the rows
+   * @param im imaginary parts of the rows
+   * @param leaves twiddle factors and layout
+   * @param firstBlock number of the first block of eight rows
+   * @param lastBlock one past the last block
+   * @param firstRow first row
+   */
+  default void pointLeaves8(
+      double[] re, double[] im, LaneFourier.Leaves leaves, int firstBlock, int lastBlock,
+      int firstRow) {
+    Twiddles twiddles = leaves.twiddles();
+    LaneLayout layout = leaves.layout();
+    int length = layout.at(4 * layout.lanes());
+    for (int block = firstBlock, row = firstRow; block < lastBlock; block++, row += 8) {
+      points2(
+          re, im, twiddles.re[block], twiddles.im[block], layout.at(row * layout.lanes()), length);
+    }
+    pointLeaves(re, im, leaves, 2 * firstBlock, 2 * lastBlock, firstRow);
+  }
+
+  /**
+   * To modes, radix 8, in place on blocks of eight neighbouring rows: radix 4, then 2.
+   *
+   * @param re real parts of the rows
+   * @param im imaginary parts of the rows
+   * @param leaves twiddle factors and layout
+   * @param firstBlock number of the first block of eight rows
+   * @param lastBlock one past the last block
+   * @param firstRow first row
+   */
+  default void modeLeaves8(
+      double[] re, double[] im, LaneFourier.Leaves leaves, int firstBlock, int lastBlock,
+      int firstRow) {
+    modeLeaves(re, im, leaves, 2 * firstBlock, 2 * lastBlock, firstRow);
+    Twiddles twiddles = leaves.twiddles();
+    LaneLayout layout = leaves.layout();
+    int length = layout.at(4 * layout.lanes());
+    for (int block = firstBlock, row = firstRow; block < lastBlock; block++, row += 8) {
+      modes2(
+          re, im, twiddles.re[block], twiddles.im[block], layout.at(row * layout.lanes()), length);
+    }
+  }
+
+  /**
    * To modes, radix 2, in place.
    *
    * @param re real parts of the rows
