@@ -107,15 +107,14 @@ class MemoryTest {
 
   /**
    * In units of the kept modes themselves (0.52 MB here). Each lane of the default has 6 states
-   * (state, two sets of normals, start of the step, stage, force), 9 of tables of the linear flow
-   * and its noise, repeated for each lane, and 8.1 of field and force at the positions, which are
-   * four times as many as the modes. The lanes of a thread share 1 more (transform, masses and
-   * such). A trajectory that waits for a lane holds two states. The test sees any further state
+   * (state, two sets of normals, start of the step, stage, force) and 9 of tables of the linear flow
+   * and its noise, repeated for each lane. The lanes of a thread share 3.5 more: the points of one
+   * parity of rows, transform, masses and such. A trajectory that waits for a lane holds two states. The test sees any further state
    * or table.
    */
   @Test
   void whatAStepperHolds() throws IllegalAccessException {
-    assertHeld(OuRk4.ofStep(0.01), 6, 23.2, 1.1);
-    assertHeld(Rk4Ip.ofStep(0.01), 8, 18.2, 1.1);
+    assertHeld(OuRk4.ofStep(0.01), 6, 15.1, 3.6);
+    assertHeld(Rk4Ip.ofStep(0.01), 8, 10.1, 3.6);
   }
 }
