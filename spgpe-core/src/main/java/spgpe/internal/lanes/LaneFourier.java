@@ -12,7 +12,7 @@ package spgpe.internal.lanes;
  * each block): slots in natural order, points in bit-reversed order. The way back takes the adjoint
  * steps in reverse.
  *
- * <p>Passes of radix 4, and one of radix 2 if the number of points is not right; parts that fit into
+ * <p>Passes of radix 4, and one of radix 8 if the number of points is not right; parts that fit into
  * the first-level cache are finished one after the other. Immutable; arrays belong to the caller and
  * have the layout of {@link #layout}.
  */
