@@ -32,6 +32,9 @@ public abstract class AbstractStepper implements Stepper {
   private boolean started;
   private boolean atSymmetricPoint;
 
+  /** Whether {@link #normals} are already those of the next step, drawn for a look. */
+  private boolean isDrawn;
+
   /**
    * Makes a stepper without state.
    *
@@ -57,6 +60,7 @@ public abstract class AbstractStepper implements Stepper {
     step = firstStep;
     started = true;
     atSymmetricPoint = true;
+    isDrawn = false;
     setRefinement(0);
   }
 
@@ -65,11 +69,12 @@ public abstract class AbstractStepper implements Stepper {
     if (!started) { // allocates nothing in a step
       throw new IllegalStateException("start(state, firstStep) must be called before advance()");
     }
-    if (isNoisy()) {
+    if (isNoisy() && !isDrawn) {
       noise.fill(step, atSymmetricPoint ? NoiseUse.START : NoiseUse.WHOLE, normals);
     }
     step(atSymmetricPoint, normals, step * dt);
     atSymmetricPoint = false;
+    isDrawn = false;
     step++;
   }
 
@@ -84,7 +89,10 @@ public abstract class AbstractStepper implements Stepper {
       return;
     }
     if (isNoisy()) {
-      noise.fill(step, NoiseUse.WHOLE, normals);
+      if (!isDrawn) {
+        noise.fill(step, NoiseUse.WHOLE, normals);
+        isDrawn = true;
+      }
       noise.fill(step, NoiseUse.REST_OF_HALF, rest);
     }
     toSymmetricPoint(normals, rest, target);
@@ -126,7 +134,8 @@ public abstract class AbstractStepper implements Stepper {
    *
    * @param fromSymmetricPoint true if only half of the noise is to be taken, because the other half
    *     is already in the state
-   * @param normals standard normals of this noise (real and imaginary parts of variance 1)
+   * @param normals standard normals of this noise (real and imaginary parts of variance 1); read
+   *     only
    * @param time time at the begin of the step
    */
   protected abstract void step(boolean fromSymmetricPoint, Amplitudes normals, double time);
@@ -134,7 +143,7 @@ public abstract class AbstractStepper implements Stepper {
   /**
    * Writes the state half way through the noise that the next step will take.
    *
-   * @param normals the normals that the next step will get
+   * @param normals the normals that the next step will get; read only
    * @param rest further normals, to draw the half given the whole
    * @param target overwritten; {@link #state} must not change
    */
