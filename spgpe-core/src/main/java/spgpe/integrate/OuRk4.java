@@ -15,8 +15,9 @@ import spgpe.reservoir.NoiseGenerator;
  *
  * <p>Second order in dt. The bias of the equilibrium occupations does not grow when gamma gets
  * small: at most about 0.1 % where dt eps_max &le; 0.9 and 1 % where dt eps_max &le; 1.8 (gn = 1,
- * docs/validation.md). It does grow with strong damping, to four times as much at gamma = 1. The idea of an exact thermostat step in a splitting is that of Leimkuhler
- * and Matthews, Appl. Math. Res. Express 2013, 34. Immutable and thread-safe.
+ * docs/validation.md). It does grow with strong damping, to four times as much at gamma = 1. The
+ * idea of an exact thermostat step in a splitting is that of Leimkuhler and Matthews, Appl. Math.
+ * Res. Express 2013, 34. Immutable and thread-safe.
  */
 public final class OuRk4 implements Integrator {
   private final double step;

@@ -23,10 +23,6 @@ final class OpenTrajectory {
     return index;
   }
 
-  boolean isFresh() {
-    return lastGood == null;
-  }
-
   void begin(Amplitudes initial, List<Channel<?>> channels) {
     lastGood = initial.copy();
     List<Channel.Probe<?>> own = new ArrayList<>();

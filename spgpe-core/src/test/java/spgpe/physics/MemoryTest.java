@@ -108,9 +108,9 @@ class MemoryTest {
   /**
    * In units of the kept modes themselves (0.52 MB here). Each lane of the default has 6 states
    * (state, two sets of normals, start of the step, stage, force) and 9 of tables of the linear flow
-   * and its noise, repeated for each lane. The lanes of a thread share 3.5 more: half-transformed rows,
-   * the points of a strip, masses and such. A trajectory that waits for a lane holds two states. The test sees any further state
-   * or table.
+   * and its noise, repeated for each lane. The lanes of a thread share 3.5 more: half-transformed
+   * rows, the points of a strip, masses and such. A trajectory that waits for a lane holds two
+   * states. The test sees any further state or table.
    */
   @Test
   void whatAStepperHolds() throws IllegalAccessException {

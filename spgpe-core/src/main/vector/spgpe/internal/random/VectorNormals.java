@@ -8,8 +8,9 @@ import spgpe.internal.vector.VectorShapes;
 
 /**
  * {@link NormalKernels} with vector instructions, operation by operation those of {@link BoxMuller};
- * the loops of {@link Philox} the compiler turns into vector code of its own that is as fast. Whole numbers below 2^52 become doubles by writing them into the fraction of
- * 2^52, which is exact. What does not fill a vector is left to {@link PlainNormals}.
+ * the compiler turns the loops of {@link Philox} into vector code of its own that is as fast. Whole
+ * numbers below 2^52 become doubles by writing them into the fraction of 2^52, which is exact. What
+ * does not fill a vector is left to {@link PlainNormals}.
  */
 public final class VectorNormals implements NormalKernels {
   private static final VectorSpecies<Double> D = VectorShapes.DOUBLES;
